@@ -1,4 +1,4 @@
-import type { CornerRef, EdgeRef } from '../body/types.ts'
+import type { CornerRef, EdgeRef } from './types.ts'
 
 /** How people see an edge: `e1` on the outer loop, `h2.e1` on the second hole. */
 export function edgeName({ loop, edge }: EdgeRef): string {
