@@ -1,0 +1,22 @@
+import type { FacetSpec } from '../evaluate/schema.ts'
+import type { Mate } from './section.ts'
+
+/** The trade's name for a joint's preparation. */
+export function jointForm(facets: readonly FacetSpec[], mate: Mate): string {
+  const tilted = facets.filter(({ tilt }) => tilt !== 0)
+  const [first, second, third] = tilted
+  if (!first) return 'square butt'
+  const letter = mate === 'same' ? 'V' : 'bevel'
+  const rootFace = tilted.length < facets.length ? ' with root face' : ''
+  if (!second) return `single ${letter}${rootFace}`
+  if (third) return 'compound bevel'
+  if (first.tilt > 0 && second.tilt < 0) return `double ${letter}${rootFace}`
+  return `compound ${letter}${rootFace}`
+}
+
+/** Which face the groove opens to. */
+export function grooveOpensTo(facets: readonly FacetSpec[]): 'top' | 'bottom' | 'both' | 'neither' {
+  const top = (facets[0]?.tilt ?? 0) > 0
+  const bottom = (facets.at(-1)?.tilt ?? 0) < 0
+  return top && bottom ? 'both' : top ? 'top' : bottom ? 'bottom' : 'neither'
+}
