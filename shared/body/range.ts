@@ -1,0 +1,21 @@
+import { firstEvent } from './event.ts'
+import type { Body, BodyEvent } from './types.ts'
+
+/** The depths over which the plain contour is right. */
+export interface SoundRange {
+  /** 0, or the event's depth where the drawing is the bottom edge (then the body is told upward from it). */
+  readonly from: number
+  /** The thickness, or the event's depth. */
+  readonly to: number
+  /** No depth at all is sound: only with datum 'root', when even the top contour cannot be reached. */
+  readonly empty: boolean
+  readonly event: BodyEvent | null
+}
+
+export function soundRange(body: Body): SoundRange {
+  const event = firstEvent(body)
+  const { thickness } = body
+  if (!event) return { from: 0, to: thickness, empty: false, event }
+  if (body.datum === 'bottom') return { from: event.depth, to: thickness, empty: false, event }
+  return { from: 0, to: event.depth, empty: body.datum === 'root' && event.depth === 0, event }
+}
