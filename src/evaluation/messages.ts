@@ -1,0 +1,14 @@
+/** What passes between the page and the evaluation worker: an expected failure is a value. */
+export type Outcome<Result> =
+  | { readonly ok: true; readonly result: Result }
+  | { readonly ok: false; readonly code: string; readonly message: string }
+
+export interface Ask<Request> {
+  readonly id: number
+  readonly request: Request
+}
+
+export interface Answer<Result> {
+  readonly id: number
+  readonly outcome: Outcome<Result>
+}

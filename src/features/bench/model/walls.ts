@@ -1,0 +1,140 @@
+import type { SaveSetup } from '../../../../shared/api/setups.ts'
+import { edgeKey } from '../../../../shared/body/names.ts'
+import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { FacetSpec, WallSpec } from '../../../../shared/evaluate/schema.ts'
+import type { JointSpec } from '../../../../shared/setup/schema.ts'
+
+/** Reading and changing walls and joints in the content being edited. mm; degrees, positive outward. */
+
+export type Facets = readonly FacetSpec[]
+
+type Walls = SaveSetup['walls']
+
+export function squareFacets(thickness: number): FacetSpec[] {
+  return [{ depth: thickness, tilt: 0 }]
+}
+
+const indexes = new WeakMap<Walls, ReadonlyMap<string, Facets>>()
+
+/** Facets by edge key; made once per list of walls. */
+function indexOf(walls: Walls): ReadonlyMap<string, Facets> {
+  let index = indexes.get(walls)
+  if (index === undefined) {
+    index = new Map(walls.map((wall) => [edgeKey(wall), wall.facets]))
+    indexes.set(walls, index)
+  }
+  return index
+}
+
+export function facetsOf(content: Pick<SaveSetup, 'walls' | 'plate'>, edge: EdgeRef): Facets {
+  return indexOf(content.walls).get(edgeKey(edge)) ?? squareFacets(content.plate.thickness)
+}
+
+/** The content with new facets for these edges; square walls are left out, as an unnamed edge is square. */
+export function withFacets(
+  content: SaveSetup,
+  edges: readonly EdgeRef[],
+  change: (facets: Facets, edge: EdgeRef) => Facets,
+): SaveSetup {
+  const index = new Map(indexOf(content.walls))
+  let changed = false
+  for (const edge of edges) {
+    const before = facetsOf(content, edge)
+    const after = change(before, edge)
+    if (sameFacets(before, after)) continue
+    changed = true
+    if (isSquare(after)) index.delete(edgeKey(edge))
+    else index.set(edgeKey(edge), after)
+  }
+  return changed ? { ...content, walls: wallsFrom(index) } : content
+}
+
+function wallsFrom(index: ReadonlyMap<string, Facets>): WallSpec[] {
+  return [...index]
+    .map(([key, facets]) => {
+      const [loop, edge] = key.split('-').map(Number) as [number, number]
+      return { loop, edge, facets: [...facets] }
+    })
+    .sort((a, b) => a.loop - b.loop || a.edge - b.edge)
+}
+
+export function isSquare(facets: Facets): boolean {
+  return facets.every(({ tilt }) => tilt === 0)
+}
+
+export function sameFacets(a: Facets, b: Facets): boolean {
+  return (
+    a.length === b.length && a.every((facet, i) => facet.depth === b[i]!.depth && facet.tilt === b[i]!.tilt)
+  )
+}
+
+export function withTilt(facets: Facets, facet: number, tilt: number): Facets {
+  return facets.map((each, i) => (i === facet ? { ...each, tilt } : each))
+}
+
+/** Heights of the facets, from the top. */
+export function heightsOf(facets: Facets): number[] {
+  return facets.map(({ depth }, i) => depth - (facets[i - 1]?.depth ?? 0))
+}
+
+/**
+ * The same prep in a plate of another thickness: root faces (upright facets beside a bevel) keep their
+ * height, and the bevels share the rest as they did. Where the plate is too thin for that, all shrink alike.
+ */
+export function inThickness(facets: Facets, thickness: number): Facets {
+  const heights = heightsOf(facets)
+  const upright = (i: number) => facets[i]!.tilt === 0
+  const kept = heights.reduce((sum, height, i) => sum + (upright(i) ? height : 0), 0)
+  const old = facets.at(-1)!.depth
+  const bevels = old - kept
+  const room = thickness - kept
+  const scaled = heights.map((height, i) => {
+    if (bevels <= 0 || room <= 0) return (height * thickness) / old
+    return upright(i) ? height : (height * room) / bevels
+  })
+  let depth = 0
+  return facets.map(({ tilt }, i) => ({
+    depth: i === facets.length - 1 ? thickness : (depth += scaled[i]!),
+    tilt,
+  }))
+}
+
+export function withThickness(content: SaveSetup, thickness: number): SaveSetup {
+  if (thickness === content.plate.thickness) return content
+  return {
+    ...content,
+    plate: { ...content.plate, thickness },
+    walls: content.walls.map((wall) => ({ ...wall, facets: [...inThickness(wall.facets, thickness)] })),
+  }
+}
+
+/** One value shared by all, or `mixed`. */
+export type Shared<T> = { readonly mixed: false; readonly value: T } | { readonly mixed: true }
+
+export function shared<T>(values: readonly T[], same: (a: T, b: T) => boolean = Object.is): Shared<T> {
+  const [first, ...rest] = values
+  if (values.length === 0 || !rest.every((value) => same(first as T, value))) return { mixed: true }
+  return { mixed: false, value: first as T }
+}
+
+export function jointOf(content: Pick<SaveSetup, 'joints'>, edge: EdgeRef): JointSpec | null {
+  return content.joints.find((joint) => joint.loop === edge.loop && joint.edge === edge.edge) ?? null
+}
+
+/** The content with a joint changed (or made) on each of these edges; null takes the joint away. */
+export function withJoint(
+  content: SaveSetup,
+  edges: readonly EdgeRef[],
+  change: (joint: JointSpec) => JointSpec | null,
+): SaveSetup {
+  const keys = new Set(edges.map(edgeKey))
+  const others = content.joints.filter((joint) => !keys.has(edgeKey(joint)))
+  const changed = edges.flatMap(({ loop, edge }) => {
+    const before = jointOf(content, { loop, edge })
+    return change(before ?? { loop, edge, label: '', rootOpening: 0, mate: 'same' }) ?? []
+  })
+  return {
+    ...content,
+    joints: [...others, ...changed].sort((a, b) => a.loop - b.loop || a.edge - b.edge),
+  }
+}
