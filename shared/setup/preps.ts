@@ -1,0 +1,162 @@
+import type { FacetSpec, WallSpec } from '../evaluate/schema.ts'
+import type { EdgeRef } from '../body/types.ts'
+import { edgeKey } from '../body/names.ts'
+
+/**
+ * Preps as joint forms of the trade, turned into the facets of one plate's wall. mm, degrees from vertical.
+ * The part is cut from the top: a groove that opens to the top face has a positive tilt there.
+ */
+
+export const prepForms = ['square', 'tilt', 'single-bevel', 'double-bevel', 'single-v', 'double-v'] as const
+export type PrepForm = (typeof prepForms)[number]
+
+export type Prep =
+  | { readonly form: 'square' }
+  /** One straight wall at a signed tilt. */
+  | { readonly form: 'tilt'; readonly tilt: number }
+  | {
+      readonly form: 'single-bevel'
+      /** Bevel angle of this plate, positive. */
+      readonly angle: number
+      readonly rootFace: number
+      /** The face that the groove opens to; the root face lies at the other. */
+      readonly opensTo: 'top' | 'bottom'
+    }
+  | {
+      readonly form: 'double-bevel'
+      readonly topAngle: number
+      readonly bottomAngle: number
+      /** Depth of bevel from the top face. */
+      readonly topDepth: number
+      readonly rootFace: number
+    }
+  /** Groove angles are totals of both plates; this plate takes half. */
+  | {
+      readonly form: 'single-v'
+      readonly grooveAngle: number
+      readonly rootFace: number
+      readonly opensTo: 'top' | 'bottom'
+    }
+  | {
+      readonly form: 'double-v'
+      readonly topGrooveAngle: number
+      readonly bottomGrooveAngle: number
+      readonly topDepth: number
+      readonly rootFace: number
+    }
+
+export const prepErrorCodes = ['angle-out-of-range', 'root-face-too-deep'] as const
+export type PrepErrorCode = (typeof prepErrorCodes)[number]
+
+export type PrepFacets =
+  | { readonly kind: 'facets'; readonly facets: readonly FacetSpec[] }
+  | { readonly kind: 'error'; readonly code: PrepErrorCode; readonly message: string }
+
+/** Square edges answer no facets: an edge without a wall is square. */
+export function prepFacets(prep: Prep, thickness: number): PrepFacets {
+  switch (prep.form) {
+    case 'square':
+      return { kind: 'facets', facets: [] }
+    case 'tilt':
+      return single(prep.tilt, 0, prep.tilt >= 0 ? 'top' : 'bottom', thickness)
+    case 'single-bevel':
+      return bevelAngle(prep.angle) ?? single(prep.angle, prep.rootFace, prep.opensTo, thickness)
+    case 'single-v':
+      return (
+        bevelAngle(prep.grooveAngle / 2) ??
+        single(prep.grooveAngle / 2, prep.rootFace, prep.opensTo, thickness)
+      )
+    case 'double-bevel':
+      return double(prep.topAngle, prep.bottomAngle, prep.topDepth, prep.rootFace, thickness)
+    case 'double-v':
+      return double(
+        prep.topGrooveAngle / 2,
+        prep.bottomGrooveAngle / 2,
+        prep.topDepth,
+        prep.rootFace,
+        thickness,
+      )
+  }
+}
+
+function single(angle: number, rootFace: number, opensTo: 'top' | 'bottom', thickness: number): PrepFacets {
+  const size = Math.abs(angle)
+  if (!(size < 90)) return angleError()
+  if (!(rootFace >= 0 && rootFace < thickness)) return rootFaceError(thickness)
+  if (size === 0) return { kind: 'facets', facets: [] }
+  if (rootFace === 0) return facets({ depth: thickness, tilt: opensTo === 'top' ? size : -size })
+  return opensTo === 'top'
+    ? facets({ depth: thickness - rootFace, tilt: size }, { depth: thickness, tilt: 0 })
+    : facets({ depth: rootFace, tilt: 0 }, { depth: thickness, tilt: -size })
+}
+
+function double(
+  topAngle: number,
+  bottomAngle: number,
+  topDepth: number,
+  rootFace: number,
+  thickness: number,
+): PrepFacets {
+  const wrong = bevelAngle(topAngle) ?? bevelAngle(bottomAngle)
+  if (wrong) return wrong
+  if (!(topDepth > 0 && rootFace >= 0 && topDepth + rootFace < thickness)) return rootFaceError(thickness)
+  const top = { depth: topDepth, tilt: topAngle }
+  const bottom = { depth: thickness, tilt: -bottomAngle }
+  return rootFace === 0 ? facets(top, bottom) : facets(top, { depth: topDepth + rootFace, tilt: 0 }, bottom)
+}
+
+function facets(...list: FacetSpec[]): PrepFacets {
+  return { kind: 'facets', facets: list }
+}
+
+/** Null when the angle will do. */
+function bevelAngle(angle: number): PrepFacets | null {
+  return angle > 0 && angle < 90 ? null : angleError()
+}
+
+function angleError(): PrepFacets {
+  return {
+    kind: 'error',
+    code: 'angle-out-of-range',
+    message: 'A bevel angle is more than 0° and less than 90° from vertical. Type another angle.',
+  }
+}
+
+function rootFaceError(thickness: number): PrepFacets {
+  return {
+    kind: 'error',
+    code: 'root-face-too-deep',
+    message: `Root face and depth of bevel must leave some bevel in a ${thickness} mm plate. Make them smaller.`,
+  }
+}
+
+/** Gives the same wall to many edges; no facets makes them square. The answer is in order of loop and edge. */
+export function applyPrep(
+  walls: readonly WallSpec[],
+  edges: readonly EdgeRef[],
+  facets: readonly FacetSpec[],
+): WallSpec[] {
+  const chosen = new Set(edges.map(edgeKey))
+  const kept = walls.filter((wall) => !chosen.has(edgeKey(wall)))
+  if (facets.length === 0) return kept
+  const added = [...chosen].map((key): WallSpec => {
+    const [loop = 0, edge = 0] = key.split('-').map(Number)
+    return { loop, edge, facets: facets.map((facet) => ({ ...facet })) }
+  })
+  return [...kept, ...added].sort((a, b) => a.loop - b.loop || a.edge - b.edge)
+}
+
+/** Walls for another thickness: the last facet is moved to the bottom; null where an earlier one would not fit. */
+export function wallsForThickness(walls: readonly WallSpec[], thickness: number): WallSpec[] | null {
+  const moved = walls.map((wall) => {
+    const before = wall.facets.at(-2)?.depth ?? 0
+    if (before >= thickness) return null
+    return {
+      ...wall,
+      facets: wall.facets.map((facet, i) =>
+        i === wall.facets.length - 1 ? { ...facet, depth: thickness } : { ...facet },
+      ),
+    }
+  })
+  return moved.every((wall) => wall !== null) ? moved : null
+}
