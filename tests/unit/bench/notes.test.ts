@@ -75,7 +75,7 @@ describe('margin notes', () => {
   })
 
   it('offers no button when one of them has no number to set', () => {
-    const { cure: _cure, ...bare } = edgeOver(3)
+    const bare: Finding = { ...edgeOver(3), cure: undefined }
     const [note] = notesOf([...[0, 1, 2].map((edge) => edgeOver(edge)), bare], format)
     expect(note!.cure).toBeNull()
   })

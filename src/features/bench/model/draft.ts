@@ -5,14 +5,16 @@ import { saveSetupBody, type SaveSetup } from '../../../../shared/api/setups.ts'
  * What a person typed and has not saved, kept in the browser so that a reload, a crash or a lost session
  * costs nothing. A draft names the revision it was begun on.
  */
-const draftSchema = z.strictObject({
+const keptSchema = z.strictObject({
   format: z.literal(1),
-  setupId: z.string(),
-  person: z.string(),
-  revision: z.int(),
-  version: z.int(),
-  keptAt: z.number().describe('milliseconds since 1970'),
-  content: saveSetupBody,
+  draft: z.strictObject({
+    setupId: z.string(),
+    person: z.string(),
+    revision: z.int(),
+    version: z.int(),
+    keptAt: z.number().describe('milliseconds since 1970'),
+    content: saveSetupBody,
+  }),
 })
 
 export interface Draft {
@@ -38,7 +40,7 @@ function keyOf(setupId: string, person: string): string {
 /** True when the draft is safe; false when the browser has no room or forbids storage. */
 export function keepDraft(store: Store, draft: Draft): boolean {
   try {
-    store.setItem(keyOf(draft.setupId, draft.person), JSON.stringify({ format: 1, ...draft }))
+    store.setItem(keyOf(draft.setupId, draft.person), JSON.stringify({ format: 1, draft }))
     return true
   } catch {
     return false
@@ -51,11 +53,9 @@ export function findDraft(store: Store, setupId: string, person: string): Draft 
   try {
     const text = store.getItem(key)
     if (text === null) return null
-    const read = draftSchema.safeParse(JSON.parse(text))
-    if (read.success && read.data.setupId === setupId && read.data.person === person) {
-      const { format: _format, ...draft } = read.data
-      return draft
-    }
+    const read = keptSchema.safeParse(JSON.parse(text))
+    const draft = read.data?.draft
+    if (draft?.setupId === setupId && draft.person === person) return draft
   } catch {
     // unreadable: fall through and remove it
   }

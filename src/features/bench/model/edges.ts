@@ -1,4 +1,5 @@
 import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { endTangent, segmentLength, startTangent } from '../../../../shared/geometry/segment.ts'
 import type { Loop, Point, Segment } from '../../../../shared/geometry/types.ts'
 
 /** Ways to pick many edges from one. All answers are in the order of the profile. */
@@ -8,36 +9,6 @@ export const SAME_LENGTH_MM = 0.005
 
 /** Two edges count as parallel, or as running smoothly on, within this: a tenth of the least angle shown. */
 export const SAME_DIRECTION_RAD = (0.01 * Math.PI) / 180
-
-export function lengthOf(segment: Segment): number {
-  return segment.kind === 'line'
-    ? Math.hypot(segment.to.x - segment.from.x, segment.to.y - segment.from.y)
-    : segment.radius * Math.abs(segment.sweep)
-}
-
-/** Heading of travel at the start of a segment, radians. */
-export function headingIn(segment: Segment): number {
-  return segment.kind === 'line' ? lineHeading(segment.from, segment.to) : arcHeading(segment, segment.from)
-}
-
-/** Heading of travel at the end of a segment, radians. */
-export function headingOut(segment: Segment): number {
-  return segment.kind === 'line' ? lineHeading(segment.from, segment.to) : arcHeading(segment, segment.to)
-}
-
-function lineHeading(from: Point, to: Point): number {
-  return Math.atan2(to.y - from.y, to.x - from.x)
-}
-
-function arcHeading(arc: Extract<Segment, { kind: 'arc' }>, at: Point): number {
-  const radial = Math.atan2(at.y - arc.centre.y, at.x - arc.centre.x)
-  return radial + (Math.sign(arc.sweep) * Math.PI) / 2
-}
-
-/** Turn from heading a to heading b, in (−π, π]. */
-export function turn(a: number, b: number): number {
-  return Math.atan2(Math.sin(b - a), Math.cos(b - a))
-}
 
 export function allEdges(loops: readonly Loop[]): EdgeRef[] {
   return loops.flatMap((segments, loop) => segments.map((_, edge) => ({ loop, edge })))
@@ -53,22 +24,24 @@ export function sameLoop(loops: readonly Loop[], seeds: readonly EdgeRef[]): Edg
 }
 
 export function sameLength(loops: readonly Loop[], seeds: readonly EdgeRef[]): EdgeRef[] {
-  const lengths = segmentsOf(loops, seeds).map(lengthOf)
+  const lengths = segmentsOf(loops, seeds).map(segmentLength)
   return allEdges(loops).filter((edge) => {
-    const length = lengthOf(loops[edge.loop]![edge.edge]!)
+    const length = segmentLength(loops[edge.loop]![edge.edge]!)
     return lengths.some((wanted) => Math.abs(wanted - length) <= SAME_LENGTH_MM)
   })
 }
 
 /** Straight edges that run the same way or the opposite way as a seed. */
 export function parallelTo(loops: readonly Loop[], seeds: readonly EdgeRef[]): EdgeRef[] {
-  const headings = segmentsOf(loops, seeds)
+  const directions = segmentsOf(loops, seeds)
     .filter(({ kind }) => kind === 'line')
-    .map(headingIn)
+    .map(startTangent)
   return allEdges(loops).filter((edge) => {
     const segment = loops[edge.loop]![edge.edge]!
     if (segment.kind !== 'line') return false
-    return headings.some((wanted) => Math.abs(Math.sin(headingIn(segment) - wanted)) <= SAME_DIRECTION_RAD)
+    return directions.some(
+      (wanted) => Math.abs(turn(wanted, startTangent(segment), 'either way')) <= SAME_DIRECTION_RAD,
+    )
   })
 }
 
@@ -94,7 +67,7 @@ export function smoothChain(loops: readonly Loop[], seeds: readonly EdgeRef[]): 
 }
 
 function meetSmoothly(before: Segment, after: Segment): boolean {
-  return Math.abs(turn(headingOut(before), headingIn(after))) <= SAME_DIRECTION_RAD
+  return Math.abs(turn(endTangent(before), startTangent(after))) <= SAME_DIRECTION_RAD
 }
 
 /** Everything from one edge to another in profile order, both included. */
@@ -121,4 +94,11 @@ export function toggleEdge(selection: readonly EdgeRef[], edge: EdgeRef): EdgeRe
 
 function segmentsOf(loops: readonly Loop[], edges: readonly EdgeRef[]): Segment[] {
   return edges.flatMap(({ loop, edge }) => loops[loop]?.[edge] ?? [])
+}
+
+/** Angle from direction a to direction b, radians; `either way` takes opposite directions as the same. */
+function turn(a: Point, b: Point, sense: 'as they run' | 'either way' = 'as they run'): number {
+  const cross = a.x * b.y - a.y * b.x
+  const dot = a.x * b.x + a.y * b.y
+  return Math.atan2(cross, sense === 'either way' ? Math.abs(dot) : dot)
 }

@@ -1,0 +1,1 @@
+export { useEvaluation, type EvaluationError, type EvaluationState } from './use-evaluation.ts'
