@@ -1,5 +1,6 @@
 import { useMemo, type CSSProperties, type ReactNode } from 'react'
 import type { FacetSpec } from '../../shared/evaluate/schema.ts'
+import type { DisplayUnit } from '../../shared/units/length.ts'
 import type { Theme } from '../theme/tilt-colour.ts'
 import { describeSection } from './describe.ts'
 import { dimensionsOf } from './dimensions.ts'
@@ -8,7 +9,7 @@ import { layoutSection } from './layout.ts'
 import type { PlacedLabel, Size } from './layout-types.ts'
 import { scaleText, standardScales } from './scales.ts'
 import { SectionLines } from './SectionLines.tsx'
-import type { SectionDimension, SectionFormat, SectionMate, SectionTolerances } from './types.ts'
+import type { SectionDimension, SectionSpec, SectionTolerances } from './types.ts'
 import { useWidth } from './use-width.ts'
 
 export interface PlateSectionProps {
@@ -16,11 +17,11 @@ export interface PlateSectionProps {
   readonly thickness: number
   /** From the top face down, degrees; the last must end at the thickness. */
   readonly facets: readonly FacetSpec[]
-  /** Draws the joint: the other plate on the right, at this root opening. */
-  readonly mate?: SectionMate
+  /** Draws the joint: the other plate on the right, at this root opening (mm). */
+  readonly joint?: SectionSpec['joint']
   readonly theme: Theme
-  /** How lengths and angles are written; millimetres and one decimal by default. */
-  readonly format?: SectionFormat
+  /** Unit that lengths are written in; millimetres by default. */
+  readonly unit?: DisplayUnit
   readonly tolerances?: SectionTolerances
   /** Facets that break a limit: hatched. */
   readonly breached?: readonly number[]
@@ -48,15 +49,15 @@ export interface PlateSectionProps {
  * HTML, so that they may be inputs. The picture's text alternative holds every number.
  */
 export function PlateSection(props: PlateSectionProps) {
-  const { thickness, facets, mate, theme, format, tolerances, squareAngles, print = false } = props
+  const { thickness, facets, joint, theme, unit, tolerances, squareAngles, print = false } = props
   const { renderDimension, labelSize, width: fixed, plateHeight = 190, standardScale = false } = props
   const [ref, measured] = useWidth<HTMLDivElement>(320)
   const width = fixed ?? measured
   const dimensions = useMemo(
-    () => dimensionsOf({ thickness, facets, mate }, { format, tolerances, squareAngles }),
-    [thickness, facets, mate, format, tolerances, squareAngles],
+    () => dimensionsOf({ thickness, facets, joint }, { unit, tolerances, squareAngles }),
+    [thickness, facets, joint, unit, tolerances, squareAngles],
   )
-  const layout = layoutSection({ thickness, facets, mate }, dimensions, {
+  const layout = layoutSection({ thickness, facets, joint }, dimensions, {
     width,
     plateHeight,
     labelSize: (dimension) => labelSize?.(dimension) ?? textSize(dimension),
@@ -71,7 +72,7 @@ export function PlateSection(props: PlateSectionProps) {
           <SectionLines
             layout={layout}
             theme={theme}
-            label={describeSection({ thickness, facets, mate }, dimensions)}
+            label={describeSection({ thickness, facets, joint }, dimensions)}
             breached={props.breached ?? []}
             print={print}
           />

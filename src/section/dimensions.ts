@@ -1,26 +1,12 @@
 import type { FacetSpec } from '../../shared/evaluate/schema.ts'
-import { outermost, outlineOf, wallPoints } from './outline.ts'
-import type {
-  SectionDimension,
-  SectionFormat,
-  SectionPoint,
-  SectionSpec,
-  SectionTolerances,
-} from './types.ts'
-
-/** Millimetres to one place and degrees to one place: what a drawing shows; sign with a real minus. */
-export const metricFormat: SectionFormat = {
-  length: (mm) => `${signed(mm, 1)} mm`,
-  angle: (degrees) => `${signed(degrees, 1)}°`,
-}
-
-function signed(value: number, places: number): string {
-  const text = Math.abs(value).toFixed(places)
-  return value < 0 && Number(text) !== 0 ? `−${text}` : text
-}
+import { jointSection, type SectionPoint } from '../../shared/joint/section.ts'
+import { formatAngle, formatLength } from '../../shared/units/format.ts'
+import type { DisplayUnit } from '../../shared/units/length.ts'
+import { outlineOf } from './outline.ts'
+import type { SectionDimension, SectionSpec, SectionTolerances } from './types.ts'
 
 export interface DimensionOptions {
-  readonly format?: SectionFormat | undefined
+  readonly unit?: DisplayUnit | undefined
   readonly tolerances?: SectionTolerances | undefined
   /** Also list the angle of square facets beside others (0°), so that it can be edited. */
   readonly squareAngles?: boolean | undefined
@@ -28,7 +14,7 @@ export interface DimensionOptions {
 
 /** Every dimension of the section, in reading order. */
 export function dimensionsOf(spec: SectionSpec, options: DimensionOptions = {}): SectionDimension[] {
-  return spec.mate ? jointDimensions(spec, options) : plateDimensions(spec, options)
+  return spec.joint ? jointDimensions(spec, options) : plateDimensions(spec, options)
 }
 
 export function isRootFace(facets: readonly FacetSpec[], facet: number): boolean {
@@ -37,8 +23,8 @@ export function isRootFace(facets: readonly FacetSpec[], facet: number): boolean
 
 function plateDimensions(spec: SectionSpec, options: DimensionOptions): SectionDimension[] {
   const { facets, thickness } = spec
-  const { format = metricFormat, squareAngles = false } = options
-  const points = wallPoints(facets)
+  const { unit = 'mm', squareAngles = false } = options
+  const points = outlineOf(spec).left
   const bottom = points.at(-1)!
   const angles = facets.flatMap(({ tilt }, facet): SectionDimension[] => {
     if (tilt === 0 && facets.length > 1 && !squareAngles) return []
@@ -49,7 +35,7 @@ function plateDimensions(spec: SectionSpec, options: DimensionOptions): SectionD
         facet,
         value: tilt,
         quantity: 'angle',
-        text: format.angle(tilt),
+        text: formatAngle(tilt),
         caption: 'from vertical',
         tolerance: '',
         from: points[facet]!,
@@ -60,14 +46,14 @@ function plateDimensions(spec: SectionSpec, options: DimensionOptions): SectionD
   return [
     ...angles,
     ...facetDepths(spec, points, options),
-    thicknessOf(thickness, points, format),
+    thicknessOf(thickness, points, unit),
     {
       id: 'bottom-offset',
       kind: 'bottom-offset',
       facet: null,
       value: bottom.x,
       quantity: 'length',
-      text: format.length(bottom.x),
+      text: formatLength(bottom.x, unit),
       caption: 'bottom offset',
       tolerance: '',
       from: { x: 0, depth: thickness },
@@ -79,7 +65,7 @@ function plateDimensions(spec: SectionSpec, options: DimensionOptions): SectionD
 function facetDepths(
   { facets }: SectionSpec,
   points: readonly SectionPoint[],
-  { format = metricFormat, tolerances = {} }: DimensionOptions,
+  { unit = 'mm', tolerances = {} }: DimensionOptions,
 ): SectionDimension[] {
   if (facets.length === 1) return []
   return facets.map((_, facet) => {
@@ -92,7 +78,7 @@ function facetDepths(
       facet,
       value: to.depth - from.depth,
       quantity: 'length',
-      text: format.length(to.depth - from.depth),
+      text: formatLength(to.depth - from.depth, unit),
       caption: root ? 'root face' : 'depth of bevel',
       tolerance: root ? (tolerances.rootFace ?? '') : '',
       from,
@@ -101,18 +87,14 @@ function facetDepths(
   })
 }
 
-function thicknessOf(
-  thickness: number,
-  wall: readonly SectionPoint[],
-  format: SectionFormat,
-): SectionDimension {
+function thicknessOf(thickness: number, wall: readonly SectionPoint[], unit: DisplayUnit): SectionDimension {
   return {
     id: 'thickness',
     kind: 'thickness',
     facet: null,
     value: thickness,
     quantity: 'length',
-    text: format.length(thickness),
+    text: formatLength(thickness, unit),
     caption: 'thickness',
     tolerance: '',
     from: wall[0]!,
@@ -121,11 +103,11 @@ function thicknessOf(
 }
 
 function jointDimensions(spec: SectionSpec, options: DimensionOptions): SectionDimension[] {
-  const { format = metricFormat, tolerances = {} } = options
+  const { unit = 'mm', tolerances = {} } = options
   const { left, right } = outlineOf(spec)
-  const mate = spec.mate!
-  const root = outermost(left)
-  const rootEnd = left.findLast((point) => point.x === root)!
+  const { rootOpening } = spec.joint!
+  // The joint's frame puts the outermost line of the left plate, and nothing else, at x = 0.
+  const rootEnd = left.findLast((point) => point.x === 0)!
   return [
     ...includedAngles(spec).map(({ side, value }): SectionDimension => ({
       id: `included-angle-${side}`,
@@ -133,25 +115,25 @@ function jointDimensions(spec: SectionSpec, options: DimensionOptions): SectionD
       facet: side === 'top' ? 0 : spec.facets.length - 1,
       value,
       quantity: 'angle',
-      text: format.angle(value),
+      text: formatAngle(value),
       caption: side === 'top' ? 'groove angle' : 'groove angle below',
       tolerance: tolerances.includedAngle ?? '',
       from: side === 'top' ? left[0]! : left.at(-1)!,
       to: side === 'top' ? right![0]! : right!.at(-1)!,
     })),
     ...facetDepths(spec, left, options),
-    thicknessOf(spec.thickness, right!, format),
+    thicknessOf(spec.thickness, right!, unit),
     {
       id: 'root-opening',
       kind: 'root-opening',
       facet: null,
-      value: mate.rootOpening,
+      value: rootOpening,
       quantity: 'length',
-      text: format.length(mate.rootOpening),
+      text: formatLength(rootOpening, unit),
       caption: 'root opening',
       tolerance: tolerances.rootOpening ?? '',
       from: rootEnd,
-      to: { x: rootEnd.x + mate.rootOpening, depth: rootEnd.depth },
+      to: { x: rootEnd.x + rootOpening, depth: rootEnd.depth },
     },
   ]
 }
@@ -163,16 +145,13 @@ export interface IncludedAngle {
   readonly value: number
 }
 
-/**
- * The groove angle at each face that a groove opens to: the top facets' outward tilts added, and the bottom
- * facets' inward tilts added. A wall that leans the other way there takes from it.
- */
-export function includedAngles({ facets, mate }: SectionSpec): IncludedAngle[] {
-  if (!mate) return []
-  const top = facets[0]!.tilt + mate.facets[0]!.tilt
-  const bottom = -(facets.at(-1)!.tilt + mate.facets.at(-1)!.tilt)
-  const found: IncludedAngle[] = []
-  if (top > 0) found.push({ side: 'top', value: top })
-  if (bottom > 0) found.push({ side: 'bottom', value: bottom })
-  return found
+/** The groove angle at each face that a groove opens to. */
+export function includedAngles({ facets, thickness, joint }: SectionSpec): IncludedAngle[] {
+  if (!joint) return []
+  const { grooveAngleTop, grooveAngleBottom } = jointSection({ facets, thickness, ...joint })
+  const found: IncludedAngle[] = [
+    { side: 'top', value: grooveAngleTop },
+    { side: 'bottom', value: grooveAngleBottom },
+  ]
+  return found.filter(({ value }) => value > 0)
 }

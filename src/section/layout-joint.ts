@@ -1,5 +1,6 @@
+import { radians } from '../../shared/units/angle.ts'
 import { includedAngles, isRootFace } from './dimensions.ts'
-import { outlineOf } from './outline.ts'
+import { mateFacets, outlineOf } from './outline.ts'
 import {
   GAP,
   LEADER,
@@ -15,9 +16,9 @@ import {
   widest,
 } from './layout-parts.ts'
 import type { Arc, Hairline, LayoutOptions, PlacedLabel, Px, SectionLayout } from './layout-types.ts'
-import type { SectionDimension, SectionPoint, SectionSpec } from './types.ts'
+import type { SectionPoint } from '../../shared/joint/section.ts'
+import type { SectionDimension, SectionSpec } from './types.ts'
 
-const RADIANS = Math.PI / 180
 /** Share of a groove's height that lies between its mouth and the arc of its angle. */
 const ARC_BELOW_MOUTH = 0.15
 
@@ -28,7 +29,7 @@ export function layoutJoint(
   options: LayoutOptions,
 ): SectionLayout {
   const size = options.labelSize
-  const mate = spec.mate!
+  const other = mateFacets(spec)
   const { left, right } = outlineOf(spec) as { left: SectionPoint[]; right: SectionPoint[] }
   const depths = labelled(dimensions, 'facet-depth')
   const whole = labelled(dimensions, 'thickness')
@@ -98,7 +99,7 @@ export function layoutJoint(
   for (const dimension of opening) {
     const box = size(dimension)
     const lineY = below + 14
-    hairlines.push(...across(px(dimension.from), px(dimension.to), lineY))
+    hairlines.push(...across(px(dimension.from), px(dimension.to), lineY, labels))
     below = lineY + GAP
     labels.push(boxAt(dimension, box, { x: middle(dimension), y: below + box.height / 2 }, 0, options.width))
     below += box.height
@@ -129,11 +130,11 @@ export function layoutJoint(
         from: leftPx[facet]!,
         to: leftPx[facet + 1]!,
       })),
-      ...mate.facets.map(({ tilt }, facet) => ({
+      ...other.map(({ tilt }, facet) => ({
         plate: 'right' as const,
         facet,
         tilt,
-        rootFace: isRootFace(mate.facets, facet),
+        rootFace: isRootFace(other, facet),
         from: rightPx[facet]!,
         to: rightPx[facet + 1]!,
       })),
@@ -153,8 +154,9 @@ function grooveArc(
   scale: number,
 ): Arc {
   const top = side === 'top'
-  const own = (top ? spec.facets[0] : spec.facets.at(-1))!.tilt * RADIANS
-  const other = (top ? spec.mate!.facets[0] : spec.mate!.facets.at(-1))!.tilt * RADIANS
+  const facing = mateFacets(spec)
+  const own = radians((top ? spec.facets[0] : spec.facets.at(-1))!.tilt)
+  const other = radians((top ? facing[0] : facing.at(-1))!.tilt)
   const a = (top ? left[0] : left.at(-1))!
   const b = (top ? right[0] : right.at(-1))!
   // Left wall x = a.x + (d − a.depth)·tan β, right wall x = b.x − (d − b.depth)·tan β′: equal at the apex.

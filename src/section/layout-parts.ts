@@ -132,22 +132,18 @@ export function breakLine(x: number, top: number, bottom: number): Px[] {
   ]
 }
 
-/** A dimension across: witness lines down from two points, the line between, arrows in or out. */
-export function across(a: Px, b: Px, lineY: number): Hairline[] {
+/**
+ * A dimension across: witness lines down from two points, the line between, arrows in or out. A witness line
+ * stops short of a label in its way and goes on behind it.
+ */
+export function across(a: Px, b: Px, lineY: number, inTheWay: readonly Box[]): Hairline[] {
   const [left, right] = a.x <= b.x ? [a, b] : [b, a]
-  const witness = (point: Px): Hairline => ({
-    kind: 'witness',
-    points: [
-      { x: point.x, y: point.y + 3 },
-      { x: point.x, y: lineY + 4 },
-    ],
-  })
   // Arrow heads of 5 px need four of themselves between the lines; else they come from outside.
   const room = right.x - left.x >= 20
   const reach = room ? 0 : 12
   return [
-    witness(left),
-    witness(right),
+    ...witnessDown(left, lineY + 4, inTheWay),
+    ...witnessDown(right, lineY + 4, inTheWay),
     {
       kind: 'dimension',
       points: room
@@ -164,4 +160,24 @@ export function across(a: Px, b: Px, lineY: number): Hairline[] {
       arrows: room ? 'out' : 'in',
     },
   ]
+}
+
+function witnessDown({ x, y }: Px, end: number, inTheWay: readonly Box[]): Hairline[] {
+  const hidden = inTheWay
+    .filter((box) => box.x <= x && x <= box.x + box.width && box.y < end && box.y + box.height > y)
+    .sort((a, b) => a.y - b.y)
+  const runs: (readonly [number, number])[] = []
+  let from = y + 3
+  for (const box of hidden) {
+    if (box.y > from) runs.push([from, box.y])
+    from = Math.max(from, box.y + box.height)
+  }
+  runs.push([from, end])
+  return runs.map(([top, bottom]) => ({
+    kind: 'witness',
+    points: [
+      { x, y: top },
+      { x, y: bottom },
+    ],
+  }))
 }

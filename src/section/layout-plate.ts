@@ -1,5 +1,6 @@
+import { radians } from '../../shared/units/angle.ts'
 import { isRootFace } from './dimensions.ts'
-import { outermost, wallPoints } from './outline.ts'
+import { outlineOf } from './outline.ts'
 import {
   GAP,
   LEADER,
@@ -15,13 +16,13 @@ import {
   widest,
 } from './layout-parts.ts'
 import type { Arc, Hairline, LayoutOptions, PlacedLabel, Px, SectionLayout } from './layout-types.ts'
-import type { SectionDimension, SectionPoint, SectionSpec } from './types.ts'
+import type { SectionPoint } from '../../shared/joint/section.ts'
+import type { SectionDimension, SectionSpec } from './types.ts'
 
 /** How far above (or below) the face the extended lines of an angle go; steep ones stop at `ARM_MAX`. */
 const ARM_RISE = 26
 const ARM_MAX = 64
 const ARC_RADIUS = 20
-const RADIANS = Math.PI / 180
 
 /** One plate, its wall on the right, with the dimensions of a prep. */
 export function layoutPlate(
@@ -31,9 +32,9 @@ export function layoutPlate(
 ): SectionLayout {
   const { thickness, facets } = spec
   const size = options.labelSize
-  const wall = wallPoints(facets)
+  const wall = outlineOf(spec).left
   const left = Math.min(...wall.map((point) => point.x))
-  const right = outermost(wall)
+  const right = Math.max(...wall.map((point) => point.x))
 
   const angles = labelled(dimensions, 'angle')
   const top = angles.find((dimension) => dimension.facet === 0)
@@ -108,7 +109,7 @@ export function layoutPlate(
     const from = px(dimension.from)
     const to = px(dimension.to)
     const lineY = below + 14
-    if (Math.abs(to.x - from.x) > 0) hairlines.push(...across(from, to, lineY))
+    if (Math.abs(to.x - from.x) > 0) hairlines.push(...across(from, to, lineY, labels))
     const box = size(dimension)
     below = lineY + GAP
     labels.push(boxAt(dimension, box, { x: (from.x + to.x) / 2, y: below + box.height / 2 }, 0, columnX))
@@ -168,7 +169,7 @@ function angleAt(
   sense: -1 | 1,
 ): { readonly lines: Hairline[]; readonly arc: Arc; readonly end: Px } | null {
   if (tilt === 0) return null
-  const beta = tilt * RADIANS
+  const beta = radians(tilt)
   const arm = Math.min(ARM_RISE / Math.cos(beta), ARM_MAX)
   // Down the wall runs (sin β, cos β); out of the top face that is reversed.
   const end = { x: at.x + sense * Math.sin(beta) * arm, y: at.y + sense * Math.cos(beta) * arm }

@@ -13,5 +13,5 @@ export function layoutSection(
   dimensions: readonly SectionDimension[],
   options: LayoutOptions,
 ): SectionLayout {
-  return spec.mate ? layoutJoint(spec, dimensions, options) : layoutPlate(spec, dimensions, options)
+  return spec.joint ? layoutJoint(spec, dimensions, options) : layoutPlate(spec, dimensions, options)
 }

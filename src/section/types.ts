@@ -1,20 +1,17 @@
 import type { FacetSpec } from '../../shared/evaluate/schema.ts'
+import type { Mate, SectionPoint } from '../../shared/joint/section.ts'
 
 /**
- * The cross-section of one plate, or of both plates of a joint. Section millimetres: x runs outward (to the
- * right, into the waste) and depth runs down from the top face. For one plate x = 0 is its top edge; for a
- * joint x = 0 is the middle of the root opening. Tilts are degrees from vertical, positive outward.
+ * The cross-section of one plate, or of both plates of a joint. Section millimetres as in shared/joint: x runs
+ * outward (to the right, into the waste) and depth runs down from the top face. For one plate x = 0 is its
+ * top edge; for a joint x = 0 is the left plate's root. Tilts are degrees from vertical, positive outward.
  */
-export interface SectionPoint {
-  readonly x: number
-  readonly depth: number
-}
-
-/** The other plate of a joint, as if it stood alone: its own facets, outward positive. */
-export interface SectionMate {
+export interface SectionSpec {
+  readonly thickness: number
+  /** From the top face down; the last ends at the thickness. */
   readonly facets: readonly FacetSpec[]
-  /** Gap between the outermost lines of the two walls, mm. */
-  readonly rootOpening: number
+  /** The other plate of a joint stands opposite at this gap, mm. */
+  readonly joint?: { readonly mate: Mate; readonly rootOpening: number } | undefined
 }
 
 export type DimensionKind =
@@ -40,23 +37,9 @@ export interface SectionDimension {
   readonly to: SectionPoint
 }
 
-export interface SectionFormat {
-  /** A length in mm as text with its unit. */
-  length(mm: number): string
-  /** An angle in degrees as text with its unit. */
-  angle(degrees: number): string
-}
-
 /** Texts of tolerances to print beside a dimension, by kind; `rootFace` for the depth of a root face. */
 export interface SectionTolerances {
   readonly includedAngle?: string
   readonly rootOpening?: string
   readonly rootFace?: string
-}
-
-/** Everything that the drawing is made of, before it has a size on the screen. */
-export interface SectionSpec {
-  readonly thickness: number
-  readonly facets: readonly FacetSpec[]
-  readonly mate?: SectionMate | undefined
 }
