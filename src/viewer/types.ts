@@ -32,6 +32,14 @@ export interface Insets {
   readonly left: number
 }
 
+/** The user's unit of length, for the scale bar only. */
+export interface ScaleBar {
+  /** Millimetres in one unit. */
+  readonly unit: number
+  /** Text of a number of units, such as "50 mm". */
+  readonly text: (value: number) => string
+}
+
 export interface PartViewerProps {
   /** null while it is being computed; the last mesh stays on screen. */
   readonly mesh: BodyMesh | null
@@ -61,6 +69,6 @@ export interface PartViewerProps {
   readonly label?: string
   /** The picture in words for those who cannot see it. */
   readonly description?: string
-  /** Text of a length in the user's unit; with it a scale bar is drawn. */
-  readonly formatLength?: (mm: number) => string
+  /** With it a scale bar is drawn, in 1–2–5 steps of this unit. */
+  readonly scaleBar?: ScaleBar
 }

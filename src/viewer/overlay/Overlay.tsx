@@ -1,0 +1,190 @@
+import { useLayoutEffect, useMemo, useRef } from 'react'
+import { edgeKey } from '../../../shared/body/names.ts'
+import { cornerPoint, type MeshIndex } from '../scene/mesh-index.ts'
+import type { PartViewerProps } from '../types.ts'
+import { chooseLabels, type ChosenLabel } from './choose.ts'
+import { BALLOON_RADIUS, type OverlayLayer } from './layer.ts'
+import { stationsOf } from './stations.ts'
+
+type Shown = Pick<
+  PartViewerProps,
+  'selection' | 'breaches' | 'labels' | 'balloons' | 'onBalloon' | 'event' | 'scaleBar'
+>
+
+interface OverlayProps extends Shown {
+  readonly layer: OverlayLayer
+  readonly index: MeshIndex | null
+  /** Asks for a frame, in which the layer puts everything in its place. */
+  readonly onChange: () => void
+}
+
+const TONES: Record<ChosenLabel['tone'], string> = {
+  selected: 'text-select font-medium',
+  breach: 'text-breach',
+  plain: 'text-muted data-[hidden=true]:opacity-45',
+}
+
+/** Balloons that are worth drawing at once; the list of findings has them all. */
+const BALLOON_CAP = 60
+
+/** Texts over the picture. They are placed by `OverlayLayer`, not by React. */
+export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
+  const { selection, breaches, labels, event, scaleBar } = shown
+  const root = useRef<HTMLDivElement>(null)
+  const leaders = useRef<SVGPathElement>(null)
+  const eventNode = useRef<HTMLDivElement>(null)
+  const bar = useRef<HTMLDivElement>(null)
+  const barText = useRef<HTMLSpanElement>(null)
+  const reading = useRef<HTMLDivElement>(null)
+
+  const chosen = useMemo(
+    () =>
+      index
+        ? chooseLabels(labels, selection, breaches.edges, (key) => index.edges.get(key)?.length ?? 0).filter(
+            ({ key }) => index.edges.has(key),
+          )
+        : [],
+    [labels, selection, breaches.edges, index],
+  )
+  const balloons = useMemo(
+    () => [...shown.balloons].sort((a, b) => Number(b.selected) - Number(a.selected)).slice(0, BALLOON_CAP),
+    [shown.balloons],
+  )
+
+  useLayoutEffect(() => {
+    const labelNodes = nodesBy(root.current!, 'edge')
+    const balloonNodes = nodesBy(root.current!, 'balloon')
+    layer.setFixed({
+      leaders: leaders.current,
+      event: eventNode.current,
+      bar: bar.current,
+      barText: barText.current,
+      reading: reading.current,
+    })
+    layer.setUnit(scaleBar ?? null)
+    layer.setLabels(
+      chosen.flatMap(({ key, edge }) => {
+        const element = labelNodes.get(key)
+        const lines = index?.edges.get(edgeKey(edge))
+        const stations = lines ? stationsOf(lines) : []
+        return element && stations.length > 0 ? [{ element, stations }] : []
+      }),
+    )
+    layer.setBalloons(
+      balloons.flatMap(({ number, at }) => {
+        const element = balloonNodes.get(String(number))
+        return element ? [{ element, at: [at.x, at.y, -at.depth] as const }] : []
+      }),
+    )
+    layer.setMarks({
+      event: event ? [event.at.x, event.at.y, -event.depth] : null,
+      corners: index
+        ? breaches.corners.map((corner) => cornerPoint(index, corner)).filter((at) => at !== null)
+        : [],
+      triangles: index ? index.mesh.indices.length / 3 : 0,
+    })
+    onChange()
+  }, [layer, index, chosen, balloons, event, scaleBar, breaches.corners, onChange])
+
+  return (
+    <div
+      ref={root}
+      className="pointer-events-none absolute inset-0 overflow-hidden text-[0.6875rem] leading-4"
+    >
+      <svg className="absolute inset-0 h-full w-full" aria-hidden="true">
+        <path ref={leaders} className="stroke-muted" fill="none" strokeWidth={0.75} />
+      </svg>
+      {chosen.map(({ key, text, tone }) => (
+        <span
+          key={key}
+          aria-hidden="true"
+          data-tone={tone}
+          data-edge={key}
+          className={`invisible absolute top-0 left-0 px-0.5 whitespace-nowrap ${TONES[tone]}`}
+        >
+          {text}
+        </span>
+      ))}
+      {balloons.map(({ number, tone, selected }) => (
+        <button
+          key={number}
+          type="button"
+          data-balloon={number}
+          // The list of findings holds the same buttons; a second row of stops would be in the way.
+          tabIndex={-1}
+          aria-label={`note ${number}`}
+          aria-pressed={selected}
+          onClick={() => shown.onBalloon?.(number)}
+          className="pointer-events-auto invisible absolute top-0 left-0 grid size-6 cursor-pointer place-items-center pointer-coarse:size-11"
+        >
+          <BalloonFace number={number} tone={tone} selected={selected} />
+        </button>
+      ))}
+      {event && (
+        <div ref={eventNode} className="absolute top-0 left-0 text-breach" aria-hidden="true">
+          <svg
+            width={22}
+            height={22}
+            viewBox="-11 -11 22 22"
+            className="block"
+            fill="none"
+            stroke="currentColor"
+          >
+            <circle r={6} strokeWidth={1.25} className="fill-panel" />
+            <path d="M-10 0H10M0 -10V10" strokeWidth={1} />
+          </svg>
+          {event.text && (
+            <span className="absolute top-1/2 left-full -translate-y-1/2 bg-panel px-1 whitespace-nowrap">
+              {event.text}
+            </span>
+          )}
+        </div>
+      )}
+      {scaleBar && (
+        <div className="absolute bottom-2 left-3 text-muted" aria-hidden="true">
+          <span ref={barText} />
+          <div ref={bar} className="h-1.5 border-x border-b border-muted" />
+        </div>
+      )}
+      <div ref={reading} className="absolute right-3 bottom-1.5 text-muted" aria-hidden="true" />
+    </div>
+  )
+}
+
+function BalloonFace({
+  number,
+  tone,
+  selected,
+}: {
+  number: number
+  tone: 'breach' | 'plain'
+  selected: boolean
+}) {
+  const stroke = tone === 'breach' ? 'var(--breach)' : 'var(--ink)'
+  const size = BALLOON_RADIUS * 2 + 2
+  return (
+    <svg width={size} height={size} viewBox={`${-size / 2} ${-size / 2} ${size} ${size}`} aria-hidden="true">
+      <circle
+        r={BALLOON_RADIUS - 0.5}
+        fill={selected ? stroke : 'var(--panel)'}
+        stroke={stroke}
+        strokeWidth={1.25}
+      />
+      <text
+        textAnchor="middle"
+        dominantBaseline="central"
+        fontSize={number > 99 ? 8.5 : 11}
+        fontWeight={700}
+        fill={selected ? (tone === 'breach' ? 'var(--on-breach)' : 'var(--sheet)') : stroke}
+      >
+        {number}
+      </text>
+    </svg>
+  )
+}
+
+/** Elements under a root by the value of one of their data attributes. */
+function nodesBy(root: HTMLElement, name: 'edge' | 'balloon'): Map<string, HTMLElement> {
+  const nodes = root.querySelectorAll<HTMLElement>(`[data-${name}]`)
+  return new Map([...nodes].map((node) => [node.dataset[name]!, node]))
+}

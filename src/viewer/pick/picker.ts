@@ -1,0 +1,74 @@
+import { BufferAttribute, BufferGeometry, FrontSide, Ray, Vector3 } from 'three'
+import { MeshBVH } from 'three-mesh-bvh'
+import type { EdgeRef, MeshFace } from '../../../shared/body/types.ts'
+import {
+  along,
+  basisOf,
+  projector,
+  unproject,
+  type Frame,
+  type Vec3,
+  type ViewState,
+} from '../camera/view-state.ts'
+import type { MeshIndex } from '../scene/mesh-index.ts'
+import { shiftInto } from '../scene/part-geometry.ts'
+import { nearestLine } from './nearest-line.ts'
+
+/** A face nearer than this before a point is the one the point lies on, as a share of the part's radius. */
+const CLEAR = 2e-3
+
+/** Answers what is under a pixel. The search tree is built when first asked for, once per mesh. */
+export class Picker {
+  #index: MeshIndex | null = null
+  #tree: MeshBVH | null = null
+
+  setIndex(index: MeshIndex): void {
+    this.#index = index
+    this.#tree = null
+  }
+
+  /** The face that is seen from `toward` at a point of the plate's frame, and how far before the point it is. */
+  seen(point: Vec3, toward: Vec3): { face: MeshFace; before: number } | null {
+    const index = this.#index
+    if (!index || index.mesh.indices.length === 0) return null
+    this.#tree ??= buildTree(index)
+    const far = index.radius * 2 + distance(point, index.centre)
+    const start = along(point, toward, far).map((value, axis) => value - index.centre[axis]!)
+    const ray = new Ray(new Vector3(...start), new Vector3(...toward).negate())
+    const hit = this.#tree.raycastFirst(ray, FrontSide)
+    if (!hit || hit.faceIndex === null || hit.faceIndex === undefined) return null
+    const face = index.mesh.faces[index.mesh.faceOfTriangle[hit.faceIndex]!]
+    return face ? { face, before: far - hit.distance } : null
+  }
+
+  /** The edge meant by a pixel: the wall under it, else a rim within `reach` px. */
+  edgeAt(view: ViewState, frame: Frame, x: number, y: number, reach: number): EdgeRef | null {
+    const index = this.#index
+    if (!index) return null
+    const face = this.seen(unproject(view, frame, x, y), basisOf(view).toward)?.face
+    if (face?.kind === 'wall') return { loop: face.loop, edge: face.edge }
+    const rim = face?.kind === 'top' ? 'top' : face?.kind === 'bottom' ? 'bottom' : 'either'
+    return nearestLine(index, projector(view, frame), x, y, reach, rim)
+  }
+
+  /** Whether the part itself stands between the eye and a point on its skin. */
+  hides(point: Vec3, toward: Vec3): boolean {
+    const seen = this.seen(point, toward)
+    return seen !== null && seen.before > this.#index!.radius * CLEAR
+  }
+}
+
+function buildTree(index: MeshIndex): MeshBVH {
+  const { mesh, centre } = index
+  const positions = new Float32Array(mesh.positions.length)
+  shiftInto(positions, mesh.positions, centre)
+  const geometry = new BufferGeometry()
+  geometry.setAttribute('position', new BufferAttribute(positions, 3))
+  geometry.setIndex(new BufferAttribute(mesh.indices, 1))
+  // Indirect: the triangles keep their order, and with it their row in `faceOfTriangle`.
+  return new MeshBVH(geometry, { indirect: true })
+}
+
+function distance(a: Vec3, b: Vec3): number {
+  return Math.hypot(a[0] - b[0], a[1] - b[1], a[2] - b[2])
+}

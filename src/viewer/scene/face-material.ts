@@ -1,0 +1,64 @@
+import { FrontSide, ShaderMaterial, Vector3 } from 'three'
+import type { Rgb } from '../palette.ts'
+
+/**
+ * Flat paint for the faces: the vertex colour as it is (tokens are already in the screen's colour space),
+ * a little darker the further the plane turns from the light so that neighbouring facets read as planes,
+ * and the breach hatch ruled over it in screen space, so that its lines keep their pitch at any zoom.
+ */
+const vertexShader = /* glsl */ `
+attribute vec4 paint;
+varying vec4 vPaint;
+varying vec3 vNormal;
+void main() {
+  vPaint = paint;
+  vNormal = normalMatrix * normal;
+  gl_Position = projectionMatrix * modelViewMatrix * vec4(position, 1.0);
+}`
+
+const fragmentShader = /* glsl */ `
+uniform vec3 hatch;
+uniform float pixelRatio;
+uniform float shade;
+varying vec4 vPaint;
+varying vec3 vNormal;
+const vec3 light = normalize(vec3(-0.35, 0.75, 0.65));
+const float pitch = 9.0;
+const float halfWidth = 0.75;
+void main() {
+  float facing = dot(normalize(vNormal), light);
+  vec3 colour = vPaint.rgb * (1.0 - shade * (0.5 - 0.5 * facing));
+  if (vPaint.a > 0.5) {
+    float across = (gl_FragCoord.x - gl_FragCoord.y) / pixelRatio / 1.41421356;
+    float apart = abs(fract(across / pitch) - 0.5) * pitch;
+    colour = mix(hatch, colour, smoothstep(halfWidth - 0.35, halfWidth + 0.35, apart));
+  }
+  gl_FragColor = vec4(colour, 1.0);
+}`
+
+/** Darkening of a plane that faces away from the light, as a share. */
+const SHADE = { paper: 0.2, tank: 0.34 }
+
+export class FaceMaterial extends ShaderMaterial {
+  constructor() {
+    super({
+      vertexShader,
+      fragmentShader,
+      side: FrontSide,
+      uniforms: { hatch: { value: new Vector3() }, pixelRatio: { value: 1 }, shade: { value: 0 } },
+      // Faces step back by the least amount that the depth buffer tells apart, so that lines on them win.
+      polygonOffset: true,
+      polygonOffsetFactor: 1,
+      polygonOffsetUnits: 1,
+    })
+  }
+
+  dress(breach: Rgb, theme: 'paper' | 'tank'): void {
+    ;(this.uniforms.hatch!.value as Vector3).set(breach[0] / 255, breach[1] / 255, breach[2] / 255)
+    this.uniforms.shade!.value = SHADE[theme]
+  }
+
+  setPixelRatio(ratio: number): void {
+    this.uniforms.pixelRatio!.value = ratio
+  }
+}
