@@ -7,7 +7,7 @@ export const evaluationErrorCodes = [
   'facets-miss-thickness',
   'edge-of-no-length',
   'loop-of-no-area',
-  'arc-not-sound',
+  'not-finite',
 ] as const
 
 export type EvaluationErrorCode = (typeof evaluationErrorCodes)[number]

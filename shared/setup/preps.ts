@@ -160,3 +160,20 @@ export function wallsForThickness(walls: readonly WallSpec[], thickness: number)
   })
   return moved.every((wall) => wall !== null) ? moved : null
 }
+
+/** A finding's one-click cure: another tilt for one facet of some edges; edges without a wall count as square. */
+export function applyTilt(
+  walls: readonly WallSpec[],
+  set: { readonly edges: readonly EdgeRef[]; readonly facet: number; readonly tilt: number },
+  thickness: number,
+): WallSpec[] {
+  const byEdge = new Map(walls.map((wall) => [edgeKey(wall), wall]))
+  return set.edges.reduce<WallSpec[]>(
+    (current, edge) => {
+      const own = byEdge.get(edgeKey(edge))?.facets ?? [{ depth: thickness, tilt: 0 }]
+      const facets = own.map((facet, i) => (i === set.facet ? { ...facet, tilt: set.tilt } : facet))
+      return applyPrep(current, [edge], facets)
+    },
+    [...walls],
+  )
+}

@@ -1,0 +1,26 @@
+import { contourAt } from '../body/contour.ts'
+import { levelsOf } from '../body/levels.ts'
+import type { SoundRange } from '../body/range.ts'
+import type { Body, Contour, ContourSegment } from '../body/types.ts'
+import type { EvaluatedContour } from './schema.ts'
+
+/** Contours at the top, at every facet end and at the bottom, as far as they are sound. */
+export function soundContours(body: Body, range: SoundRange): Contour[] {
+  if (range.empty) return []
+  return levelsOf(body)
+    .filter((depth) => depth >= range.from && depth <= range.to)
+    .map((depth) => contourAt(body, depth))
+}
+
+/**
+ * As vertices with bulges. Outer loop counter-clockwise, holes clockwise, each from the caller's vertex 0; a
+ * step between smooth walls adds a vertex.
+ */
+export function contourVertices({ depth, loops }: Contour): EvaluatedContour {
+  return { depth, loops: loops.map((loop) => loop.map(vertexOf)) }
+}
+
+function vertexOf(segment: ContourSegment): { x: number; y: number; bulge?: number } {
+  const { x, y } = segment.from
+  return segment.kind === 'line' ? { x, y } : { x, y, bulge: Math.tan(segment.sweep / 4) }
+}

@@ -1,0 +1,88 @@
+import { cornerName, edgeName } from '../body/names.ts'
+import type { CornerRef } from '../body/types.ts'
+import { degrees } from '../units/angle.ts'
+import { formatAngle, formatNumber } from '../units/format.ts'
+import { cureCorner, type CornerWalls } from './corner-cure.ts'
+import { limitPassed, strictestLimit, type EdgeWall, type Limits } from './place.ts'
+import type { Finding } from './schema.ts'
+
+/** Findings about one corner. */
+
+/** `jetTilt`: the largest angle that the jet needs along the seam, degrees. Null when it is within the limits. */
+export function cornerOverLimit(
+  corner: CornerRef,
+  jetTilt: number,
+  walls: CornerWalls,
+  limits: Limits,
+): Finding | null {
+  const passed = limitPassed(jetTilt, limits)
+  if (!passed) return null
+  const { before, after, interiorAngle } = walls
+  return {
+    code: passed.kind === 'mechanical' ? 'corner-over-mechanical-limit' : 'corner-over-working-limit',
+    severity: passed.kind === 'mechanical' ? 'stop' : 'warning',
+    loop: corner.loop,
+    vertex: corner.vertex,
+    value: jetTilt,
+    limit: passed.limit,
+    message:
+      `Corner ${cornerName(corner)} needs ${formatAngle(jetTilt)}; the ${passed.kind} limit is ${formatAngle(passed.limit)}. ` +
+      `Walls ${tiltsText(before)} and ${tiltsText(after)} meet at ${formatAngle(degrees(interiorAngle))}.`,
+    cure: cureCorner(walls, strictestLimit(limits), limits.mechanical),
+  }
+}
+
+function tiltsText(wall: EdgeWall): string {
+  return `${edgeName(wall)} ${wall.facets.map(({ tilt }) => formatAngle(tilt)).join('/')}`
+}
+
+/** Walls that meet smoothly at the top but differ below. */
+export function smoothStep(corner: CornerRef, before: EdgeWall, after: EdgeWall): Finding {
+  const [one, two] = [edgeName(before), edgeName(after)]
+  return {
+    code: 'smooth-step',
+    severity: 'warning',
+    loop: corner.loop,
+    vertex: corner.vertex,
+    message: `Edges ${one} and ${two} run smoothly into each other at ${cornerName(corner)}, but their walls differ: a step is left.`,
+    cure: stepCure(before, after),
+  }
+}
+
+function stepCure(before: EdgeWall, after: EdgeWall) {
+  const message = `Give ${edgeName(before)} and ${edgeName(after)} the same prep.`
+  const [one, two] = [before.facets[0], after.facets[0]]
+  if (!one || !two || before.facets.length > 1 || after.facets.length > 1) return { message }
+  const [from, to] = Math.abs(one.tilt) >= Math.abs(two.tilt) ? [one, after] : [two, before]
+  return {
+    message: `Set ${edgeName(to)} to ${formatAngle(from.tilt)} too.`,
+    set: { edges: [{ loop: to.loop, edge: to.edge }], facet: 0, tilt: from.tilt },
+  }
+}
+
+/**
+ * How far a fillet must leave the sharp corner to be worth a word, mm. Common practice, no source: finer than a
+ * drawing's general tolerance, and it keeps the flat corners of a polygon that stands for a curve quiet.
+ */
+const FILLET_WORTH_SAYING = 0.01
+
+/**
+ * A maker for one kerf (mm, at the top): a part may have thousands of such corners. It answers null where the
+ * corner is so flat that the fillet makes no difference.
+ */
+export function concaveFillets(kerf: number): (corner: CornerRef, interiorAngle: number) => Finding | null {
+  const radius = kerf / 2
+  const tail = ` keeps a fillet of ${formatNumber(radius)} mm, half the kerf.`
+  return ({ loop, vertex }, interiorAngle) => {
+    const left = radius * (1 / Math.abs(Math.sin(interiorAngle / 2)) - 1)
+    if (left < FILLET_WORTH_SAYING) return null
+    return {
+      code: 'concave-fillet',
+      severity: 'note',
+      loop,
+      vertex,
+      value: radius,
+      message: `Corner ${cornerName({ loop, vertex })}${tail}`,
+    }
+  }
+}
