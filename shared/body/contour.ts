@@ -1,31 +1,54 @@
+import type { Point } from '../geometry/types.ts'
+import {
+  CornerMode,
+  frameOf,
+  makePlaces,
+  place,
+  radiusAt,
+  sweepAt,
+  type Frame,
+  type Places,
+} from './frame.ts'
 import type { Body, Contour, ContourSegment } from './types.ts'
-import { offsetAt } from './datum.ts'
+import { fillOffsets } from './wall-table.ts'
 
 /**
- * The body's outline at a depth: lines moved, arcs with their new radius, neighbours met again. The caller
- * keeps within `soundRange`; outside it the plain contour is wrong.
+ * The body's outline at a depth: lines moved, arcs with their new radius, neighbours met again. Edge e of a
+ * loop is its e-th segment that is not a step. The caller keeps within `soundRange`: outside it the plain
+ * contour is wrong, and nothing is promised about it.
  */
 export function contourAt(body: Body, depth: number): Contour {
-  const loops = body.loops.map((loop, l) =>
-    loop.map((segment, e): ContourSegment => {
-      const corner = (at: number) => {
-        const n = loop.length
-        const before = loop[(at + n - 1) % n]
-        const after = loop[at % n]
-        if (!before || !after) throw new RangeError('empty loop')
-        const [u1, u2] = [before, after].map(({ from, to }) => {
-          const length = Math.hypot(to.x - from.x, to.y - from.y)
-          return { x: (to.x - from.x) / length, y: (to.y - from.y) / length }
-        })
-        if (!u1 || !u2) throw new RangeError('empty loop')
-        const o1 = offsetAt(body, l, (at + n - 1) % n, depth)
-        const o2 = offsetAt(body, l, at % n, depth)
-        const sin = u1.x * u2.y - u1.y * u2.x
-        const s = (o2 - o1 * (u1.x * u2.x + u1.y * u2.y)) / sin
-        return { x: after.from.x + o1 * u1.y + s * u1.x, y: after.from.y - o1 * u1.x + s * u1.y }
-      }
-      return { ...segment, from: corner(e), to: corner(e + 1), edge: e }
-    }),
-  )
-  return { depth, loops }
+  const frame = frameOf(body)
+  const offsets = new Float64Array(frame.count)
+  const places = makePlaces(frame.count)
+  fillOffsets(frame.table, depth, offsets)
+  place(frame, offsets, places)
+  return { depth, loops: body.loops.map((_, l) => contourLoop(frame, l, offsets, places)) }
+}
+
+function contourLoop(frame: Frame, loop: number, offsets: Float64Array, places: Places): ContourSegment[] {
+  const first = frame.loopStart[loop]!
+  const end = frame.loopStart[loop + 1]!
+  const out: ContourSegment[] = []
+  const opening: Point = { x: places.sx[first]!, y: places.sy[first]! }
+  let from = opening
+  for (let g = first; g < end; g++) {
+    const next = frame.next[g]!
+    const stepped = frame.mode[next] === CornerMode.step && offsets[g] !== offsets[next]
+    const to = !stepped && g === end - 1 ? opening : { x: places.ex[g]!, y: places.ey[g]! }
+    const segment = frame.segments[g]!
+    if (segment.kind === 'line') {
+      out.push({ kind: 'line', from, to, edge: g - first })
+    } else {
+      const radius = radiusAt(frame, g, offsets[g]!)
+      const sweep = sweepAt(frame, g, places)
+      out.push({ kind: 'arc', from, to, centre: segment.centre, radius, sweep, edge: g - first })
+    }
+    from = to
+    if (stepped) {
+      from = g === end - 1 ? opening : { x: places.sx[next]!, y: places.sy[next]! }
+      out.push({ kind: 'line', from: to, to: from, edge: null })
+    }
+  }
+  return out
 }

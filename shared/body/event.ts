@@ -1,11 +1,114 @@
-import type { Body, BodyEvent } from './types.ts'
+import { BOX_STRIDE, boxTree, visitMeetingPairs } from '../geometry/boxes.ts'
+import { boundsOf } from '../geometry/loop.ts'
+import { nearbyOrder } from '../geometry/order.ts'
+import { chainOf, marchOf, type Chain, type March } from './chain.ts'
+import { First } from './first.ts'
+import { frameOf, type Frame } from './frame.ts'
+import { levelsOf } from './levels.ts'
+import { offerMeeting } from './meet.ts'
+import { fillMotionBoxes } from './motion-boxes.ts'
+import type { Body, BodyEvent, EdgeRef } from './types.ts'
+import { fillOffsets, fillRates } from './wall-table.ts'
+import { offerVanishings } from './vanish.ts'
 
-export interface EventOptions {
-  /** Look beyond the plate down to this depth, the last facets prolonged; the plate's thickness when absent. */
-  readonly depth?: number
+/**
+ * The first event of the body, null when there is none between 0 and the thickness (both included). The
+ * drawing is marched away from: with datum 'top' downward, with 'bottom' upward from the thickness (the event
+ * is then the lowest one), with 'root' first from the outline to the top contour all at once (an event on the
+ * way is told at depth 0), then downward. Depth is right to 1e-9 of itself where only lines are concerned.
+ */
+export function firstEvent(body: Body): BodyEvent | null {
+  const known = events.get(body)
+  if (known !== undefined) return known
+  const event = march(frameOf(body))
+  events.set(body, event)
+  return event
 }
 
-/** The first event of the body, null when there is none within the plate. */
-export function firstEvent(_body: Body, _options: EventOptions = {}): BodyEvent | null {
+const events = new WeakMap<Body, BodyEvent | null>()
+
+/** One even stretch of the way from the drawing. */
+interface Stretch {
+  readonly length: number
+  readonly offset: Float64Array
+  readonly rate: Float64Array
+  readonly depthAt: (t: number) => number
+}
+
+function march(frame: Frame): BodyEvent | null {
+  const { body } = frame
+  if (frame.count === 0) return null
+  const order = nearbyOrder(body.loops.map((loop) => loop[0]?.from ?? { x: 0, y: 0 }))
+  const chain = chainOf(frame, order)
+  const near = roundingOf(body)
+  for (const stretch of stretchesOf(frame)) {
+    const happening = firstHappening(chain, stretch, near)
+    if (!happening) continue
+    const { t, kind, edge, other, x, y } = happening
+    return {
+      kind,
+      ...refOf(frame, edge),
+      depth: stretch.depthAt(Math.min(t, stretch.length)),
+      at: { x, y },
+      other: other < 0 ? null : refOf(frame, other),
+    }
+  }
   return null
+}
+
+function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: number) {
+  if (rate.every((w) => w === 0)) return null
+  const run = marchOf(chain, offset, rate, length)
+  const first = new First(length)
+  offerVanishings(run, first)
+  offerMeetings(run, near, first)
+  return first.found
+}
+
+/** Only pairs whose boxes overlap at the same moment are looked at, and only up to the first happening so far. */
+function offerMeetings(march: March, near: number, first: First): void {
+  const span = Math.min(first.until, march.length)
+  const boxes = new Float64Array(march.chain.count * BOX_STRIDE)
+  fillMotionBoxes(march, span, near, boxes)
+  visitMeetingPairs(
+    boxTree(boxes),
+    () => (span > 0 ? first.until / span : 1),
+    (e, f) => offerMeeting(march, e, f, near, first),
+  )
+}
+
+function* stretchesOf(frame: Frame): Generator<Stretch> {
+  const { body, table, count } = frame
+  const levels = levelsOf(body)
+  const upward = body.datum === 'bottom'
+  if (body.datum === 'root') {
+    const rate = new Float64Array(count)
+    fillOffsets(table, 0, rate)
+    yield { length: 1, offset: new Float64Array(count), rate, depthAt: () => 0 }
+  }
+  for (let i = 1; i < levels.length; i++) {
+    const [above, below] = upward
+      ? [levels[levels.length - 1 - i]!, levels[levels.length - i]!]
+      : [levels[i - 1]!, levels[i]!]
+    const offset = new Float64Array(count)
+    const rate = new Float64Array(count)
+    fillOffsets(table, upward ? below : above, offset)
+    fillRates(table, above, rate)
+    if (upward) for (let g = 0; g < count; g++) rate[g] = -rate[g]!
+    yield { length: below - above, offset, rate, depthAt: (t) => (upward ? below - t : above + t) }
+  }
+}
+
+/**
+ * What rounding may have done to a coordinate, mm: a few thousand units in the last place of the largest one,
+ * as a corner is the outcome of some dozens of operations and stands up to a thousand offsets away.
+ */
+function roundingOf(body: Body): number {
+  const box = boundsOf(body.loops.flat())
+  return 2 ** -40 * Math.max(-box.minX, -box.minY, box.maxX, box.maxY, body.thickness)
+}
+
+function refOf(frame: Frame, g: number): EdgeRef {
+  const loop = frame.loopOf[g]!
+  return { loop, edge: g - frame.loopStart[loop]! }
 }

@@ -7,12 +7,13 @@ export function squareWall(thickness: number): Wall {
   return { facets: [{ depth: thickness, tilt: 0 }] }
 }
 
-/** ∫ tan(tilt) from the top to a depth: how far the wall stands outside its top edge there, mm. */
+/** ∫ tan(tilt) from the top to a depth: how far the wall stands outside its top edge there, mm. The last facet is prolonged. */
 export function reachAt(wall: Wall, depth: number): number {
+  const last = wall.facets.length - 1
   let reach = 0
   let top = 0
-  for (const facet of wall.facets) {
-    if (depth <= facet.depth) return reach + (depth - top) * Math.tan(facet.tilt)
+  for (const [i, facet] of wall.facets.entries()) {
+    if (depth <= facet.depth || i === last) return reach + (depth - top) * Math.tan(facet.tilt)
     reach += (facet.depth - top) * Math.tan(facet.tilt)
     top = facet.depth
   }
@@ -41,12 +42,4 @@ export function outermostReach(wall: Wall): number {
  */
 export function tiltNeverIncreases(wall: Wall): boolean {
   return wall.facets.every((facet, i) => i === 0 || facet.tilt <= (wall.facets[i - 1]?.tilt ?? facet.tilt))
-}
-
-/** Whether two walls have the same tilt at every depth (facets that go on at the same tilt count as one). */
-export function sameWall(a: Wall, b: Wall): boolean {
-  if (a === b) return true
-  const depths = [0, ...a.facets.map((f) => f.depth), ...b.facets.map((f) => f.depth)]
-  const end = Math.max(...depths)
-  return depths.every((depth) => depth === end || tiltAt(a, depth) === tiltAt(b, depth))
 }

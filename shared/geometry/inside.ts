@@ -42,7 +42,7 @@ export function distanceToSegment(segment: Segment, { x, y }: Point): number {
  * How often a ray to +x crosses the segment. A crossing is counted where y passes from below-or-at to above
  * the ray (half-open), so that two segments meeting on the ray count once between them.
  */
-function rayCrossings(segment: Segment, { x, y }: Point): number {
+export function rayCrossings(segment: Segment, { x, y }: Point): number {
   const { from, to } = segment
   if (segment.kind === 'line') {
     if (from.y > y === to.y > y) return 0

@@ -62,18 +62,42 @@ export function reverseSegment(segment: Segment): Segment {
 /** Smallest box that holds the segment; an arc's quadrant points are counted. */
 export function segmentBounds(segment: Segment): Bounds {
   const { from, to } = segment
-  let minX = Math.min(from.x, to.x)
-  let maxX = Math.max(from.x, to.x)
-  let minY = Math.min(from.y, to.y)
-  let maxY = Math.max(from.y, to.y)
-  if (segment.kind === 'arc') {
-    const { centre, radius } = segment
-    if (arcFraction(segment, 0) < 1) maxX = Math.max(maxX, centre.x + radius)
-    if (arcFraction(segment, Math.PI / 2) < 1) maxY = Math.max(maxY, centre.y + radius)
-    if (arcFraction(segment, Math.PI) < 1) minX = Math.min(minX, centre.x - radius)
-    if (arcFraction(segment, -Math.PI / 2) < 1) minY = Math.min(minY, centre.y - radius)
+  const ends = {
+    minX: Math.min(from.x, to.x),
+    maxX: Math.max(from.x, to.x),
+    minY: Math.min(from.y, to.y),
+    maxY: Math.max(from.y, to.y),
   }
-  return { minX, minY, maxX, maxY }
+  if (segment.kind === 'line') return ends
+  return withQuadrants(ends, segment.centre, segment.radius, startAngle(segment), segment.sweep)
+}
+
+/** Smallest box that holds an arc told by its angles, radians. */
+export function arcBounds(centre: Point, radius: number, start: number, sweep: number): Bounds {
+  const ax = centre.x + radius * Math.cos(start)
+  const ay = centre.y + radius * Math.sin(start)
+  const bx = centre.x + radius * Math.cos(start + sweep)
+  const by = centre.y + radius * Math.sin(start + sweep)
+  const ends = {
+    minX: Math.min(ax, bx),
+    maxX: Math.max(ax, bx),
+    minY: Math.min(ay, by),
+    maxY: Math.max(ay, by),
+  }
+  return withQuadrants(ends, centre, radius, start, sweep)
+}
+
+function withQuadrants(ends: Bounds, centre: Point, radius: number, start: number, sweep: number): Bounds {
+  const passes = (quarter: number) => {
+    const turn = sweep > 0 ? quarter - start : start - quarter
+    return turn - 2 * Math.PI * Math.floor(turn / (2 * Math.PI)) < Math.abs(sweep)
+  }
+  return {
+    minX: passes(Math.PI) ? Math.min(ends.minX, centre.x - radius) : ends.minX,
+    minY: passes(-Math.PI / 2) ? Math.min(ends.minY, centre.y - radius) : ends.minY,
+    maxX: passes(0) ? Math.max(ends.maxX, centre.x + radius) : ends.maxX,
+    maxY: passes(Math.PI / 2) ? Math.max(ends.maxY, centre.y + radius) : ends.maxY,
+  }
 }
 
 function lineDirection({ from, to }: Segment): Point {

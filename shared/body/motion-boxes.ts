@@ -1,0 +1,109 @@
+import { arcBounds } from '../geometry/segment.ts'
+import { BOX_STRIDE } from '../geometry/boxes.ts'
+import { PieceKind, bentRange, centreOf, drawnStart, type March } from './chain.ts'
+
+/**
+ * A moving box round every piece from t = 0 to `span`, widened by `pad`. Even motion keeps between the boxes
+ * of both ends; where a point is bent, one box of everywhere that it goes stands for both.
+ */
+export function fillMotionBoxes(march: March, span: number, pad: number, out: Float64Array): void {
+  const { chain, x, y, vx, vy } = march
+  const { count, kind, next, bent } = chain
+  for (let e = 0; e < count; e++) {
+    const f = next[e]!
+    const at = e * BOX_STRIDE
+    if (kind[e] === PieceKind.arc) {
+      fillArc(march, e, span, out, at)
+    } else if (bent[e] || bent[f]) {
+      empty(out, at)
+      cover(march, e, span, out, at)
+      cover(march, f, span, out, at)
+      out.copyWithin(at + 4, at, at + 4)
+    } else {
+      for (let end = 0; end < 2; end++) {
+        const t = end * span
+        const ax = x[e]! + t * vx[e]!
+        const ay = y[e]! + t * vy[e]!
+        const bx = x[f]! + t * vx[f]!
+        const by = y[f]! + t * vy[f]!
+        out[at + 4 * end] = ax < bx ? ax : bx
+        out[at + 4 * end + 1] = ay < by ? ay : by
+        out[at + 4 * end + 2] = ax < bx ? bx : ax
+        out[at + 4 * end + 3] = ay < by ? by : ay
+      }
+    }
+    for (let side = 0; side < BOX_STRIDE; side++) out[at + side]! += side % 4 < 2 ? -pad : pad
+  }
+}
+
+function empty(out: Float64Array, at: number): void {
+  out[at] = out[at + 1] = Infinity
+  out[at + 2] = out[at + 3] = -Infinity
+}
+
+function include(
+  out: Float64Array,
+  at: number,
+  minX: number,
+  minY: number,
+  maxX: number,
+  maxY: number,
+): void {
+  out[at] = Math.min(out[at]!, minX)
+  out[at + 1] = Math.min(out[at + 1]!, minY)
+  out[at + 2] = Math.max(out[at + 2]!, maxX)
+  out[at + 3] = Math.max(out[at + 3]!, maxY)
+}
+
+/** Adds everywhere that point e goes. */
+function cover(march: March, e: number, span: number, out: Float64Array, at: number): void {
+  const branch = march.chain.bent[e]
+  if (!branch) {
+    for (const t of [0, span]) {
+      const x = march.x[e]! + t * march.vx[e]!
+      const y = march.y[e]! + t * march.vy[e]!
+      include(out, at, x, y, x, y)
+    }
+    return
+  }
+  const { radii, headings } = bentRange(march, e, branch, 0, span)
+  for (const radius of radii) {
+    const box = arcBounds(branch.centre, radius, headings[0], headings[1] - headings[0])
+    include(out, at, box.minX, box.minY, box.maxX, box.maxY)
+  }
+}
+
+/** An arc between smooth ends keeps its headings; a bent end may widen them, by no more than it turns. */
+function fillArc(march: March, e: number, span: number, out: Float64Array, at: number): void {
+  const { chain } = march
+  const f = chain.next[e]!
+  const centre = centreOf(chain, e)
+  const bent = chain.bent[e] ?? chain.bent[f]
+  let from = bent ? Math.atan2(march.y[e]! - centre.y, march.x[e]! - centre.x) : drawnStart(chain, e)
+  let sweep = march.sweep[e]!
+  if (bent) {
+    const way = Math.sign(sweep)
+    const before = spread(e)
+    const after = spread(f)
+    from -= way * before
+    sweep += way * (before + after)
+  }
+  for (let end = 0; end < 2; end++) {
+    const box = arcBounds(centre, march.radius[e]! + end * span * march.radiusRate[e]!, from, sweep)
+    empty(out, at + 4 * end)
+    include(out, at + 4 * end, box.minX, box.minY, box.maxX, box.maxY)
+  }
+
+  /** How far a bent end's heading about this arc's centre can go from where it starts. */
+  function spread(point: number): number {
+    const branch = chain.bent[point]
+    if (!branch) return 0
+    const { radii, headings } = bentRange(march, point, branch, 0, span)
+    const turn = headings[1] - headings[0]
+    if (branch.centre === centre) return turn
+    // About the other centre: a point that strays by s turns by at most asin(s / r) ≤ (π/2) s / r.
+    const stray = Math.abs(radii[1] - radii[0]) + Math.max(...radii) * turn
+    const narrowest = march.radius[e]! + Math.min(0, span * march.radiusRate[e]!)
+    return narrowest > 0 ? Math.min(2 * Math.PI, ((Math.PI / 2) * stray) / narrowest) : 2 * Math.PI
+  }
+}

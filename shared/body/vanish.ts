@@ -1,0 +1,96 @@
+import { PieceKind, centreOf, pointStray, pointX, pointY, sweepOf, type March } from './chain.ts'
+import { CornerMode } from './frame.ts'
+import type { First } from './first.ts'
+import { firstZero } from './first-zero.ts'
+
+/**
+ * Vanishings: an edge's length or an arc's radius reaches zero, or neighbours become tangent and then no
+ * longer meet. Offers each piece's earliest one; what depends evenly on depth is solved directly.
+ */
+export function offerVanishings(march: March, first: First): void {
+  const { chain } = march
+  const { count, kind, next, edge, ux, uy, bent, frame } = chain
+  for (let e = 0; e < count; e++) {
+    if (kind[e] === PieceKind.step) continue
+    const f = next[e]!
+    const g = edge[e]!
+    if (frame.mode[g] === CornerMode.spike) offerSpike(march, e, first)
+    if (bent[e]) offerParting(march, e, first)
+    if (kind[e] === PieceKind.arc) {
+      const shrink = -march.radiusRate[e]!
+      if (shrink > 0) {
+        const { x, y } = centreOf(chain, e)
+        first.offer(Math.max(0, march.radius[e]! / shrink), 'vanish', g, -1, x, y)
+      }
+    } else if (!bent[e] && !bent[f]) {
+      const length = (march.x[f]! - march.x[e]!) * ux[e]! + (march.y[f]! - march.y[e]!) * uy[e]!
+      const shrink = (march.vx[e]! - march.vx[f]!) * ux[e]! + (march.vy[e]! - march.vy[f]!) * uy[e]!
+      if (shrink > 0 && length <= shrink * first.until) {
+        const t = Math.max(0, length / shrink)
+        first.offer(t, 'vanish', g, -1, march.x[e]! + t * march.vx[e]!, march.y[e]! + t * march.vy[e]!)
+      }
+    }
+  }
+  // Points on arcs are only right up to where their curves part, so they are looked at last.
+  if (bent.some(Boolean)) for (let e = 0; e < count; e++) offerBentVanishing(march, e, first)
+}
+
+function offerBentVanishing(march: March, e: number, first: First): void {
+  const { kind, next, edge, ux, uy, bent } = march.chain
+  const f = next[e]!
+  if (kind[e] === PieceKind.step || (!bent[e] && !bent[f])) return
+  const isArc = kind[e] === PieceKind.arc
+  const end = Math.min(first.until, march.length)
+  const way = isArc ? Math.sign(march.sweep[e]!) : 0
+  const length = isArc
+    ? (t: number) => way * sweepOf(march, e, t)
+    : (t: number) =>
+        (pointX(march, f, t) - pointX(march, e, t)) * ux[e]! +
+        (pointY(march, f, t) - pointY(march, e, t)) * uy[e]!
+  const slack = (from: number, to: number) => {
+    const stray = pointStray(march, e, from, to) + pointStray(march, f, from, to)
+    if (!isArc) return stray
+    // A point that strays by s turns by at most asin(s / r) ≤ (π/2) s / r about the centre.
+    const narrowest = march.radius[e]! + Math.min(from * march.radiusRate[e]!, to * march.radiusRate[e]!)
+    return narrowest > 0 ? ((Math.PI / 2) * stray) / narrowest : Infinity
+  }
+  const t = firstZero(length, slack, end)
+  if (t !== null) first.offer(t, 'vanish', edge[e]!, -1, pointX(march, e, t), pointY(march, e, t))
+}
+
+/** Doubled-back lines part or cross as soon as either moves. */
+function offerSpike(march: March, e: number, first: First): void {
+  const g = march.chain.edge[e]!
+  const p = march.chain.frame.previous[g]!
+  if (march.rate[p] !== 0 || march.rate[g] !== 0)
+    first.offer(0, 'vanish', Math.min(p, g), -1, march.x[e]!, march.y[e]!)
+}
+
+/** A line leaves its circle where |distance of the centre| = radius; two circles where the centres are r₁ ± r₂ apart. */
+function offerParting(march: March, e: number, first: First): void {
+  const { chain, offset, rate } = march
+  const branch = chain.bent[e]!
+  const g = chain.edge[e]!
+  const p = chain.frame.previous[g]!
+  const [mine, others] = branch.circleIsBefore ? [p, g] : [g, p]
+  const r = branch.radius + branch.grow * offset[mine]!
+  const rRate = branch.grow * rate[mine]!
+  const offerMargin = (margin: number, marginRate: number) => {
+    if (marginRate >= 0) return
+    const t = Math.max(0, -margin / marginRate)
+    if (t <= first.until)
+      first.offer(t, 'vanish', Math.min(p, g), -1, pointX(march, e, t), pointY(march, e, t))
+  }
+  if (branch.second) {
+    const { apart, grow, radius } = branch.second
+    const s = radius + grow * offset[others]!
+    const sRate = grow * rate[others]!
+    offerMargin(r + s - apart, rRate + sRate)
+    offerMargin(apart - r + s, sRate - rRate)
+    offerMargin(apart + r - s, rRate - sRate)
+  } else {
+    const h = branch.along + offset[others]!
+    offerMargin(r - h, rRate - rate[others]!)
+    offerMargin(r + h, rRate + rate[others]!)
+  }
+}
