@@ -38,11 +38,14 @@ export const noticeCodes = [
   'spline-approximated',
   'ellipse-approximated',
   'block-expanded',
+  'block-missing',
   'outside-any-part',
   'loop-crosses',
+  'lines-overlap',
   'count-corrected',
   'extrusion-mirrored',
   'not-planar',
+  'origin-moved',
 ] as const
 
 export const noticeSchema = z.strictObject({
