@@ -1,5 +1,6 @@
 import { useId, useState, type ReactNode } from 'react'
 import { ACTS, type Act, type ActContext, type ActGroup } from './acts.ts'
+import { Arrow } from './Arrow.tsx'
 import { Toolbar } from './Toolbar.tsx'
 
 interface ViewStripProps {
@@ -19,11 +20,12 @@ export function ViewStrip({ context, hasSelection, folded, compact }: ViewStripP
   const [open, setOpen] = useState(false)
   const panel = useId()
 
-  const cells = (acts: readonly Act[], stop: string) =>
+  const cells = (acts: readonly Act[], stop: string, alone = false) =>
     acts.map((act) => (
       <Cell
         key={act.name}
         act={act}
+        alone={alone}
         compact={compact}
         stops={stop === act.name}
         disabled={act.needsSelection === true && !hasSelection}
@@ -62,7 +64,7 @@ export function ViewStrip({ context, hasSelection, folded, compact }: ViewStripP
       <Toolbar label="view" first={FIRST[0]!.name} className="flex border-t border-rule bg-panel">
         {(stop) => (
           <>
-            {cells(FIRST, stop)}
+            {cells(FIRST, stop, true)}
             <button
               type="button"
               data-stop={MORE}
@@ -101,13 +103,15 @@ function Group({ name, wide, children }: { name: ActGroup; wide: boolean; childr
 
 interface CellProps {
   readonly act: Act
+  /** Without its group's word beside it. */
+  readonly alone: boolean
   readonly compact: boolean
   readonly stops: boolean
   readonly disabled: boolean
   readonly onPress: () => void
 }
 
-function Cell({ act, compact, stops, disabled, onPress }: CellProps) {
+function Cell({ act, alone, compact, stops, disabled, onPress }: CellProps) {
   return (
     <button
       type="button"
@@ -120,7 +124,11 @@ function Cell({ act, compact, stops, disabled, onPress }: CellProps) {
       onClick={() => !disabled && onPress()}
       className={cellClass(compact)}
     >
-      {act.text}
+      {act.arrow ? (
+        <Arrow heading={act.arrow} bent={act.group === 'turn'} />
+      ) : (
+        (alone && act.alone) || act.text
+      )}
     </button>
   )
 }

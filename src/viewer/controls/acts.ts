@@ -15,12 +15,17 @@ export interface ActContext {
   readonly clear: () => void
 }
 
+export type Heading = 'left' | 'right' | 'up' | 'down'
 export type ActGroup = 'look from' | 'fit' | 'zoom' | 'turn' | 'move'
 
 export interface Act {
   readonly group: ActGroup
-  /** On the button. */
+  /** On the button, under its group's word. */
   readonly text: string
+  /** On the button where the group's word is not shown. */
+  readonly alone?: string
+  /** Drawn in place of the text: an arrow that way, bent for a turn. */
+  readonly arrow?: Heading
   /** For screen readers and as a tip. */
   readonly name: string
   /** The key that does the same, as a person would name it. */
@@ -43,25 +48,41 @@ const looks = STANDARD_VIEWS.map(({ name }, i): Act => ({
 /** Every act of the camera, each with a button of its own. The part turns and moves the way its word says. */
 export const ACTS: readonly Act[] = [
   ...looks,
-  { group: 'fit', text: 'fit', name: 'fit the part', key: 'F', first: true, run: ({ fitAll }) => fitAll() },
   {
     group: 'fit',
-    text: 'fit selected',
-    name: 'fit the selected edges',
+    text: 'all',
+    alone: 'fit',
+    name: 'fit all',
+    key: 'F',
+    first: true,
+    run: ({ fitAll }) => fitAll(),
+  },
+  {
+    group: 'fit',
+    text: 'selected',
+    name: 'fit selected',
     key: 'shift F',
     needsSelection: true,
     run: ({ fitSelection }) => fitSelection(),
   },
   { group: 'zoom', text: '−', name: 'zoom out', key: '−', run: ({ control }) => control.zoom(1 / ZOOM) },
   { group: 'zoom', text: '+', name: 'zoom in', key: '+', run: ({ control }) => control.zoom(ZOOM) },
-  { group: 'turn', text: '←', name: 'turn left', key: '←', first: true, run: turn(1, 0) },
-  { group: 'turn', text: '→', name: 'turn right', key: '→', first: true, run: turn(-1, 0) },
-  { group: 'turn', text: '↑', name: 'turn up', key: '↑', run: turn(0, -1) },
-  { group: 'turn', text: '↓', name: 'turn down', key: '↓', run: turn(0, 1) },
-  { group: 'move', text: '←', name: 'move left', key: 'shift ←', run: move(-1, 0) },
-  { group: 'move', text: '→', name: 'move right', key: 'shift →', run: move(1, 0) },
-  { group: 'move', text: '↑', name: 'move up', key: 'shift ↑', run: move(0, -1) },
-  { group: 'move', text: '↓', name: 'move down', key: 'shift ↓', run: move(0, 1) },
+  { group: 'turn', text: 'left', arrow: 'left', name: 'turn left', key: '←', first: true, run: turn(1, 0) },
+  {
+    group: 'turn',
+    text: 'right',
+    arrow: 'right',
+    name: 'turn right',
+    key: '→',
+    first: true,
+    run: turn(-1, 0),
+  },
+  { group: 'turn', text: 'up', arrow: 'up', name: 'turn up', key: '↑', run: turn(0, -1) },
+  { group: 'turn', text: 'down', arrow: 'down', name: 'turn down', key: '↓', run: turn(0, 1) },
+  { group: 'move', text: 'left', arrow: 'left', name: 'move left', key: 'shift ←', run: move(-1, 0) },
+  { group: 'move', text: 'right', arrow: 'right', name: 'move right', key: 'shift →', run: move(1, 0) },
+  { group: 'move', text: 'up', arrow: 'up', name: 'move up', key: 'shift ↑', run: move(0, -1) },
+  { group: 'move', text: 'down', arrow: 'down', name: 'move down', key: 'shift ↓', run: move(0, 1) },
 ]
 
 const ARROWS: Record<string, string> = { ArrowLeft: '←', ArrowRight: '→', ArrowUp: '↑', ArrowDown: '↓' }

@@ -100,7 +100,7 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
           aria-hidden="true"
           data-tone={tone}
           data-edge={key}
-          className={`invisible absolute top-0 left-0 px-0.5 whitespace-nowrap ${TONES[tone]}`}
+          className={`invisible absolute top-0 left-0 px-0.5 whitespace-nowrap [text-shadow:0_0_2px_var(--sheet),0_0_2px_var(--sheet)] ${TONES[tone]}`}
         >
           {text}
         </span>

@@ -11,6 +11,8 @@ export const BALLOON_RADIUS = 11
 /** How far a balloon stands from its place, px, and the turns away from "outward" that are tried. */
 const BALLOON_ARMS = [34, 52]
 const BALLOON_TURNS = [0, 0.6, -0.6, 1.2, -1.2, 2.2, -2.2]
+/** Points of a leader, as shares of it, that labels keep clear of. */
+const LEADER_KEPT_CLEAR = [0.1, 0.4, 0.7]
 /** Above this many triangles, labels are not tested for being hidden: the search tree waits for the pointer. */
 const TEST_HIDDEN_UP_TO = 60_000
 
@@ -116,6 +118,9 @@ export class OverlayLayer {
       const reach = Math.hypot(x - wish.from.x, y - wish.from.y)
       const share = 1 - BALLOON_RADIUS / reach
       leaders.push(line(wish.from, { x: mix(wish.from.x, x, share), y: mix(wish.from.y, y, share) }))
+      for (const at of LEADER_KEPT_CLEAR) {
+        taken.push(square({ x: mix(wish.from.x, x, at * share), y: mix(wish.from.y, y, at * share) }, 1))
+      }
     })
 
     const { toward } = basisOf(view)

@@ -1,5 +1,6 @@
 import { BufferAttribute, BufferGeometry, Points, ShaderMaterial, Vector3 } from 'three'
 import type { Rgb } from '../palette.ts'
+import { setRgb } from './face-material.ts'
 
 /** Hatched discs of a fixed size on screen, one at every breached corner. */
 export const DISC_RADIUS = 15
@@ -64,7 +65,7 @@ export class CornerDiscs {
   }
 
   colour(breach: Rgb): void {
-    ;(this.#material.uniforms.colour!.value as Vector3).set(breach[0] / 255, breach[1] / 255, breach[2] / 255)
+    setRgb(this.#material.uniforms.colour!.value as Vector3, breach)
   }
 
   setPixelRatio(ratio: number): void {

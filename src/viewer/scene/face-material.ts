@@ -1,5 +1,5 @@
 import { FrontSide, ShaderMaterial, Vector3 } from 'three'
-import type { Rgb } from '../palette.ts'
+import type { Palette, Rgb } from '../palette.ts'
 
 /**
  * Flat paint for the faces: the vertex colour as it is (tokens are already in the screen's colour space),
@@ -18,19 +18,21 @@ void main() {
 
 const fragmentShader = /* glsl */ `
 uniform vec3 hatch;
+uniform vec3 halo;
 uniform float pixelRatio;
 uniform float shade;
 varying vec4 vPaint;
 varying vec3 vNormal;
 const vec3 light = normalize(vec3(-0.35, 0.75, 0.65));
 const float pitch = 9.0;
-const float halfWidth = 0.75;
+const float halfWidth = 0.85;
 void main() {
   float facing = dot(normalize(vNormal), light);
   vec3 colour = vPaint.rgb * (1.0 - shade * (0.5 - 0.5 * facing));
   if (vPaint.a > 0.5) {
     float across = (gl_FragCoord.x - gl_FragCoord.y) / pixelRatio / 1.41421356;
     float apart = abs(fract(across / pitch) - 0.5) * pitch;
+    colour = mix(halo, colour, 0.35 + 0.65 * smoothstep(halfWidth, halfWidth + 1.6, apart));
     colour = mix(hatch, colour, smoothstep(halfWidth - 0.35, halfWidth + 0.35, apart));
   }
   gl_FragColor = vec4(colour, 1.0);
@@ -45,7 +47,12 @@ export class FaceMaterial extends ShaderMaterial {
       vertexShader,
       fragmentShader,
       side: FrontSide,
-      uniforms: { hatch: { value: new Vector3() }, pixelRatio: { value: 1 }, shade: { value: 0 } },
+      uniforms: {
+        hatch: { value: new Vector3() },
+        halo: { value: new Vector3() },
+        pixelRatio: { value: 1 },
+        shade: { value: 0 },
+      },
       // Faces step back by the least amount that the depth buffer tells apart, so that lines on them win.
       polygonOffset: true,
       polygonOffsetFactor: 1,
@@ -53,12 +60,19 @@ export class FaceMaterial extends ShaderMaterial {
     })
   }
 
-  dress(breach: Rgb, theme: 'paper' | 'tank'): void {
-    ;(this.uniforms.hatch!.value as Vector3).set(breach[0] / 255, breach[1] / 255, breach[2] / 255)
+  dress({ breach, sheet, theme }: Palette): void {
+    setRgb(this.uniforms.hatch!.value as Vector3, breach)
+    // A line of the sheet's colour beside each hatch line keeps it readable on walls of a like colour.
+    setRgb(this.uniforms.halo!.value as Vector3, sheet)
     this.uniforms.shade!.value = SHADE[theme]
   }
 
   setPixelRatio(ratio: number): void {
     this.uniforms.pixelRatio!.value = ratio
   }
+}
+
+/** A colour of the screen as the shaders take it, 0 to 1. */
+export function setRgb(vector: Vector3, [r, g, b]: Rgb): void {
+  vector.set(r / 255, g / 255, b / 255)
 }

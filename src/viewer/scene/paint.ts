@@ -3,7 +3,7 @@ import type { BodyMesh, EdgeRef, MeshFace } from '../../../shared/body/types.ts'
 import { mix, type Palette, type Rgb } from '../palette.ts'
 
 /** Share of the selection colour in a selected wall. */
-const SELECT_SHARE = 0.3
+const SELECT_SHARE = 0.14
 /** How far the underside stands back from the top face. */
 const UNDERSIDE_SHARE = 0.12
 

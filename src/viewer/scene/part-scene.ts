@@ -75,7 +75,7 @@ export class PartScene {
     if (!index) return
     const input = { palette, tiltOf, selection, breachedEdges: breaches.edges }
     this.#part.paint((into) => paintVertices(index.mesh, index.faceOfVertex, input, into))
-    this.#faces.dress(palette.breach, palette.theme)
+    this.#faces.dress(palette)
     const lines = this.#lines
     for (const kind of ['top', 'seam'] as const) lines[kind].colour(palette.ink)
     lines.level.colour(palette.ink)
