@@ -48,11 +48,17 @@ export const CornerMode = {
 } as const
 
 /**
- * Neighbours that turn by less than this are tangent, radians: 1 mm in a metre, a third of the tightest angle
- * class of ISO 13920 (A, 10′). A smooth corner moves along its mitre normal, exactly on lines; on an arc it
- * leaves the circle by (offset × turn)² / 8r at most, nothing for drawings that are tangent to their own digits.
+ * Two lines that turn by less than this are in line, radians: 0.1 mm in a metre, what a drawing written to
+ * 1e-4 mm says about an edge of 1 mm. Anything more is taken as meant, however far its seam then leans.
  */
-export const SMOOTH_TURN = 1e-3
+export const STRAIGHT_TURN = 1e-4
+
+/**
+ * Neighbours of which one is an arc are tangent below this turn, radians: 1 mm in a metre, a third of the
+ * tightest angle class of ISO 13920 (A, 10′). An arc's ends are rounded, so that tangents are never exact. The
+ * corner moves along its mitre normal: exactly on lines, off the circle by at most (offset × turn)² / 8r.
+ */
+export const TANGENT_TURN = 1e-3
 
 /** Lines within this of doubling back form a spike, radians: their mitre would lie a million offsets away. */
 const SPIKE_TURN = Math.PI - 1e-6
@@ -120,7 +126,7 @@ function compile(body: Body): Frame {
     const phi = Math.atan2(sin, cos)
     turn[g] = phi
     const lines = before.kind === 'line' && after.kind === 'line'
-    const smooth = Math.abs(phi) <= SMOOTH_TURN
+    const smooth = Math.abs(phi) <= (lines ? STRAIGHT_TURN : TANGENT_TURN)
     if (!smooth && !lines) {
       mode[g] = CornerMode.branch
       branches.set(g, branchOf(before, after))
