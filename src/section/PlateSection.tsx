@@ -7,7 +7,6 @@ import { dimensionsOf } from './dimensions.ts'
 import { labelLines, labelSize as textSize } from './label-text.ts'
 import { layoutSection } from './layout.ts'
 import type { PlacedLabel, Size } from './layout-types.ts'
-import { scaleText, standardScales } from './scales.ts'
 import { SectionLines } from './SectionLines.tsx'
 import type { SectionDimension, SectionSpec, SectionTolerances } from './types.ts'
 import { useWidth } from './use-width.ts'
@@ -61,9 +60,8 @@ export function PlateSection(props: PlateSectionProps) {
     width,
     plateHeight,
     labelSize: (dimension) => labelSize?.(dimension) ?? textSize(dimension),
-    scales: standardScale ? standardScales : undefined,
+    standardScale,
   })
-  const scale = standardScale ? scaleText(layout.scale) : null
   return (
     <figure className="m-0">
       {/* Its content must not hold a narrowing page open: the drawing follows the page. */}
@@ -83,9 +81,9 @@ export function PlateSection(props: PlateSectionProps) {
           ))}
         </div>
       </div>
-      {scale && (
+      {layout.scaleText && (
         <figcaption className={print ? 'text-small text-black' : 'text-small text-muted print:text-black'}>
-          {`Section at ${scale} on paper`}
+          {`Section at ${layout.scaleText} on paper`}
         </figcaption>
       )}
     </figure>

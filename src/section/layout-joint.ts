@@ -43,7 +43,7 @@ export function layoutJoint(
   const minX = Math.min(...left.map((point) => point.x))
   const maxX = Math.max(...right.map((point) => point.x))
   const room = Math.max(24, options.width - leftPad - rightPad)
-  const scale = chooseScale(
+  const { scale, scaleText } = chooseScale(
     Math.min(options.plateHeight / spec.thickness, maxX > minX ? room / (maxX - minX) : Infinity),
     options,
   )
@@ -110,6 +110,7 @@ export function layoutJoint(
     width: options.width,
     height: Math.max(below, lowest(labels)) + 2,
     scale,
+    scaleText,
     plates: [
       [{ x: edges[0], y: faceTop }, ...leftPx, { x: edges[0], y: faceBottom }],
       [{ x: edges[1], y: faceTop }, ...rightPx, { x: edges[1], y: faceBottom }],

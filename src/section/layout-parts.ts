@@ -1,3 +1,4 @@
+import { PX_PER_MM, standardScaleWithin } from './scales.ts'
 import { stackLabels } from './stack.ts'
 import type { Box, Hairline, LayoutOptions, PlacedLabel, Px, Size } from './layout-types.ts'
 import type { SectionDimension } from './types.ts'
@@ -24,10 +25,13 @@ export function widest(sizes: readonly Size[]): number {
   return Math.max(0, ...sizes.map((size) => size.width))
 }
 
-/** The largest of the offered scales that fits, or the fitting one. */
-export function chooseScale(fitting: number, { scales }: LayoutOptions): number {
-  const standard = scales?.filter((scale) => scale <= fitting).sort((a, b) => b - a)[0]
-  return standard ?? fitting
+/** Pixels per millimetre: what fits, or the largest standard scale within it. */
+export function chooseScale(
+  fitting: number,
+  { standardScale }: LayoutOptions,
+): { readonly scale: number; readonly scaleText: string | null } {
+  const standard = standardScale ? standardScaleWithin(fitting / PX_PER_MM) : undefined
+  return { scale: standard ? standard.ratio * PX_PER_MM : fitting, scaleText: standard?.text ?? null }
 }
 
 /** A label's box round a centre, moved as little as needed to stay between two x. */

@@ -51,7 +51,7 @@ export function layoutPlate(
   const insideWidth = inside.length > 0 ? widest(inside.map(size)) + LEADER + 2 * GAP : 0
   const stub = Math.max(PLATE_STUB, insideWidth)
   const room = Math.max(24, options.width - columnWidth - stub)
-  const scale = chooseScale(
+  const { scale, scaleText } = chooseScale(
     Math.min(options.plateHeight / thickness, right > left ? room / (right - left) : Infinity),
     options,
   )
@@ -142,6 +142,7 @@ export function layoutPlate(
     width: options.width,
     height: Math.max(below, lowest(labels), faceBottom + GAP) + 2,
     scale,
+    scaleText,
     plates: [[start, ...placed, end]],
     faces: [
       [start, placed[0]!],

@@ -48,6 +48,8 @@ export interface PlacedFacet {
 export interface SectionLayout extends Size {
   /** Pixels for a millimetre. */
   readonly scale: number
+  /** `2 : 1` when a standard scale was asked for and found. */
+  readonly scaleText: string | null
   readonly plates: readonly (readonly Px[])[]
   /** Top and bottom lines of the plates. */
   readonly faces: readonly (readonly Px[])[]
@@ -66,6 +68,6 @@ export interface LayoutOptions {
   readonly plateHeight: number
   /** Room that the label of a dimension needs. */
   readonly labelSize: (dimension: SectionDimension) => Size
-  /** Pixels per millimetre to use when it fits, e.g. a standard scale of paper; the largest that fits wins. */
-  readonly scales?: readonly number[] | undefined
+  /** Take the largest standard scale of paper that fits instead of filling the room. */
+  readonly standardScale?: boolean | undefined
 }

@@ -1,27 +1,20 @@
 /** CSS px per mm at actual size: CSS defines an inch as 96 px. */
 export const PX_PER_MM = 96 / 25.4
 
-/** Recommended scales of ISO 5455 (from memory): drawing : object. */
-const STANDARD: readonly (readonly [number, number])[] = [
-  [50, 1],
-  [20, 1],
-  [10, 1],
-  [5, 1],
-  [2, 1],
-  [1, 1],
-  [1, 2],
-  [1, 5],
-  [1, 10],
-  [1, 20],
-  [1, 50],
-  [1, 100],
-  [1, 200],
+export interface StandardScale {
+  /** Drawn length by real length. */
+  readonly ratio: number
+  /** `2 : 1` */
+  readonly text: string
+}
+
+/** Recommended scales of ISO 5455 (from memory), the largest first. */
+export const standardScales: readonly StandardScale[] = [
+  ...[50, 20, 10, 5, 2, 1].map((drawn) => ({ ratio: drawn, text: `${drawn} : 1` })),
+  ...[2, 5, 10, 20, 50, 100, 200].map((real) => ({ ratio: 1 / real, text: `1 : ${real}` })),
 ]
 
-export const standardScales: readonly number[] = STANDARD.map(([drawn, real]) => (drawn / real) * PX_PER_MM)
-
-/** `2 : 1` for a standard scale in px per mm; null for any other. */
-export function scaleText(pxPerMm: number): string | null {
-  const found = STANDARD.find(([drawn, real]) => (drawn / real) * PX_PER_MM === pxPerMm)
-  return found ? `${found[0]} : ${found[1]}` : null
+/** The largest standard scale that is not over the ratio that fits. */
+export function standardScaleWithin(ratio: number): StandardScale | undefined {
+  return standardScales.find((scale) => scale.ratio <= ratio)
 }
