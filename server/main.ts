@@ -1,0 +1,99 @@
+import { existsSync } from 'node:fs'
+import { createServer, type Server } from 'node:http'
+import type { AddressInfo } from 'node:net'
+import path from 'node:path'
+import { fileURLToPath } from 'node:url'
+import { type Config, ConfigError, readConfig } from './config.ts'
+import { createDataSource, openDatabase } from './db/data-source.ts'
+import { keepHouse } from './db/housekeeping.ts'
+import { createFirstAdmin, refuseDemoAccounts } from './features/people/first-people.ts'
+import { createApp } from './http/app.ts'
+import { createLog, type Logger } from './log.ts'
+import { createServices } from './start-services.ts'
+
+/** How long requests in work may take to finish once the server has been told to stop, ms. */
+const STOP_PATIENCE = 15_000
+
+async function main(): Promise<void> {
+  const config = readConfig(process.env)
+  const log = createLog(config.logLevel)
+  const root = projectRoot()
+  const dataSource = createDataSource(config.databaseUrl, config.databasePool)
+  await openDatabase(dataSource)
+  const services = createServices(config, log, dataSource, root)
+  if (config.demo) {
+    const { seedDemo } = await import('./db/seed.ts')
+    await seedDemo(services)
+  } else {
+    if (config.production) await refuseDemoAccounts(services)
+    await createFirstAdmin(services)
+  }
+  const stopHousekeeping = keepHouse(services)
+
+  const webDir = config.webDir ?? path.join(root, 'dist', 'web')
+  const hasWeb = existsSync(path.join(webDir, 'index.html'))
+  if (!hasWeb) log.warn('the pages are not built: only the API is served')
+  const server = createServer(createApp(services, hasWeb ? webDir : null))
+  await listen(server, config)
+  const { port } = server.address() as AddressInfo
+  log.info({ port, host: config.host, demo: config.demo }, 'listening')
+  process.send?.({ ready: true, port })
+
+  stopOnSignal(log, async () => {
+    stopHousekeeping()
+    await close(server)
+    await dataSource.destroy()
+  })
+}
+
+/** The nearest folder above with a package.json: sources and build lie at different depths below it. */
+function projectRoot(): string {
+  let folder = path.dirname(fileURLToPath(import.meta.url))
+  while (!existsSync(path.join(folder, 'package.json')) && folder !== path.dirname(folder)) {
+    folder = path.dirname(folder)
+  }
+  return folder
+}
+
+async function listen(server: Server, { port, host }: Config): Promise<void> {
+  await new Promise<void>((resolve, reject) => {
+    server.once('error', reject)
+    server.listen(port, host, resolve)
+  })
+}
+
+/** Takes no new requests, answers those accepted, then closes. */
+async function close(server: Server): Promise<void> {
+  const closed = new Promise<void>((resolve) => server.close(() => resolve()))
+  const timer = setTimeout(() => server.closeAllConnections(), STOP_PATIENCE)
+  await closed
+  clearTimeout(timer)
+}
+
+function stopOnSignal(log: Logger, stop: () => Promise<void>): void {
+  let stopping = false
+  for (const signal of ['SIGTERM', 'SIGINT'] as const) {
+    process.on(signal, () => {
+      if (stopping) return
+      stopping = true
+      log.info({ signal }, 'stopping')
+      stop().then(
+        () => {
+          log.info('stopped')
+          process.exit(0)
+        },
+        (error: unknown) => {
+          log.error({ err: error }, 'could not stop cleanly')
+          process.exit(1)
+        },
+      )
+    })
+  }
+}
+
+main().catch((error: unknown) => {
+  const text =
+    error instanceof ConfigError ? error.message : error instanceof Error ? error.stack : String(error)
+  process.stderr.write(`${text}\n`)
+  process.exit(1)
+})
