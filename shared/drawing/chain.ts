@@ -3,6 +3,8 @@ import type { Segment } from '../geometry/types.ts'
 export interface DrawnSegment {
   readonly segment: Segment
   readonly layer: string
+  /** Number of the entity that drew it, in drawing order. */
+  readonly entity: number
 }
 
 /** Segments that follow one another; each starts exactly where the one before ends. */
@@ -11,13 +13,6 @@ export interface Chain {
   readonly closed: boolean
   /** More than two ends meet somewhere along the figure that this chain is part of. */
   readonly branched: boolean
-}
-
-export interface LinkTolerances {
-  /** Ends nearer than this are one point; rounding in the file, never reported. mm */
-  readonly coincident: number
-  /** Loose ends nearer than this are brought together, and reported. mm */
-  readonly join: number
 }
 
 /** A segment between two numbered points. */

@@ -97,7 +97,7 @@ function drawnIn(document: DrawingDocument, unit: LengthUnit, options: Options):
   const layers = new Map<string, { name: string; entities: number; read: boolean }>()
   const entities = new Map<string, { type: string; read: number; ignored: number }>()
   const wanted = options.layers && new Set(options.layers)
-  let anyGeometry = false
+  let entity = 0
   const count = (type: string, key: 'read' | 'ignored') => {
     const entry = entities.get(type) ?? { type, read: 0, ignored: 0 }
     entry[key] += 1
@@ -110,26 +110,26 @@ function drawnIn(document: DrawingDocument, unit: LengthUnit, options: Options):
       notices.note('entity-ignored', null, { entity: type })
     },
     placed(placed) {
-      const { entity, layer } = placed
-      const { type } = entity.record
+      const { layer } = placed
+      const { type } = placed.entity.record
       const read = wanted?.has(layer) ?? true
       const onLayer = layers.get(layer) ?? { name: layer, entities: 0, read }
       onLayer.entities += 1
       layers.set(layer, onLayer)
-      anyGeometry = true
+      entity += 1
       if (!read) {
         count(type, 'ignored')
         notices.note('layer-left-out', null, { layer })
         return
       }
-      if (!takeEntity(placed, options, segments, notices)) return count(type, 'ignored')
+      if (!takeEntity(placed, entity, options, segments, notices)) return count(type, 'ignored')
       count(type, 'read')
     },
   })
   return {
     segments,
     bounds: segments.length === 0 ? null : boundsOf(segments.map((drawn) => drawn.segment)),
-    anyGeometry,
+    anyGeometry: entity > 0,
     layers: [...layers.values()],
     entities: [...entities.values()],
     notices,
@@ -139,6 +139,7 @@ function drawnIn(document: DrawingDocument, unit: LengthUnit, options: Options):
 /** Adds the entity's curves; false when it is drawn askew and cannot be read. */
 function takeEntity(
   placed: PlacedEntity,
+  number: number,
   options: Options,
   segments: DrawnSegment[],
   notices: NoticeBook,
@@ -156,7 +157,7 @@ function takeEntity(
   if (record.normal === 'down' && hasOwnPlane(placed.entity)) notices.note('extrusion-mirrored', at)
   if (approximated === 'spline') notices.note('spline-approximated', at)
   if (approximated === 'ellipse') notices.note('ellipse-approximated', at)
-  for (const segment of curves) segments.push({ segment, layer: placed.layer })
+  for (const segment of curves) segments.push({ segment, layer: placed.layer, entity: number })
   if (segments.length > MAX_SEGMENTS) {
     throw new DrawingError(
       'drawing-too-many-entities',
@@ -259,11 +260,12 @@ function intoReach(bounds: Bounds | null, notices: NoticeBook): (point: Point) =
   return (point) => ({ ...point, x: point.x - x, y: point.y - y })
 }
 
-function shift({ segment, layer }: DrawnSegment, move: (point: Point) => Point): DrawnSegment {
+function shift(drawn: DrawnSegment, move: (point: Point) => Point): DrawnSegment {
+  const { segment } = drawn
   const ends = { from: move(segment.from), to: move(segment.to) }
   return segment.kind === 'line'
-    ? { layer, segment: { ...segment, ...ends } }
-    : { layer, segment: { ...segment, ...ends, centre: move(segment.centre) } }
+    ? { ...drawn, segment: { ...segment, ...ends } }
+    : { ...drawn, segment: { ...segment, ...ends, centre: move(segment.centre) } }
 }
 
 function shiftBounds(bounds: Bounds, move: (point: Point) => Point): Bounds {

@@ -42,8 +42,8 @@ export function recogniseArcs(loop: readonly DrawnSegment[], tolerance: number):
     const end = runEnd(into, i, ordered.length)
     const found = longestArc(ordered, i, end, tolerance)
     const drawn = ordered[i]
-    if (found) {
-      segments.push({ segment: found.arc, layer: drawn?.layer ?? '0' })
+    if (found && drawn) {
+      segments.push({ ...drawn, segment: found.arc })
       places.push(pointAt(found.arc, 0.5))
       i += found.lines
     } else {
@@ -154,8 +154,8 @@ function wholeCircle(
   if (way === 0 || turns.some((turn) => Math.sign(turn) !== way)) return null
   const run = loop.map((drawn) => drawn.segment)
   const half = Math.floor(loop.length / 2)
-  const [first, opposite] = [run[0], run[half]]
-  if (!first || !opposite || half < FEWEST_LINES || !chordsAlike(run)) return null
+  const [drawn, first, opposite] = [loop[0], run[0], run[half]]
+  if (!drawn || !first || !opposite || half < FEWEST_LINES || !chordsAlike(run)) return null
   const halves = [
     { from: first.from, to: opposite.from, lines: run.slice(1, half) },
     { from: opposite.from, to: first.from, lines: run.slice(half + 1) },
@@ -176,9 +176,8 @@ function wholeCircle(
       arc.radius > LEAST_BOW * tolerance,
   )
   if (!fits) return null
-  const layer = loop[0]?.layer ?? '0'
   return {
-    segments: halves.map((segment) => ({ segment, layer })),
+    segments: halves.map((segment) => ({ ...drawn, segment })),
     places: halves.map((arc) => pointAt(arc, 0.5)),
   }
 }
