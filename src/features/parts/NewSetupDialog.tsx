@@ -14,13 +14,14 @@ import { ErrorNotice, Notice } from '../../ui/Notice.tsx'
 import { NumberField } from '../../ui/NumberField.tsx'
 import { Select } from '../../ui/Select.tsx'
 import { headInWords } from '../../ui/heads.ts'
+import { typedNumber } from '../../ui/typed-number.ts'
 
 const { name, headId, plate } = createSetupBody.shape
 const formSchema = z.strictObject({
   name,
   headId,
   material: plate.shape.material,
-  thickness: z.union([plate.shape.thickness, z.null()]).refine((value) => value !== null),
+  thickness: typedNumber(plate.shape.thickness),
 })
 type Typed = z.input<typeof formSchema>
 type Checked = z.output<typeof formSchema>
