@@ -1,6 +1,6 @@
 import type { BodyMesh } from '../../shared/body/types.ts'
 import { EvaluationError } from '../../shared/evaluate/error.ts'
-import { evaluate, evaluatedMesh } from '../../shared/evaluate/evaluate.ts'
+import { evaluateWithMesh } from '../../shared/evaluate/evaluate.ts'
 import type { Evaluation, EvaluationRequest } from '../../shared/evaluate/schema.ts'
 import type { Outcome } from './messages.ts'
 
@@ -12,7 +12,7 @@ export interface Evaluated {
 /** The front door and the mesh; a refusal comes back as a value with its code. */
 export function compute(request: EvaluationRequest): Outcome<Evaluated> {
   try {
-    return { ok: true, result: { evaluation: evaluate(request), mesh: evaluatedMesh(request) } }
+    return { ok: true, result: evaluateWithMesh(request) }
   } catch (error) {
     if (error instanceof EvaluationError) return { ok: false, code: error.code, message: error.message }
     const reason = error instanceof Error ? error.message : String(error)

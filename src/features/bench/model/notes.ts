@@ -1,4 +1,4 @@
-import { cornerName, edgeName } from '../../../../shared/body/names.ts'
+import { cornerName, edgeKey, edgeName } from '../../../../shared/body/names.ts'
 import type { EdgeRef } from '../../../../shared/body/types.ts'
 import type { Cure, Finding, FindingCode, FindingSeverity } from '../../../../shared/findings/schema.ts'
 
@@ -143,4 +143,23 @@ function cureOf(findings: readonly Finding[]): NoteCure | null {
   const messages = new Set(cures.map(({ message }) => message))
   const message = messages.size === 1 ? [...messages][0]! : `Apply the cure of each of the ${cures.length}`
   return { message, cures }
+}
+
+const overLimit: ReadonlySet<FindingCode> = new Set([
+  'edge-over-mechanical-limit',
+  'edge-over-working-limit',
+  'corner-over-mechanical-limit',
+  'corner-over-working-limit',
+])
+
+/** Keys of the edges and names of the corners that pass a limit. */
+export function breachesIn(findings: readonly Finding[]): Set<string> {
+  return new Set(
+    findings
+      .filter(({ code }) => overLimit.has(code))
+      .flatMap(({ loop = 0, edge, vertex }) => {
+        if (vertex !== undefined) return [cornerName({ loop, vertex })]
+        return edge === undefined ? [] : [edgeKey({ loop, edge })]
+      }),
+  )
 }

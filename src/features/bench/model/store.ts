@@ -10,7 +10,15 @@ import * as bench from './state.ts'
 /** The bench's state and what may be done to it; one store per opened set-up. */
 export interface BenchStore extends bench.BenchState {
   readonly loops: readonly Loop[]
+  readonly draft: DraftState
   readonly do: Acts
+}
+
+/** When the browser last kept what is on the bench; null while nothing is kept. */
+export interface DraftState {
+  readonly keptAt: number | null
+  /** The browser had no room for it, or forbids it. */
+  readonly failed: boolean
 }
 
 export interface Acts {
@@ -30,6 +38,7 @@ export interface Acts {
   /** The row moved on (submitted, say) without a change of content. */
   moved(setup: Setup): void
   continueDraft(content: SaveSetup, version: number): void
+  drafted(draft: DraftState): void
 }
 
 export type BenchApi = StoreApi<BenchStore>
@@ -44,6 +53,7 @@ export function makeBenchStore(
     return {
       ...bench.selectMany(bench.startBench(base), selection),
       loops,
+      draft: { keptAt: null, failed: false },
       do: {
         edit: (change, run) => apply((state) => bench.edit(state, change, run ?? null)),
         settle: () => apply(bench.settled),
@@ -60,6 +70,7 @@ export function makeBenchStore(
         moved: (setup) => apply((state) => ({ ...state, base: bench.baseOf(setup, state.base.content) })),
         continueDraft: (content, version) =>
           apply((state) => bench.continued(bench.settled(state), content, version)),
+        drafted: (draft) => set({ draft }),
       },
     }
   })

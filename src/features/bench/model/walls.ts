@@ -77,6 +77,25 @@ export function heightsOf(facets: Facets): number[] {
   return facets.map(({ depth }, i) => depth - (facets[i - 1]?.depth ?? 0))
 }
 
+/** Most height that a facet can take before the one that gives way is gone, mm. */
+export function roomFor(facets: Facets, facet: number): number {
+  const heights = heightsOf(facets)
+  return heights[facet]! + heights[givesWay(facets, facet)]!
+}
+
+/** A facet of another height; the facet below gives way, for the last one the facet above. */
+export function withHeight(facets: Facets, facet: number, height: number): FacetSpec[] {
+  const boundary = Math.min(facet, givesWay(facets, facet))
+  const top = facets[boundary - 1]?.depth ?? 0
+  const end = facets[boundary + 1]!.depth
+  const depth = boundary === facet ? top + height : end - height
+  return facets.map((each, i) => (i === boundary ? { ...each, depth } : each))
+}
+
+function givesWay(facets: Facets, facet: number): number {
+  return facet === facets.length - 1 ? facet - 1 : facet + 1
+}
+
 /**
  * The same prep in a plate of another thickness: root faces (upright facets beside a bevel) keep their
  * height, and the bevels share the rest as they did. Where the plate is too thin for that, all shrink alike.
