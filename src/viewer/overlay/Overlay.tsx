@@ -21,8 +21,11 @@ interface OverlayProps extends Shown {
 const TONES: Record<ChosenLabel['tone'], string> = {
   selected: 'text-select font-medium',
   breach: 'text-breach',
-  plain: 'text-muted data-[hidden=true]:opacity-45',
+  plain: 'text-muted',
 }
+
+/** Lines behind a text give way to it, as on a map. */
+const HALO = '[text-shadow:0_0_2px_var(--sheet),0_0_2px_var(--sheet)]'
 
 /** Balloons that are worth drawing at once; the list of findings has them all. */
 const BALLOON_CAP = 60
@@ -33,6 +36,7 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
   const root = useRef<HTMLDivElement>(null)
   const leaders = useRef<SVGPathElement>(null)
   const eventNode = useRef<HTMLDivElement>(null)
+  const eventText = useRef<HTMLSpanElement>(null)
   const bar = useRef<HTMLDivElement>(null)
   const barText = useRef<HTMLSpanElement>(null)
   const reading = useRef<HTMLDivElement>(null)
@@ -57,17 +61,18 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
     layer.setFixed({
       leaders: leaders.current,
       event: eventNode.current,
+      eventText: eventText.current,
       bar: bar.current,
       barText: barText.current,
       reading: reading.current,
     })
     layer.setUnit(scaleBar ?? null)
     layer.setLabels(
-      chosen.flatMap(({ key, edge }) => {
+      chosen.flatMap(({ key, edge, tone }) => {
         const element = labelNodes.get(key)
         const lines = index?.edges.get(edgeKey(edge))
         const stations = lines ? stationsOf(lines) : []
-        return element && stations.length > 0 ? [{ element, stations }] : []
+        return element && stations.length > 0 ? [{ element, edge, stations, must: tone !== 'plain' }] : []
       }),
     )
     layer.setBalloons(
@@ -100,7 +105,7 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
           aria-hidden="true"
           data-tone={tone}
           data-edge={key}
-          className={`invisible absolute top-0 left-0 px-0.5 whitespace-nowrap [text-shadow:0_0_2px_var(--sheet),0_0_2px_var(--sheet)] ${TONES[tone]}`}
+          className={`invisible absolute top-0 left-0 px-0.5 whitespace-nowrap ${HALO} ${TONES[tone]}`}
         >
           {text}
         </span>
@@ -133,20 +138,24 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
             <circle r={6} strokeWidth={1.25} className="fill-panel" />
             <path d="M-10 0H10M0 -10V10" strokeWidth={1} />
           </svg>
-          {event.text && (
-            <span className="absolute top-1/2 left-full -translate-y-1/2 bg-panel px-1 whitespace-nowrap">
-              {event.text}
-            </span>
-          )}
         </div>
       )}
+      {event?.text && (
+        <span
+          ref={eventText}
+          aria-hidden="true"
+          className={`absolute top-0 left-0 px-0.5 whitespace-nowrap text-breach ${HALO}`}
+        >
+          {event.text}
+        </span>
+      )}
       {scaleBar && (
-        <div className="absolute bottom-2 left-3 text-muted" aria-hidden="true">
+        <div className={`absolute bottom-2 left-3 text-muted ${HALO}`} aria-hidden="true">
           <span ref={barText} />
           <div ref={bar} className="h-1.5 border-x border-b border-muted" />
         </div>
       )}
-      <div ref={reading} className="absolute right-3 bottom-1.5 text-muted" aria-hidden="true" />
+      <div ref={reading} className={`absolute right-3 bottom-1.5 text-muted ${HALO}`} aria-hidden="true" />
     </div>
   )
 }

@@ -1,4 +1,5 @@
-import { basisOf, projector, scaleOf, type Vec3 } from '../camera/view-state.ts'
+import type { EdgeRef } from '../../../shared/body/types.ts'
+import { basisOf, projector, scaleOf, type Vec3, type ViewState } from '../camera/view-state.ts'
 import type { ViewControl } from '../camera/view-control.ts'
 import type { Picker } from '../pick/picker.ts'
 import { DISC_RADIUS } from '../scene/corner-discs.ts'
@@ -16,9 +17,15 @@ const LEADER_KEPT_CLEAR = [0.1, 0.4, 0.7]
 /** Above this many triangles, labels are not tested for being hidden: the search tree waits for the pointer. */
 const TEST_HIDDEN_UP_TO = 60_000
 
+/** Sine of the elevation under which the plate's faces are seen on edge. */
+const GRAZING = 0.03
+
 interface LabelNode {
   readonly element: HTMLElement
+  readonly edge: EdgeRef
   readonly stations: readonly Station[]
+  /** Shown even where its edge is hidden. */
+  readonly must: boolean
   readonly width: number
   readonly height: number
   last: number | null
@@ -33,6 +40,7 @@ interface BalloonNode {
 export interface Fixed {
   readonly leaders: SVGPathElement | null
   readonly event: HTMLElement | null
+  readonly eventText: HTMLElement | null
   readonly bar: HTMLElement | null
   readonly barText: HTMLElement | null
   readonly reading: HTMLElement | null
@@ -42,7 +50,9 @@ export interface Fixed {
 export class OverlayLayer {
   #labels: LabelNode[] = []
   #balloons: BalloonNode[] = []
-  #fixed: Fixed = { leaders: null, event: null, bar: null, barText: null, reading: null }
+  #eventSize = { width: 0, height: 0 }
+  #eventPlace: number | null = null
+  #fixed: Fixed = { leaders: null, event: null, eventText: null, bar: null, barText: null, reading: null }
   #event: Vec3 | null = null
   #corners: readonly Vec3[] = []
   #unit: { unit: number; text: (value: number) => string } | null = null
@@ -50,17 +60,18 @@ export class OverlayLayer {
 
   setFixed(fixed: Fixed): void {
     this.#fixed = fixed
+    const text = fixed.eventText
+    this.#eventSize = { width: text?.offsetWidth ?? 0, height: text?.offsetHeight ?? 0 }
   }
 
   /** Elements and where they belong; sizes are measured here, once, not in a frame. */
-  setLabels(nodes: readonly { element: HTMLElement; stations: readonly Station[] }[]): void {
+  setLabels(nodes: readonly Pick<LabelNode, 'element' | 'edge' | 'stations' | 'must'>[]): void {
     const before = new Map(this.#labels.map((label) => [label.element, label.last]))
-    this.#labels = nodes.map(({ element, stations }) => ({
-      element,
-      stations,
-      width: element.offsetWidth,
-      height: element.offsetHeight,
-      last: before.get(element) ?? null,
+    this.#labels = nodes.map((node) => ({
+      ...node,
+      width: node.element.offsetWidth,
+      height: node.element.offsetHeight,
+      last: before.get(node.element) ?? null,
     }))
   }
 
@@ -123,12 +134,27 @@ export class OverlayLayer {
       }
     })
 
+    if (this.#event && this.#fixed.eventText) {
+      const wish = {
+        ...this.#eventSize,
+        places: besidePlaces(project(this.#event), this.#eventSize),
+        must: true,
+      }
+      this.#eventPlace = placeAll([{ ...wish, last: this.#eventPlace }], taken, bounds)[0] ?? 0
+      const at = wish.places[this.#eventPlace]!
+      move(this.#fixed.eventText, at.x, at.y)
+      taken.push(rectOf(wish, this.#eventPlace))
+    }
+
     const { toward } = basisOf(view)
     const wishes = this.#labels.map((label): Wish & { places: LabelPlace[] } => ({
       width: label.width,
       height: label.height,
       last: label.last,
-      places: labelPlaces(label.stations, project, scale, label),
+      places:
+        label.must || this.#inSight(label, picker, toward)
+          ? labelPlaces(label.stations, project, scale, label)
+          : [],
     }))
     placeAll(wishes, taken, bounds).forEach((place, i) => {
       const label = this.#labels[i]!
@@ -150,6 +176,15 @@ export class OverlayLayer {
     this.#writeReading(control)
   }
 
+  /** An edge is in sight if its wall is, or a rim that is not seen merely along the plate's face. */
+  #inSight({ edge, stations }: LabelNode, picker: Picker, toward: Vec3): boolean {
+    if (!this.#testHidden) return true
+    const { rims, middle } = stations[0]!
+    if (picker.sees(edge, middle, toward)) return true
+    if (Math.abs(toward[2]) < GRAZING) return false
+    return picker.sees(edge, toward[2] > 0 ? rims[0]! : rims.at(-1)!, toward)
+  }
+
   #writeBar(scale: number): void {
     if (!this.#unit || !this.#fixed.bar || !this.#fixed.barText) return
     const { value, pixels } = barLength(scale, this.#unit.unit)
@@ -159,9 +194,16 @@ export class OverlayLayer {
 
   #writeReading({ view }: ViewControl): void {
     if (!this.#fixed.reading) return
-    const degrees = (radians: number) => `${Math.round((radians * 180) / Math.PI) || 0}°`
-    write(this.#fixed.reading, `${degrees(view.azimuth)} round, ${degrees(view.elevation)} up`)
+    write(this.#fixed.reading, readingOf(view))
   }
+}
+
+/** Where the eye is, in words. */
+export function readingOf({ azimuth, elevation }: Pick<ViewState, 'azimuth' | 'elevation'>): string {
+  const round = Math.round((azimuth * 180) / Math.PI)
+  const height = Math.round((elevation * 180) / Math.PI)
+  const side = round === 0 ? 'the front' : `${Math.abs(round)}° ${round > 0 ? 'right' : 'left'}`
+  return `from ${side}, ${Math.abs(height)}° ${height < 0 ? 'below' : 'above'}`
 }
 
 function balloonPlaces(from: { x: number; y: number }, middle: { x: number; y: number }) {
@@ -172,6 +214,23 @@ function balloonPlaces(from: { x: number; y: number }, middle: { x: number; y: n
       y: from.y + Math.sin(outward + turn) * arm,
     })),
   )
+}
+
+/** Round a mark: right, left, below, above, each nearer and farther. */
+function besidePlaces(
+  { x, y }: { x: number; y: number },
+  { width, height }: { width: number; height: number },
+) {
+  return [3, 14, 30].flatMap((gap) => {
+    const dx = BALLOON_RADIUS + gap + width / 2
+    const dy = BALLOON_RADIUS + gap + height / 2
+    return [
+      { x: x + dx, y },
+      { x: x - dx, y },
+      { x, y: y + dy },
+      { x, y: y - dy },
+    ]
+  })
 }
 
 /** The end of a leader: where the straight line from the anchor meets the text's box. */

@@ -6,7 +6,10 @@ import type { Place } from './place.ts'
 /** A spot along an edge beside which its label may stand. */
 export interface Station {
   readonly top: Vec3
-  readonly bottom: Vec3
+  /** The same spot on every line of the wall, the top one first; the outermost on screen bears the label. */
+  readonly rims: readonly Vec3[]
+  /** Half-way down the wall. */
+  readonly middle: Vec3
   /** Into the waste, square to the edge, in the plate's plane. */
   readonly outward: Vec3
 }
@@ -23,10 +26,13 @@ export function stationsOf(lines: EdgeLines): Station[] {
   if (!top || top.length < 6) return []
   return SHARES.map((share) => {
     const { at, tangent } = pointAt(top, share)
-    const bottom = lines.bottom[0]
+    const below = [...lines.level, ...lines.bottom].filter((run) => run.length >= 6)
+    const rims = [at, ...below.map((run) => pointAt(run, share).at)]
+    const lowest = rims.at(-1)!
     return {
       top: at,
-      bottom: bottom && bottom.length >= 6 ? pointAt(bottom, share).at : at,
+      rims,
+      middle: [0, 1, 2].map((axis) => (at[axis]! + lowest[axis]!) / 2) as unknown as Vec3,
       outward: [tangent[1], -tangent[0], 0],
     }
   })
@@ -50,13 +56,13 @@ export function labelPlaces(
   for (const gap of GAPS) {
     for (const station of stations) {
       const top = project(station.top)
-      const bottom = project(station.bottom)
       const ahead = project(along(station.top, station.outward, 1 / pixelsPerMm))
       const length = Math.hypot(ahead.x - top.x, ahead.y - top.y)
       // A wall that faces the eye has its label below it.
       const dx = length < HEAD_ON ? 0 : (ahead.x - top.x) / length
       const dy = length < HEAD_ON ? 1 : (ahead.y - top.y) / length
-      const rim = (bottom.x - top.x) * dx + (bottom.y - top.y) * dy > 0 ? bottom : top
+      const reach = (p: { x: number; y: number }) => p.x * dx + p.y * dy
+      const rim = station.rims.map(project).reduce((far, p) => (reach(p) > reach(far) ? p : far))
       const push = gap + (Math.abs(dx) * size.width) / 2 + (Math.abs(dy) * size.height) / 2
       places.push({
         x: rim.x + dx * push,

@@ -51,10 +51,12 @@ export class Picker {
     return nearestLine(index, projector(view, frame), x, y, reach, rim)
   }
 
-  /** Whether the part itself stands between the eye and a point on its skin. */
-  hides(point: Vec3, toward: Vec3): boolean {
+  /** Whether a point of an edge's wall, or a wall of that edge before it, is seen from `toward`. */
+  sees(edge: EdgeRef, point: Vec3, toward: Vec3): boolean {
     const seen = this.seen(point, toward)
-    return seen !== null && seen.before > this.#index!.radius * CLEAR
+    if (!seen || seen.before <= this.#index!.radius * CLEAR) return true
+    const { face } = seen
+    return face.kind === 'wall' && face.loop === edge.loop && face.edge === edge.edge
   }
 }
 

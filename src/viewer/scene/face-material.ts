@@ -18,7 +18,8 @@ void main() {
 
 const fragmentShader = /* glsl */ `
 uniform vec3 hatch;
-uniform vec3 halo;
+uniform vec3 sheet;
+uniform float veil;
 uniform float pixelRatio;
 uniform float shade;
 varying vec4 vPaint;
@@ -32,11 +33,14 @@ void main() {
   if (vPaint.a > 0.5) {
     float across = (gl_FragCoord.x - gl_FragCoord.y) / pixelRatio / 1.41421356;
     float apart = abs(fract(across / pitch) - 0.5) * pitch;
-    colour = mix(halo, colour, 0.35 + 0.65 * smoothstep(halfWidth, halfWidth + 1.6, apart));
+    colour = mix(colour, sheet, veil);
     colour = mix(hatch, colour, smoothstep(halfWidth - 0.35, halfWidth + 0.35, apart));
   }
   gl_FragColor = vec4(colour, 1.0);
 }`
+
+/** How far a hatched wall steps back toward the sheet: in the dark theme both are bright and would merge. */
+const VEIL = { paper: 0, tank: 0.5 }
 
 /** Darkening of a plane that faces away from the light, as a share. */
 const SHADE = { paper: 0.2, tank: 0.34 }
@@ -49,7 +53,8 @@ export class FaceMaterial extends ShaderMaterial {
       side: FrontSide,
       uniforms: {
         hatch: { value: new Vector3() },
-        halo: { value: new Vector3() },
+        sheet: { value: new Vector3() },
+        veil: { value: 0 },
         pixelRatio: { value: 1 },
         shade: { value: 0 },
       },
@@ -62,8 +67,8 @@ export class FaceMaterial extends ShaderMaterial {
 
   dress({ breach, sheet, theme }: Palette): void {
     setRgb(this.uniforms.hatch!.value as Vector3, breach)
-    // A line of the sheet's colour beside each hatch line keeps it readable on walls of a like colour.
-    setRgb(this.uniforms.halo!.value as Vector3, sheet)
+    setRgb(this.uniforms.sheet!.value as Vector3, sheet)
+    this.uniforms.veil!.value = VEIL[theme]
     this.uniforms.shade!.value = SHADE[theme]
   }
 
