@@ -37,7 +37,7 @@ export function errorAnswer(log: Logger): ErrorRequestHandler {
 }
 
 export const noSuchRoute: RequestHandler = (req) => {
-  throw new Refusal('not-found', `There is nothing at ${req.path.slice(0, 200)}.`)
+  throw new Refusal('not-found', `There is nothing at ${(req.baseUrl + req.path).slice(0, 200)}.`)
 }
 
 function refusalOf(error: unknown): Refusal {

@@ -36,14 +36,17 @@ export async function throttled<T>(
 async function countAttempt(dataSource: DataSource, throttle: Throttled): Promise<void> {
   const now = new Date()
   const oldest = new Date(now.getTime() - WINDOW)
-  // The assignments run from left to right: failures looks at the window before it is moved.
-  await dataSource.query(
+  // One statement counts and tells, so that each of many at once learns its own place in the row. The
+  // assignments run from left to right: failures looks at the window before it is moved.
+  const rows: { failures: number; windowStart: Date }[] = await dataSource.query(
     `INSERT INTO sign_in_attempts (id, failures, window_start) VALUES (?, 1, ?)
      ON DUPLICATE KEY UPDATE failures = IF(window_start < ?, 1, failures + 1),
-       window_start = IF(window_start < ?, VALUES(window_start), window_start)`,
+       window_start = IF(window_start < ?, VALUES(window_start), window_start)
+     RETURNING failures, window_start AS windowStart`,
     [keyOf(throttle), now, oldest, oldest],
   )
-  const row = await dataSource.getRepository(SignInAttempt).findOneByOrFail({ id: keyOf(throttle) })
+  const row = rows[0]
+  if (!row) throw new Error('The attempt was not counted')
   if (row.failures > LIMITS[throttle.kind]) {
     const wait = Math.max(1, Math.ceil((row.windowStart.getTime() + WINDOW - now.getTime()) / 1000))
     throw new Refusal('too-many-attempts', `Too many attempts. Wait ${Math.ceil(wait / 60)} minutes.`, {
