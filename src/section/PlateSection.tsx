@@ -97,7 +97,7 @@ interface SectionLabelProps {
 }
 
 function SectionLabel({ label, print, children }: SectionLabelProps) {
-  const { x, y, width, height, dimension, align } = label
+  const { x, y, width, height, dimension, align, acrossFace } = label
   const box: CSSProperties = { position: 'absolute', left: x, top: y, width, height }
   if (children !== undefined) {
     return (
@@ -106,11 +106,12 @@ function SectionLabel({ label, print, children }: SectionLabelProps) {
       </div>
     )
   }
+  const ground = print ? 'bg-white' : 'bg-face print:bg-white'
   const textAlign = align === 'centre' ? 'center' : align
   return (
     <div
       style={{ ...box, textAlign }}
-      className="pointer-events-none whitespace-nowrap"
+      className={`pointer-events-none whitespace-nowrap ${acrossFace ? ground : ''}`}
       data-dimension={dimension.id}
       aria-hidden="true"
     >

@@ -19,6 +19,8 @@ import type { Arc, Hairline, LayoutOptions, PlacedLabel, Px, SectionLayout } fro
 import type { SectionPoint } from '../../shared/joint/section.ts'
 import type { SectionDimension, SectionSpec } from './types.ts'
 
+/** Below this width, px, the thickness is not dimensioned: a phone held upright. */
+const NARROW = 430
 /** Share of a groove's height that lies between its mouth and the arc of its angle. */
 const ARC_BELOW_MOUTH = 0.15
 
@@ -32,7 +34,8 @@ export function layoutJoint(
   const other = mateFacets(spec)
   const { left, right } = outlineOf(spec) as { left: SectionPoint[]; right: SectionPoint[] }
   const depths = labelled(dimensions, 'facet-depth')
-  const whole = labelled(dimensions, 'thickness')
+  // A narrow drawing keeps its room for the groove; the thickness is in the text alternative and the title block.
+  const whole = options.width < NARROW ? [] : labelled(dimensions, 'thickness')
   const grooves = labelled(dimensions, 'included-angle')
   const above = grooves.filter((dimension) => dimension.from.depth === 0)
   const beneath = grooves.filter((dimension) => dimension.from.depth !== 0)
@@ -85,7 +88,12 @@ export function layoutJoint(
     to: faceBottom,
     witnessX: (depth) => nearestX(rightPx, y(depth)),
   })
-  labels.push(...leftLadder.labels, ...rightLadder.labels)
+  labels.push(
+    ...[...leftLadder.labels, ...rightLadder.labels].map((label) => ({
+      ...label,
+      acrossFace: label.y < faceBottom && label.y + label.height > faceBottom,
+    })),
+  )
   hairlines.push(...leftLadder.hairlines, ...rightLadder.hairlines)
 
   // Depths that need more room than the plate is thick push what stands below it further down.

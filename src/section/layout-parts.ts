@@ -43,7 +43,7 @@ export function boxAt(
   to: number,
 ): PlacedLabel {
   const x = Math.max(from, Math.min(centre.x - size.width / 2, to - size.width))
-  return { dimension, align: 'centre', x, y: centre.y - size.height / 2, ...size }
+  return { dimension, align: 'centre', acrossFace: false, x, y: centre.y - size.height / 2, ...size }
 }
 
 export interface Ladder {
@@ -110,6 +110,7 @@ export function ladder(
     return {
       dimension,
       align: side === 'right' ? 'start' : 'end',
+      acrossFace: false,
       x: side === 'right' ? near : near - size.width,
       y: centres[i]! - size.height / 2,
       ...size,

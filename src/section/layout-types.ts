@@ -17,6 +17,8 @@ export interface PlacedLabel extends Box {
   readonly dimension: SectionDimension
   /** Which end of the box its text leans to. */
   readonly align: 'start' | 'centre' | 'end'
+  /** It lies across a face of the plate: its ground must hide the line. */
+  readonly acrossFace: boolean
 }
 
 /** A hairline of the drawing, by what it does. */

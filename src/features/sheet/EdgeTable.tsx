@@ -38,7 +38,7 @@ export function EdgeTable({ rows, groups, unit }: EdgeTableProps) {
               <th
                 key={column}
                 scope="col"
-                className={`font-normal text-[6.5pt] leading-tight px-[0.7mm] py-[0.5mm] ${column === 'Edge' || column === 'Prep' ? 'text-left' : 'text-right'}`}
+                className={`font-normal text-[6.5pt] leading-tight px-[1mm] py-[0.5mm] ${column === 'Edge' || column === 'Prep' ? 'text-left' : 'text-right'}`}
               >
                 {column}
               </th>
@@ -51,7 +51,7 @@ export function EdgeTable({ rows, groups, unit }: EdgeTableProps) {
         {gathered.length > 0 && (
           <tbody className="border-b border-neutral-400">
             <tr>
-              <td colSpan={COLUMNS.length} className="px-[0.7mm] py-[0.8mm]">
+              <td colSpan={COLUMNS.length} className="px-[1mm] py-[0.8mm]">
                 {gathered.length} square edges without a joint: {edgeRuns(gathered)}
               </td>
             </tr>
@@ -74,14 +74,14 @@ function EdgeLines({ row, letter, unit }: EdgeLinesProps) {
   const angle = (degrees: number | null, sign = false) =>
     degrees === null ? '–' : formatAngle(degrees, { sign })
   const span = row.passes.length
-  const number = 'px-[0.7mm] py-[0.3mm] text-right whitespace-nowrap'
+  const number = 'px-[1mm] py-[0.3mm] text-right whitespace-nowrap'
   return (
     <tbody className="border-b border-neutral-400 align-top">
       {row.passes.map((pass, i) => (
         <tr key={i}>
           {i === 0 && (
             <>
-              <th scope="rowgroup" rowSpan={span} className="px-[0.7mm] py-[0.3mm] text-left font-bold">
+              <th scope="rowgroup" rowSpan={span} className="px-[1mm] py-[0.3mm] text-left font-bold">
                 {row.name}
               </th>
               <td rowSpan={span} className={number}>
@@ -90,7 +90,7 @@ function EdgeLines({ row, letter, unit }: EdgeLinesProps) {
               <td rowSpan={span} className={number}>
                 {length(row.bottomLength)}
               </td>
-              <td rowSpan={span} className="px-[0.7mm] py-[0.3mm]">
+              <td rowSpan={span} className="px-[1mm] py-[0.3mm]">
                 {letter && <strong>{letter} </strong>}
                 {describeWall(row.facets, unit)}
                 {row.joint && <span className="block">joint {row.joint.label || 'without a number'}</span>}

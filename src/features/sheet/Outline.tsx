@@ -15,8 +15,8 @@ import { isPlain, type SheetRow } from './sheet-model.ts'
 
 /** Room for the picture and, round it, for names. mm on paper. */
 const WIDTH = 186
-const HEIGHT = 112
-const RIM = 9
+const HEIGHT = 124
+const RIM = 8
 const FONT = 2.6
 
 interface OutlineProps {
@@ -41,9 +41,10 @@ export function Outline({ content, evaluation, rows, unit }: OutlineProps) {
       width: WIDTH,
       height: picture.height,
       font: FONT,
+      avoid: bottom?.loops ?? [],
       first: (edge) => prepared.has(edgeName(edge)),
     })
-  }, [numbered, picture, rows])
+  }, [numbered, bottom, picture, rows])
   const { scale, scaleText, height, origin } = picture
   const place = `translate(${origin.x} ${origin.y}) scale(${scale})`
   const unnamed = rows.length - names.length

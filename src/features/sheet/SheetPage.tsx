@@ -1,7 +1,7 @@
 import { useSuspenseQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
 import { contoursUrl, edgesUrl, revisionEvaluationQuery } from '../../api/setups.ts'
-import { Page, PageBody, PageHead } from '../../app/Page.tsx'
+import { PageHead } from '../../app/Page.tsx'
 import { revisionText } from '../../revision/standing.ts'
 import { useShownRevision } from '../../revision/use-revision.ts'
 import { StandingBanner } from '../../revision/StandingBanner.tsx'
@@ -9,13 +9,13 @@ import { Button, ButtonAnchor, ButtonLink } from '../../ui/Button.tsx'
 import { Paper } from './Paper.tsx'
 import './sheet.css'
 
-/** The set-up sheet: what the machine and the welder get on paper. */
+/** The set-up sheet (its own frame, because paper breaks into pages only through plain blocks): what the machine and the welder get on paper. */
 export default function SheetPage() {
   const { id = '' } = useParams()
   const { setup, revision, standing } = useShownRevision(id)
   const { data } = useSuspenseQuery(revisionEvaluationQuery(id, revision.number))
   return (
-    <Page>
+    <div className="flex flex-col print:block">
       <PageHead
         title={`${revision.content.part.number} ${revision.content.part.name}`}
         label="Set-up sheet"
@@ -44,7 +44,7 @@ export default function SheetPage() {
           </>
         }
       />
-      <PageBody>
+      <div className="px-3 sm:px-6 py-5 flex flex-col gap-6 print:block print:p-0">
         <div className="print:hidden flex flex-col gap-3 max-w-3xl">
           <StandingBanner
             revision={revision}
@@ -57,14 +57,14 @@ export default function SheetPage() {
           </p>
         </div>
         <div
-          className="overflow-x-auto print:overflow-visible"
+          className="shrink-0 overflow-x-auto print:overflow-visible"
           role="region"
           aria-label="The sheet as it prints"
           tabIndex={0}
         >
           <Paper setup={setup} revision={revision} standing={standing} evaluation={data.evaluation} />
         </div>
-      </PageBody>
-    </Page>
+      </div>
+    </div>
   )
 }

@@ -19,6 +19,8 @@ export interface NameOptions {
   readonly height: number
   /** Height of the letters; 0.6 of it wide each. */
   readonly font: number
+  /** Other lines of the picture that names keep clear of. */
+  readonly avoid: readonly VertexLoop[]
   /** Edges that must be named first: those with a prep. */
   readonly first: (edge: EdgeRef) => boolean
 }
@@ -48,7 +50,10 @@ export function placeNames(loops: readonly VertexLoop[], options: NameOptions): 
       points: samplePoints(segment, options.toPaper),
     })),
   )
-  const lines = edges.flatMap(({ points }) => points)
+  const others = options.avoid.flatMap((loop) =>
+    loopFromVertices(loop).flatMap((segment) => samplePoints(segment, options.toPaper)),
+  )
+  const lines = [...edges.flatMap(({ points }) => points), ...others]
   const placed: NamePlace[] = []
   const taken: Box[] = []
   const wanted = [...edges.filter(options.first), ...edges.filter((edge) => !options.first(edge))]
