@@ -1,6 +1,7 @@
 import { BOX_STRIDE, boxTree, visitMeetingPairs } from '../geometry/boxes.ts'
 import { boundsOf } from '../geometry/loop.ts'
 import { nearbyOrder } from '../geometry/order.ts'
+import { roundingOf } from '../geometry/rounding.ts'
 import { chainOf, marchOf, type Chain, type March } from './chain.ts'
 import { First } from './first.ts'
 import { frameOf, type Frame } from './frame.ts'
@@ -40,7 +41,7 @@ function march(frame: Frame): BodyEvent | null {
   if (frame.count === 0) return null
   const order = nearbyOrder(body.loops.map((loop) => loop[0]?.from ?? { x: 0, y: 0 }))
   const chain = chainOf(frame, order)
-  const near = roundingOf(body)
+  const near = roundingOf(boundsOf(body.loops.flat()))
   for (const stretch of stretchesOf(frame)) {
     const happening = firstHappening(chain, stretch, near)
     if (!happening) continue
@@ -97,15 +98,6 @@ function* stretchesOf(frame: Frame): Generator<Stretch> {
     if (upward) for (let g = 0; g < count; g++) rate[g] = -rate[g]!
     yield { length: below - above, offset, rate, depthAt: (t) => (upward ? below - t : above + t) }
   }
-}
-
-/**
- * What rounding may have done to a coordinate, mm: a few thousand units in the last place of the largest one,
- * as a corner is the outcome of some dozens of operations and stands up to a thousand offsets away.
- */
-function roundingOf(body: Body): number {
-  const box = boundsOf(body.loops.flat())
-  return 2 ** -40 * Math.max(-box.minX, -box.minY, box.maxX, box.maxY, body.thickness)
 }
 
 function refOf(frame: Frame, g: number): EdgeRef {

@@ -224,6 +224,7 @@ export function place(frame: Frame, offsets: Float64Array, out: Places): void {
         if (o1 !== 0 || o2 !== 0) ({ x, y } = branchPoint(branches.get(g)!, o1, o2))
         break
       }
+      default: // a spike stays
     }
     ex[p] = sx[g] = x
     ey[p] = sy[g] = y

@@ -5,13 +5,13 @@ import type { Loop, Point, Segment } from './types.ts'
 export type Side = 'inside' | 'outside' | 'on'
 
 /**
- * Even–odd rule with a ray to +x. `onWithin` (mm) is how near to a segment still counts as on it; 0 asks for
- * rounding-exact coincidence only.
+ * Even–odd rule with a ray to +x. `onWithin` (mm) is how near to a segment still counts as on it; a negative
+ * value asks for no such answer, and is quicker.
  */
 export function sideOfLoop(loop: Loop, point: Point, onWithin = 0): Side {
   let inside = false
   for (const segment of loop) {
-    if (distanceToSegment(segment, point) <= onWithin) return 'on'
+    if (onWithin >= 0 && distanceToSegment(segment, point) <= onWithin) return 'on'
     if (rayCrossings(segment, point) % 2 === 1) inside = !inside
   }
   return inside ? 'inside' : 'outside'
