@@ -31,9 +31,7 @@ export function edgesCsv(content: SetupContent, evaluation: Evaluation): string 
         edgeName(edge),
         edge.loop,
         edge.edge,
-        facets.length === 1
-          ? describeWall(facets)
-          : `${describeWall(facets)} (facet ${i + 1} of ${facets.length})`,
+        prepText(facets, i),
         i + 1,
         facets[i - 1]?.depth ?? 0,
         facet.depth,
@@ -87,4 +85,11 @@ const HEADER: readonly string[] = [
 
 function cornerTilt(corner: EvaluatedCorner | undefined): number | null {
   return corner?.jetTilt ?? null
+}
+
+/** Begins with a word: a cell that begins with a sign would have to be guarded against running as a formula. */
+function prepText(facets: readonly FacetSpec[], facet: number): string {
+  const words = describeWall(facets)
+  const prep = words === 'square' ? words : `wall ${words}`
+  return facets.length === 1 ? prep : `${prep} (facet ${facet + 1} of ${facets.length})`
 }

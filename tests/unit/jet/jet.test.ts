@@ -7,11 +7,12 @@ import { rimClearance, standoffFor } from '../../../shared/jet/nozzle.ts'
 import { smallestInteriorAngle, tiltsAllowedBeside } from '../../../shared/jet/seam.ts'
 import { jetTilt, taperFromCoupon, wallTilt } from '../../../shared/jet/taper.ts'
 import { degrees, radians } from '../../../shared/units/angle.ts'
+import { spread } from '../../support/spread.ts'
 
 const SEED = 20261201
-const tilt = fc.double({ min: radians(-70), max: radians(70), noNaN: true })
-const taper = fc.double({ min: radians(-5), max: radians(5), noNaN: true })
-const interior = fc.double({ min: radians(20), max: radians(175), noNaN: true })
+const tilt = spread(radians(-70), radians(70))
+const taper = spread(radians(-5), radians(5))
+const interior = spread(radians(20), radians(175))
 
 describe('taper', () => {
   it('is half the narrowing over the path, per side', () => {
@@ -32,7 +33,7 @@ describe('taper', () => {
   /** Built from the picture itself: an axis leaning by β − τ whose near side, r·cos τ off it, leans τ back to the wall. */
   it('puts the near side of the jet on the wall', () => {
     fc.assert(
-      fc.property(tilt, taper, fc.double({ min: 0.2, max: 3, noNaN: true }), (wall, lean, kerf) => {
+      fc.property(tilt, taper, spread(0.2, 3), (wall, lean, kerf) => {
         const axis = axisOffset(kerf, wall, lean)
         // The jet's edge starts r off the axis, square to it, where the axis meets the top face, and turns by τ.
         const alpha = jetTilt(wall, lean)
@@ -63,9 +64,9 @@ describe('whole tilt and path', () => {
 
 describe('nozzle', () => {
   it('has exactly the clearance that its stand-off was worked out for', () => {
-    const size = fc.double({ min: 0.1, max: 12, noNaN: true })
+    const size = spread(0.1, 12)
     fc.assert(
-      fc.property(size, tilt, fc.double({ min: 0, max: 5, noNaN: true }), (diameter, lean, clearance) => {
+      fc.property(size, tilt, spread(0, 5), (diameter, lean, clearance) => {
         const standoff = standoffFor(diameter, lean, clearance)
         expect(rimClearance({ diameter, standoff }, lean)).toBeCloseTo(clearance, 9)
         expect(rimClearance({ diameter, standoff }, -lean)).toBeCloseTo(clearance, 9)
@@ -79,18 +80,14 @@ describe('tilts allowed at a corner', () => {
   it('puts the seam on the limit at both ends, and within it between', () => {
     const limit = radians(55)
     fc.assert(
-      fc.property(
-        fc.double({ min: radians(-54), max: radians(54), noNaN: true }),
-        interior,
-        (other, angle) => {
-          const range = tiltsAllowedBeside(limit, other, angle)
-          if (!range) throw new Error('the other wall is within the limit')
-          const seam = (own: number) => seamTiltOf(own, other, Math.PI - angle) ?? Number.NaN
-          expect(seam(range.lowest)).toBeCloseTo(limit, 8)
-          expect(seam(range.highest)).toBeCloseTo(limit, 8)
-          expect(seam((range.lowest + range.highest) / 2)).toBeLessThan(limit)
-        },
-      ),
+      fc.property(spread(radians(-54), radians(54)), interior, (other, angle) => {
+        const range = tiltsAllowedBeside(limit, other, angle)
+        if (!range) throw new Error('the other wall is within the limit')
+        const seam = (own: number) => seamTiltOf(own, other, Math.PI - angle) ?? Number.NaN
+        expect(seam(range.lowest)).toBeCloseTo(limit, 8)
+        expect(seam(range.highest)).toBeCloseTo(limit, 8)
+        expect(seam((range.lowest + range.highest) / 2)).toBeLessThan(limit)
+      }),
       { seed: SEED },
     )
   })
@@ -101,7 +98,7 @@ describe('tilts allowed at a corner', () => {
 
   it('agrees with the rule for equal walls', () => {
     fc.assert(
-      fc.property(fc.double({ min: 0.1, max: 1.3, noNaN: true }), interior, (limit, angle) => {
+      fc.property(spread(0.1, 1.3), interior, (limit, angle) => {
         const equal = largestCornerTilt(limit, angle)
         const smallest = smallestInteriorAngle(limit, equal)
         expect(smallest).toBeCloseTo(angle, 6)

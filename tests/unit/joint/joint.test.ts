@@ -5,6 +5,7 @@ import { grooveOpensTo, jointForm } from '../../../shared/joint/form.ts'
 import { judge } from '../../../shared/joint/judge.ts'
 import { jointSection, rootFaceOf, sectionOf } from '../../../shared/joint/section.ts'
 import { STEEL_DENSITY, weldMetalPerMetre } from '../../../shared/joint/weld-metal.ts'
+import { spread } from '../../support/spread.ts'
 
 const SEED = 20261201
 const bevelWithFace = [
@@ -61,9 +62,9 @@ describe('section of both plates', () => {
   it('has the area that thin strips add up to', () => {
     const facetList = fc
       .tuple(
-        fc.array(fc.double({ min: 0.05, max: 0.95, noNaN: true }), { maxLength: 2 }),
-        fc.array(fc.double({ min: -60, max: 60, noNaN: true }), { minLength: 3, maxLength: 3 }),
-        fc.double({ min: 3, max: 60, noNaN: true }),
+        fc.array(spread(0.05, 0.95), { maxLength: 2 }),
+        fc.array(spread(-60, 60), { minLength: 3, maxLength: 3 }),
+        spread(3, 60),
       )
       .map(([cuts, tilts, thickness]) => {
         const ends = [...new Set(cuts)].sort((a, b) => a - b).map((cut) => cut * thickness)
