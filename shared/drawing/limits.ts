@@ -13,7 +13,7 @@ export const MAX_ENTITIES = 200_000
 export const MAX_VERTICES = 200_000
 
 /** Groups of one entity; a polyline vertex with its widths, bulge and number has six. */
-export const MAX_ENTITY_TAGS = 1_000_000
+export const MAX_ENTITY_TAGS = 500_000
 
 /** Blocks within blocks. */
 export const MAX_NESTING = 32

@@ -98,6 +98,7 @@ function drawnIn(document: DrawingDocument, unit: LengthUnit, options: Options):
   const entities = new Map<string, { type: string; read: number; ignored: number }>()
   const wanted = options.layers && new Set(options.layers)
   let entity = 0
+  let anyGeometry = false
   const count = (type: string, key: 'read' | 'ignored') => {
     const entry = entities.get(type) ?? { type, read: 0, ignored: 0 }
     entry[key] += 1
@@ -118,6 +119,7 @@ function drawnIn(document: DrawingDocument, unit: LengthUnit, options: Options):
       layers.set(layer, onLayer)
       entity += 1
       if (!read) {
+        anyGeometry = true
         count(type, 'ignored')
         notices.note('layer-left-out', null, { layer })
         return
@@ -129,7 +131,7 @@ function drawnIn(document: DrawingDocument, unit: LengthUnit, options: Options):
   return {
     segments,
     bounds: segments.length === 0 ? null : boundsOf(segments.map((drawn) => drawn.segment)),
-    anyGeometry: entity > 0,
+    anyGeometry: anyGeometry || segments.length > 0,
     layers: [...layers.values()],
     entities: [...entities.values()],
     notices,

@@ -78,7 +78,7 @@ export class TagReader {
     this.#valueEnd = end
     if (end - this.#position > MAX_LINE) {
       throw new DrawingError(
-        'drawing-malformed',
+        this.#line === 1 ? 'drawing-not-dxf' : 'drawing-malformed',
         `Line ${this.#line} is longer than ${MAX_LINE} characters. Export the drawing again.`,
         this.#line,
       )

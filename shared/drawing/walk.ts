@@ -11,14 +11,15 @@ import type { NoticeBook } from './notices.ts'
  */
 export function walkEdges(edges: readonly Edge[], points: readonly Point[], notices: NoticeBook): Chain[] {
   const rings: Edge[] = []
-  for (const figure of figuresOf(edges)) {
+  const drawn = figuresOf(edges)
+  for (const figure of drawn) {
     if (figure.kind !== 'branched') continue
     for (const own of byLayer(figure.edges)) {
       for (const part of figuresOf(own)) if (part.kind === 'ring') rings.push(...part.edges)
     }
   }
   const taken = new Set(rings)
-  const figures = figuresOf(edges.filter((edge) => !taken.has(edge)))
+  const figures = rings.length === 0 ? drawn : figuresOf(edges.filter((edge) => !taken.has(edge)))
   for (const figure of figures) report(figure, points, notices)
   // Rings of two layers may share a point, so each layer is walked by itself.
   const apart = byLayer(rings).flatMap((own) => figuresOf(own))
