@@ -65,27 +65,53 @@ export function urlOf<N extends RouteName>(name: N, given: ParamsOf<N> & QueryOf
  * has changed nothing, so nothing is done twice.
  */
 export async function call<N extends RouteName>(name: N, given: Arguments<N>): Promise<Answer<N>> {
+  const key = isDoneOnce(routes[name]) ? newKey() : undefined
   try {
-    return await callOnce(name, given)
+    return await callOnce(name, given, key)
   } catch (error) {
-    const lapsed = error instanceof ApiError && error.code === 'not-signed-in' && name !== 'whoAmI'
-    if (!lapsed || !(await askToSignIn())) throw error
-    return await callOnce(name, given)
+    const again =
+      error instanceof NetworkError ? key !== undefined : lapsed(name, error) && (await askToSignIn())
+    if (!again) throw error
+    return await callOnce(name, given, key)
   }
 }
 
-async function callOnce<N extends RouteName>(name: N, given: Arguments<N>): Promise<Answer<N>> {
+const lapsed = (name: RouteName, error: unknown) =>
+  error instanceof ApiError && error.code === 'not-signed-in' && name !== 'whoAmI'
+
+/** Writes that the server does once for a key, so that one without an answer may be sent again. */
+function isDoneOnce(route: Route): boolean {
+  return route.method === 'post' && (route.status === 201 || route.ifMatch === true)
+}
+
+/** 128 random bits; `crypto.randomUUID` is missing where the pages come over plain HTTP. */
+export function newKey(): string {
+  return Array.from(crypto.getRandomValues(new Uint8Array(16)), (byte) =>
+    byte.toString(16).padStart(2, '0'),
+  ).join('')
+}
+
+async function callOnce<N extends RouteName>(
+  name: N,
+  given: Arguments<N>,
+  key: string | undefined,
+): Promise<Answer<N>> {
   const route: Route = routes[name]
-  const response = await send(urlOf(name, given), requestOf(route, given as Given))
+  const response = await send(urlOf(name, given), requestOf(route, given as Given, key))
   if (!response.ok) throw refusalOf(response.status, await response.json().catch(() => null))
   if (response.status === 204 || route.answer === undefined) return undefined as Answer<N>
   if (typeof route.answer === 'string') return (await response.blob()) as unknown as Answer<N>
   return (await jsonOf(response)) as Answer<N>
 }
 
-function requestOf(route: Route, { body, file, ifMatch, signal }: Given): RequestInit {
+function requestOf(
+  route: Route,
+  { body, file, ifMatch, signal }: Given,
+  key: string | undefined,
+): RequestInit {
   const headers: Record<string, string> = { accept: 'application/json, */*;q=0.5' }
   if (ifMatch !== undefined) headers['if-match'] = `"${ifMatch}"`
+  if (key !== undefined) headers['idempotency-key'] = key
   const request: RequestInit = { method: route.method.toUpperCase(), headers, credentials: 'same-origin' }
   if (signal !== undefined) request.signal = signal
   if (route.upload !== undefined && file !== undefined) {

@@ -31,24 +31,22 @@ export function PageHead({ title, label = 'Sheet', cells = [], actions }: PageHe
     document.title = `${title} · Undercant`
   }, [title])
   return (
-    <header className="flex flex-wrap bg-panel border-b border-rule print:hidden">
-      <div className="px-3 py-1.5 grow border-r border-rule max-w-full">
+    <header className="flex flex-wrap gap-px bg-rule border-b border-rule print:hidden">
+      <div className="px-3 py-1.5 max-sm:grow bg-panel max-w-full sm:min-w-40">
         <p className="text-label uppercase text-muted" aria-hidden="true">
           {label}
         </p>
         <h1 className="font-medium break-words">{title}</h1>
       </div>
       {cells.map((cell) => (
-        <div key={cell.label} className="px-3 py-1.5 border-r border-rule max-sm:grow max-sm:border-t">
+        <div key={cell.label} className="px-3 py-1.5 bg-panel max-sm:grow min-w-0">
           <p className="text-label uppercase text-muted">{cell.label}</p>
           <div className={`font-medium ${tones[cell.tone ?? 'plain']}`}>{cell.value}</div>
         </div>
       ))}
-      {actions !== undefined && (
-        <div className="px-3 py-1.5 flex flex-wrap items-center gap-2 max-sm:grow max-sm:border-t max-sm:border-rule">
-          {actions}
-        </div>
-      )}
+      <div className="grow px-3 py-1.5 flex flex-wrap items-center sm:justify-end gap-2 bg-panel max-sm:empty:hidden">
+        {actions}
+      </div>
     </header>
   )
 }

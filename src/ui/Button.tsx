@@ -5,15 +5,15 @@ type Look = 'plain' | 'main' | 'breach' | 'quiet'
 type Size = 'desk' | 'glove' | 'act'
 
 const looks: Record<Look, string> = {
-  plain: 'border-ink text-ink bg-panel hover:bg-face',
-  main: 'border-select bg-select text-on-select hover:underline',
-  breach: 'border-breach text-breach bg-panel hover:bg-face',
+  plain: 'px-3 border-ink text-ink bg-panel hover:bg-face',
+  main: 'px-3 border-select bg-select text-on-select hover:underline',
+  breach: 'px-3 border-breach text-breach bg-panel hover:bg-face',
   quiet: 'border-transparent text-select underline underline-offset-2 hover:bg-face',
 }
 const sizes: Record<Size, string> = {
-  desk: 'min-h-8 px-3 max-sm:min-h-11',
-  glove: 'min-h-glove px-4 text-large',
-  act: 'min-h-act px-4 text-large font-medium',
+  desk: 'min-h-8 max-sm:min-h-11',
+  glove: 'min-h-glove text-large',
+  act: 'min-h-act text-large font-medium',
 }
 
 /** The look of a button; for links and labels that act as one. */

@@ -58,7 +58,7 @@ export function DataTable<Row>({ caption, columns, query, keyOf, list, empty }: 
                     <td
                       role="cell"
                       key={column.key}
-                      className={`py-2 pr-4 align-middle max-sm:p-0 max-sm:text-left ${column.figures ? 'text-right' : ''} ${column.lead ? 'max-sm:w-full' : ''}`}
+                      className={`py-2 pr-6 align-middle max-sm:p-0 max-sm:text-left ${column.figures ? 'text-right' : ''} ${column.lead ? 'max-sm:w-full' : ''}`}
                     >
                       {!column.lead && (
                         <span className="sm:hidden text-label uppercase text-muted mr-2" aria-hidden="true">
@@ -87,7 +87,7 @@ function Head<Row>({
   list: Pick<ListParams<string>, 'sort' | 'hrefWith'>
 }) {
   const side = column.figures ? 'text-right' : 'text-left'
-  const shape = `${side} font-normal text-label uppercase text-muted py-1 pr-4 align-bottom`
+  const shape = `${side} font-normal text-label leading-6 uppercase text-muted pr-6 align-bottom whitespace-nowrap`
   if (column.sort === undefined)
     return (
       <th role="columnheader" scope="col" className={shape}>
@@ -105,7 +105,7 @@ function Head<Row>({
     >
       <Link
         to={list.hrefWith({ sort: up ? `-${column.sort}` : column.sort })}
-        className="inline-flex items-center min-h-6 underline decoration-rule underline-offset-4 hover:text-ink"
+        className="inline-block underline decoration-rule underline-offset-4 hover:text-ink"
       >
         {column.head} {up ? '↑' : down ? '↓' : ''}
       </Link>

@@ -2,10 +2,12 @@ import { useQuery } from '@tanstack/react-query'
 import { formatAngle } from '../../../shared/units/format.ts'
 import { cornerName, edgeName } from '../../../shared/body/names.ts'
 import type { Evaluation } from '../../../shared/evaluate/schema.ts'
+import type { Finding } from '../../../shared/findings/schema.ts'
 import { revisionEvaluationQuery } from '../../api/setups.ts'
 import { Balloon } from '../../ui/Balloon.tsx'
 import { Button } from '../../ui/Button.tsx'
 import { ErrorNotice, Notice } from '../../ui/Notice.tsx'
+import { groupsOf } from './finding-groups.ts'
 
 interface ReviewFindingsProps {
   readonly setupId: string
@@ -44,17 +46,32 @@ function Findings({ evaluation: { findings, neededTilt } }: { evaluation: Evalua
       )}
       {findings.length === 0 && <p>No finding: head, plate and part allow it.</p>}
       <ol>
-        {findings.map((finding, index) => (
+        {groupsOf(findings).map(([first, ...more], index) => (
           <li key={index} className="flex gap-3 py-2 border-b border-rule">
-            <Balloon tone={finding.severity === 'stop' ? 'breach' : 'ink'}>{index + 1}</Balloon>
-            <div className={finding.severity === 'stop' ? 'text-breach' : ''}>
-              <span className="text-label uppercase">{severityWords[finding.severity]}</span>{' '}
-              {finding.message}
-              {finding.cure !== undefined && <p className="text-ink">Cure: {finding.cure.message}</p>}
+            <Balloon tone={first.severity === 'stop' ? 'breach' : 'ink'}>{index + 1}</Balloon>
+            <div className="min-w-0">
+              <FindingText finding={first} />
+              {more.length > 0 && (
+                <details>
+                  <summary className="cursor-pointer min-h-6 text-muted">and {more.length} like it</summary>
+                  {more.map((finding, n) => (
+                    <FindingText key={n} finding={finding} />
+                  ))}
+                </details>
+              )}
             </div>
           </li>
         ))}
       </ol>
+    </div>
+  )
+}
+
+function FindingText({ finding: { severity, message, cure } }: { finding: Finding }) {
+  return (
+    <div className={severity === 'stop' ? 'text-breach' : ''}>
+      <span className="text-label uppercase">{severityWords[severity]}</span> {message}
+      {cure !== undefined && <p className="text-ink">Cure: {cure.message}</p>}
     </div>
   )
 }

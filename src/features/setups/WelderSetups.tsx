@@ -48,19 +48,19 @@ function SetupBlock({ setup, open, onToggle }: { setup: SetupRow; open: boolean;
         type="button"
         aria-expanded={open}
         onClick={onToggle}
-        className="w-full min-h-glove px-3 py-2 flex flex-wrap items-center justify-between gap-x-4 gap-y-1 text-left cursor-pointer hover:bg-face"
+        className="w-full min-h-glove px-3 py-2 flex items-center justify-between gap-4 text-left cursor-pointer hover:bg-face"
       >
-        <span className="flex flex-col">
+        <span className="flex flex-col gap-1 min-w-0">
           <span className="text-large font-medium">
             {setup.partNumber} {setup.partName}
           </span>
           <span className="text-muted">
             {setup.name} · {setup.material} · {formatLength(setup.thickness, unit)}
           </span>
-        </span>
-        <span className="flex items-center gap-3">
           <StateMark {...setup} />
-          <span aria-hidden="true">{open ? '−' : '+'}</span>
+        </span>
+        <span aria-hidden="true" className="text-figure">
+          {open ? '−' : '+'}
         </span>
       </button>
       {open && <SetupJoints setup={setup} />}

@@ -93,7 +93,9 @@ function Report({ read: { drawing, reading }, options, change, busy, error }: Re
       />
       <PageBody>
         {error !== null && <ErrorNotice error={error} />}
-        <UnitQuestion reading={reading} onChoose={(next) => change({ unit: next })} />
+        {options.unit === undefined && (
+          <UnitQuestion reading={reading} onChoose={(next) => change({ unit: next })} />
+        )}
         <div className="grid gap-6 lg:grid-cols-[minmax(0,1fr)_22rem]">
           <div className="flex flex-col gap-6 min-w-0">
             <Section

@@ -3,7 +3,7 @@ import { useUnit } from '../../../app/preferences.ts'
 import { Button } from '../../../ui/Button.tsx'
 import { formatSize } from '../../../ui/measures.ts'
 import { Notice } from '../../../ui/Notice.tsx'
-import { boundsIn } from './options.ts'
+import { boundsIn, unitWords } from './options.ts'
 
 /** Asks about the unit when the size is improbable in the one used. */
 export function UnitQuestion({
@@ -23,15 +23,16 @@ export function UnitQuestion({
       actions={
         <>
           <Button look="main" onClick={() => onChoose(suggested)}>
-            Read it in {suggested}
+            Read it in {unitWords[suggested]}
           </Button>
-          <Button onClick={() => onChoose(used)}>Keep {used}</Button>
+          <Button onClick={() => onChoose(used)}>Keep {unitWords[used]}</Button>
         </>
       }
     >
-      {source} in {used}, the drawing is <strong>{formatSize(reading.bounds, shown)}</strong>. In {suggested}{' '}
-      it would be <strong>{formatSize(boundsIn(reading.bounds, used, suggested), shown)}</strong>. Did you
-      mean {suggested}?
+      {source} in {unitWords[used]}, the drawing is <strong>{formatSize(reading.bounds, shown)}</strong>. In{' '}
+      {suggested} it would be <strong>{formatSize(boundsIn(reading.bounds, used, suggested), shown)}</strong>.
+      Did you mean
+      {unitWords[suggested]}?
     </Notice>
   )
 }

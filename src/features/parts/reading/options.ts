@@ -10,6 +10,14 @@ export const startOptions: Options = readingOptionsSchema.parse({})
 
 const MM_PER: Record<LengthUnit, number> = { mm: 1, cm: 10, m: 1_000, in: MM_PER_INCH, ft: 12 * MM_PER_INCH }
 
+export const unitWords: Record<LengthUnit, string> = {
+  mm: 'millimetres',
+  cm: 'centimetres',
+  m: 'metres',
+  in: 'inches',
+  ft: 'feet',
+}
+
 /** The bounds in mm as they would be, had the drawing been read in another unit. */
 export function boundsIn(bounds: Bounds, used: LengthUnit, other: LengthUnit): Bounds {
   const scale = MM_PER[other] / MM_PER[used]
