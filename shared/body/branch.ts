@@ -87,9 +87,19 @@ export function branchPlace(
   } else {
     shift = others
   }
+  const along = branch.along + shift
+  const radius = branch.radius + dr
+  const shiftSquare = shift * (2 * branch.along + shift)
+  // Two forms of radius² − along², told apart by which cancels less: the change from the drawing is steady for
+  // small offsets (and keeps a corner that is near tangent), the product where the radius nears its end.
+  const changeNoise = branch.across * branch.across + Math.abs(drSquare) + Math.abs(shiftSquare)
+  const productNoise = branch.radius * (Math.abs(radius) + Math.abs(along))
   return {
-    along: branch.along + shift,
-    square: branch.across * branch.across + drSquare - shift * (2 * branch.along + shift),
+    along,
+    square:
+      changeNoise <= productNoise
+        ? branch.across * branch.across + drSquare - shiftSquare
+        : (radius - along) * (radius + along),
   }
 }
 

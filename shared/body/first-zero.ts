@@ -10,23 +10,27 @@ export function firstZero(
   slack: (from: number, to: number) => number,
   end: number,
 ): number | null {
-  const finest = end * FINEST_SPAN
+  let looks = 0
   const spans: [from: number, to: number][] = [[0, end]]
   for (let span = spans.pop(); span; span = spans.pop()) {
     const [from, to] = span
     const middle = (from + to) / 2
     if (Math.abs(value(middle)) > slack(from, to)) continue
-    if (to - from <= finest) return polish(value, from, to)
+    if (to - from <= end * (++looks > PATIENCE ? COARSE_SPAN : FINE_SPAN)) return polish(value, from, to)
     spans.push([middle, to], [from, middle])
   }
   return null
 }
 
+/** Spans are halved down to this share of the whole, so that a zero without a change of sign is told to 13 digits. */
+const FINE_SPAN = 2 ** -44
+
 /**
- * Spans are halved down to this share of the whole. What then still may be zero is within about as small a
- * share of the distance travelled: 1e-8 mm in a millimetre, below what any contour is drawn to.
+ * A long near touch would take very many such spans. After so many halvings (a plain zero takes some hundred)
+ * a coarser span is enough: about as small a share of the distance travelled, 1e-8 mm in a millimetre.
  */
-const FINEST_SPAN = 2 ** -27
+const PATIENCE = 2000
+const COARSE_SPAN = 2 ** -27
 
 /** Bisection to the last digit where the sign changes; the middle of the span where it does not (a touch). */
 function polish(value: (t: number) => number, from: number, to: number): number {

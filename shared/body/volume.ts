@@ -81,7 +81,7 @@ function integrate(f: (x: number) => number, a: number, b: number, whole: number
 /** Gauss–Legendre rule of seven points (Abramowitz and Stegun, table 25.4; exact to degree 13). */
 const GAUSS_POINTS: readonly (readonly [place: number, weight: number])[] = [
   [0, 0.417959183673469],
-  [0.4058451513773972, 0.38183005050511894495],
+  [0.4058451513773972, 0.3818300505051189],
   [0.7415311855993945, 0.2797053914892766],
   [0.9491079123427585, 0.1294849661688697],
 ]
