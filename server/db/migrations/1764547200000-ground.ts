@@ -6,8 +6,9 @@ const HASH = 'char(64) NOT NULL'
 const INSTANT = 'datetime(3) NOT NULL'
 const OPTIONS = 'ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci'
 
-const references = (name: string, column: string, table: string, more = '') =>
-  `CONSTRAINT \`${name}\` FOREIGN KEY (\`${column}\`) REFERENCES \`${table}\` (\`id\`) ${more}`
+const references = (name: string, column: string, table: string, onDelete = 'NO ACTION') =>
+  `CONSTRAINT \`${name}\` FOREIGN KEY (\`${column}\`) REFERENCES \`${table}\` (\`id\`) ` +
+  `ON DELETE ${onDelete} ON UPDATE NO ACTION`
 
 const tables: Readonly<Record<string, readonly string[]>> = {
   users: [
@@ -34,7 +35,7 @@ const tables: Readonly<Record<string, readonly string[]>> = {
     'PRIMARY KEY (id)',
     'INDEX sessions_user (user_id)',
     'INDEX sessions_expires (expires_at)',
-    references('sessions_user_fk', 'user_id', 'users', 'ON DELETE CASCADE'),
+    references('sessions_user_fk', 'user_id', 'users', 'CASCADE'),
   ],
   sign_in_attempts: [
     `id ${HASH}`,
@@ -171,7 +172,7 @@ const tables: Readonly<Record<string, readonly string[]>> = {
     `created_at ${INSTANT}`,
     'PRIMARY KEY (user_id, id)',
     'INDEX idempotency_keys_created (created_at)',
-    references('idempotency_keys_user_fk', 'user_id', 'users', 'ON DELETE CASCADE'),
+    references('idempotency_keys_user_fk', 'user_id', 'users', 'CASCADE'),
   ],
 }
 
