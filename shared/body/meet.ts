@@ -11,10 +11,15 @@ import { firstZero } from './first-zero.ts'
 export function offerMeeting(march: March, e: number, f: number, near: number, first: First): void {
   offerPoint(march, e, f, near, first)
   offerPoint(march, f, e, near, first)
-  const { kind, next } = march.chain
-  if ((kind[e] === PieceKind.arc || kind[f] === PieceKind.arc) && next[e] !== f && next[f] !== e) {
-    offerTouch(march, e, f, near, first)
-  }
+  const { kind } = march.chain
+  if (kind[e] !== PieceKind.arc && kind[f] !== PieceKind.arc) return
+  if (!areNeighbours(march, e, f) && !areNeighbours(march, f, e)) offerTouch(march, e, f, near, first)
+}
+
+/** One after the other, at most with a step between: tangent there from the start, which is no contact. */
+function areNeighbours({ chain: { kind, next } }: March, e: number, f: number): boolean {
+  const after = next[e]!
+  return after === f || (kind[after] === PieceKind.step && next[after] === f)
 }
 
 /** Point e runs into piece f. */

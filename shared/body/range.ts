@@ -12,7 +12,19 @@ export interface SoundRange {
   readonly event: BodyEvent | null
 }
 
+const ranges = new WeakMap<Body, SoundRange>()
+
+/** Looked for once for each body: bodies never change, and contours, volume and mesh all ask. */
 export function soundRange(body: Body): SoundRange {
+  let range = ranges.get(body)
+  if (!range) {
+    range = rangeOf(body)
+    ranges.set(body, range)
+  }
+  return range
+}
+
+function rangeOf(body: Body): SoundRange {
   const event = firstEvent(body)
   const { thickness } = body
   if (!event) return { from: 0, to: thickness, empty: false, event }

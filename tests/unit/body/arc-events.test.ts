@@ -86,36 +86,43 @@ describe('events with arcs', () => {
     expect(arc!.from.y).toBeCloseTo(10 * tan(30), 12)
   })
 
-  test('a corner on an arc runs into a wall on the far side', () => {
-    // A slot across a plate ends in a point where a half circle meets a line; the point rides along the circle.
-    const notch = [
-      { x: 0, y: 0 }, { x: 60, y: 0 }, { x: 60, y: 40 }, { x: 40, y: 40 },
-      { x: 20, y: 20, bulge: Math.tan(Math.PI / 8) }, { x: 0, y: 40 },
-    ] // prettier-ignore
-    // Edge 4 is a quarter circle about (20, 40)… of radius 20, from (20, 20) to (0, 40), counter-clockwise inside out.
-    const body = plate(t, [notch], (_, e) => (e === 3 ? at(-35) : e === 0 ? at(-15) : square))
+  test('a concave corner that rides on an arc runs into the wall below', () => {
+    // The quarter circle about (0, 20) starts at the concave corner (20, 20). The line y = x moves down by w, so that
+    // the corner rides round the circle: y = x − √2 w d and x² + (y − 20)² = 400. The bottom wall rises: y = v d.
+    // Together: d = 40 v / ((v + √2 w)² + v²) (derived).
+    const part = [
+      { x: 0, y: 0 },
+      { x: 60, y: 0 },
+      { x: 60, y: 40 },
+      { x: 40, y: 40 },
+      { x: 20, y: 20, bulge: Math.tan(Math.PI / 8) },
+      { x: 0, y: 40 },
+    ]
+    const body = plate(t, [part], (_, e) => (e === 3 ? at(-35) : e === 0 ? at(-15) : square))
     const event = firstEvent(body)!
-    // Bisection on the contour itself, by sampling: the corner's height over the bottom wall.
-    const gap = (depth: number) => contourAt(body, depth).loops[0]![4]!.from.y - depth * tan(15)
-    let [low, high] = [0, event.depth * 2]
-    for (let i = 0; i < 60; i++) {
-      const middle = (low + high) / 2
-      if (gap(middle) > 0) low = middle
-      else high = middle
-    }
-    expect(event.kind).toMatch(/split|vanish/)
-    expect(event.depth).toBeLessThanOrEqual(high * (1 + 1e-9))
+    expect(event).toMatchObject({ kind: 'split', loop: 0, edge: 0, other: { loop: 0, edge: 4 } })
+    const [v, w] = [tan(15), tan(35)]
+    const depth = (40 * v) / ((v + Math.SQRT2 * w) ** 2 + v * v)
+    expect(Math.abs(event.depth / depth - 1)).toBeLessThan(1e-11)
+    expect(event.at.y).toBeCloseTo(v * depth, 9)
   })
 
-  test('smooth neighbours of unlike tilt leave a step; a slot’s two ends still vanish at their radius', () => {
+  test('smooth neighbours of unlike tilt leave a step, and the slot closes where its wall reaches the other', () => {
     const slot = reversed([
-      { x: 20, y: 20 }, { x: 60, y: 20, bulge: 1 }, { x: 60, y: 30 }, { x: 20, y: 30, bulge: 1 },
-    ]) // prettier-ignore
-    const body = plate(t, [rectangle(0, 0, 100, 60), slot], (l, e) => (l === 1 && e === 1 ? at(10) : square))
+      { x: 20, y: 20 },
+      { x: 60, y: 20, bulge: 1 },
+      { x: 60, y: 30 },
+      { x: 20, y: 30, bulge: 1 },
+    ])
+    const body = plate(t, [rectangle(0, 0, 100, 60), slot], (l, e) => (l === 1 && e === 1 ? at(20) : square))
     const steps = contourAt(body, 5).loops[1]!.filter((s) => s.edge === null)
-    expect(steps).toHaveLength(2)
+    expect(steps.map((s) => Math.abs(s.to.y - s.from.y))).toEqual([
+      expect.closeTo(5 * tan(20), 12),
+      expect.closeTo(5 * tan(20), 12),
+    ])
     expect(contourAt(body, 0).loops[1]!.filter((s) => s.edge === null)).toHaveLength(0)
     const event = firstEvent(body)!
-    expect(['vanish', 'split']).toContain(event.kind)
+    expect(event).toMatchObject({ kind: 'split', loop: 1, edge: 1, other: { loop: 1, edge: 3 } })
+    expect(event.depth).toBeCloseTo(10 / tan(20), 10)
   })
 })
