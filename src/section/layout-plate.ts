@@ -56,7 +56,10 @@ export function layoutPlate(
     options,
   )
   const topBand = ARM_RISE + GAP + (top ? size(top).height : 0)
-  const columnX = options.width - columnWidth
+  // What the drawing does not need is left free on both sides.
+  const needed = (inside.length > 0 ? stub : stub * 2) + (right - left) * scale + columnWidth
+  const edge = Math.max(0, options.width - needed) / 2
+  const columnX = options.width - columnWidth - edge
   const px = (point: SectionPoint): Px => ({
     x: columnX - (right - point.x) * scale,
     y: topBand + point.depth * scale,
@@ -125,17 +128,16 @@ export function layoutPlate(
     witnessX: (depth) => wallX(placed, topBand + depth * scale),
   })
   const insideRungs = ladder(inside, inside.map(size), {
-    lineX: GAP + widest(inside.map(size)) + LEADER,
+    lineX: edge + GAP + widest(inside.map(size)) + LEADER,
     side: 'left',
     y: (depth) => topBand + depth * scale,
     from: faceTop,
     to: Math.max(faceBottom, faceTop + tallest(inside.map(size))),
-    witnessX: () => GAP + widest(inside.map(size)) + LEADER,
+    witnessX: () => edge + GAP + widest(inside.map(size)) + LEADER,
   })
   labels.push(...rungs.labels, ...insideRungs.labels)
   hairlines.push(...rungs.hairlines, ...insideRungs.hairlines)
 
-  const edge = inside.length > 0 ? 0 : Math.max(0, Math.min(...placed.map(({ x }) => x)) - stub * 2)
   const start = { x: edge, y: faceTop }
   const end = { x: edge, y: faceBottom }
   return {
