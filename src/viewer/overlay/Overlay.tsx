@@ -2,8 +2,9 @@ import { useLayoutEffect, useMemo, useRef } from 'react'
 import { edgeKey } from '../../../shared/body/names.ts'
 import { cornerPoint, type MeshIndex } from '../scene/mesh-index.ts'
 import type { PartViewerProps } from '../types.ts'
+import { BALLOON_RADIUS } from './balloon.ts'
 import { chooseLabels, type ChosenLabel } from './choose.ts'
-import { BALLOON_RADIUS, type OverlayLayer } from './layer.ts'
+import type { OverlayLayer } from './layer.ts'
 import { stationsOf } from './stations.ts'
 
 type Shown = Pick<

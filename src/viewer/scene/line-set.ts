@@ -1,10 +1,14 @@
 import {
+  BufferAttribute,
+  BufferGeometry,
   Color,
   DynamicDrawUsage,
   GreaterDepth,
   InstancedInterleavedBuffer,
   InterleavedBufferAttribute,
   LessEqualDepth,
+  LineBasicMaterial,
+  LineSegments,
 } from 'three'
 import { LineMaterial } from 'three/examples/jsm/lines/LineMaterial.js'
 import { LineSegments2 } from 'three/examples/jsm/lines/LineSegments2.js'
@@ -17,6 +21,12 @@ const HEADROOM = 1.25
 
 /** Dash and gap of a hidden line, px. */
 const DASH = { dash: 5, gap: 4 }
+
+/**
+ * Above this many segments a set is drawn as the graphics card's own one-pixel lines, and its hidden part not
+ * at all: a ruled line costs six triangles a segment and twice that with its hidden part.
+ */
+export const RULED_UP_TO = 6_000
 
 export interface LineStyle {
   /** Width where the line is in sight, px; 0 draws no such line. */
@@ -35,7 +45,11 @@ export interface LineStyle {
 export class LineSet {
   readonly shown: LineSegments2
   readonly behind: LineSegments2 | null
+  /** The same lines without width, for many. */
+  readonly plain: LineSegments
   readonly #geometry = new LineSegmentsGeometry()
+  readonly #plainGeometry = new BufferGeometry()
+  readonly #plainMaterial = new LineBasicMaterial({ transparent: true, depthWrite: false })
   readonly #materials: LineMaterial[] = []
   #capacity = 0
   #positions = new InstancedInterleavedBuffer(new Float32Array(0), 6, 1)
@@ -43,6 +57,11 @@ export class LineSet {
 
   constructor(style: LineStyle) {
     this.#reserve(1)
+    this.#plainMaterial.opacity = style.opacity ?? 1
+    this.plain = new LineSegments(this.#plainGeometry, this.#plainMaterial)
+    this.plain.renderOrder = style.order
+    this.plain.frustumCulled = false
+    this.plain.visible = false
     this.shown = this.#object(
       new LineMaterial({ linewidth: style.width, opacity: style.opacity ?? 1, depthFunc: LessEqualDepth }),
       style.order,
@@ -71,12 +90,17 @@ export class LineSet {
     this.#positions.needsUpdate = true
     this.#distances.needsUpdate = true
     this.#geometry.instanceCount = count
-    this.shown.visible = count > 0
-    if (this.behind) this.behind.visible = count > 0
+    const many = count > RULED_UP_TO
+    if (many) this.#fillPlain(count)
+    this.plain.visible = many
+    this.shown.visible = count > 0 && !many
+    if (this.behind) this.behind.visible = count > 0 && !many
   }
 
   colour([r, g, b]: Rgb): void {
-    for (const material of this.#materials) material.color = new Color(`rgb(${r},${g},${b})`)
+    const colour = new Color(`rgb(${r},${g},${b})`)
+    this.#plainMaterial.color = colour
+    for (const material of this.#materials) material.color = colour
   }
 
   /** Keeps dashes the same length on screen at any zoom. */
@@ -86,7 +110,20 @@ export class LineSet {
 
   dispose(): void {
     this.#geometry.dispose()
+    this.#plainGeometry.dispose()
+    this.#plainMaterial.dispose()
     for (const material of this.#materials) material.dispose()
+  }
+
+  /** Start and end in turn is how both kinds of line want their points, so the array is shared. */
+  #fillPlain(count: number): void {
+    const positions = this.#plainGeometry.getAttribute('position')
+    if (positions?.array === this.#positions.array) positions.needsUpdate = true
+    else {
+      this.#plainGeometry.dispose()
+      this.#plainGeometry.setAttribute('position', new BufferAttribute(this.#positions.array, 3))
+    }
+    this.#plainGeometry.setDrawRange(0, count * 2)
   }
 
   #object(material: LineMaterial, order: number): LineSegments2 {

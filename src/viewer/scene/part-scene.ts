@@ -47,7 +47,7 @@ export class PartScene {
     faces.frustumCulled = false
     this.group.add(faces, this.#discs.object)
     for (const set of Object.values(this.#lines)) {
-      this.group.add(set.shown)
+      this.group.add(set.shown, set.plain)
       if (set.behind) this.group.add(set.behind)
     }
     this.group.visible = false
@@ -117,6 +117,7 @@ export class PartScene {
     for (const set of Object.values(this.#lines)) {
       set.scale(pixelsPerMm)
       lift(set.shown, toward, LINE_LIFT / pixelsPerMm)
+      lift(set.plain, toward, LINE_LIFT / pixelsPerMm)
       if (set.behind) lift(set.behind, toward, HIDDEN_LIFT / pixelsPerMm)
     }
     this.#faces.setPixelRatio(pixelRatio)
