@@ -5,40 +5,35 @@ import { degrees, radians } from '../units/angle.ts'
 import type { ReadRequest } from './read.ts'
 import type { EvaluatedCorner } from './schema.ts'
 
-/** A corner with what the findings need besides: the angle as computed. */
+/** The corners with what the findings need besides: their angles as computed. */
 export interface CornerFigures {
-  readonly out: EvaluatedCorner
-  /** Radians. */
-  readonly interiorAngle: number
+  readonly corners: EvaluatedCorner[]
+  /** By place in `corners`, radians. */
+  readonly interiorAngles: Float64Array
 }
 
 /** Every corner in the caller's order. `taper` in degrees per side. */
-export function evaluatedCorners({ body, reversed }: ReadRequest, taper: number): CornerFigures[] {
+export function evaluatedCorners({ body, reversed }: ReadRequest, taper: number): CornerFigures {
   const starts: number[] = []
   let total = 0
   for (const loop of body.loops) {
     starts.push(total)
     total += loop.length
   }
-  const corners = new Array<CornerFigures>(total)
+  const corners = new Array<EvaluatedCorner>(total)
+  const interiorAngles = new Float64Array(total)
   const lean = radians(taper)
   for (const corner of cornersOf(body)) {
-    const n = body.loops[corner.loop]?.length ?? 0
-    const vertex = cornerInDrawing(corner.vertex, n, reversed[corner.loop] ?? false)
-    const seam = largestSeam(corner, 0)
-    corners[(starts[corner.loop] ?? 0) + vertex] = {
-      interiorAngle: corner.interiorAngle,
-      out: {
-        loop: corner.loop,
-        vertex,
-        kind: corner.kind,
-        interiorAngle: degrees(corner.interiorAngle),
-        seamTilt: degreesOrNull(seam),
-        jetTilt: degreesOrNull(taper === 0 ? seam : largestSeam(corner, lean)),
-      },
-    }
+    const { loop, kind, interiorAngle } = corner
+    const n = body.loops[loop]?.length ?? 0
+    const vertex = cornerInDrawing(corner.vertex, n, reversed[loop] ?? false)
+    const seamTilt = degreesOrNull(largestSeam(corner, 0))
+    const jetTilt = taper === 0 ? seamTilt : degreesOrNull(largestSeam(corner, lean))
+    const at = (starts[loop] ?? 0) + vertex
+    interiorAngles[at] = interiorAngle
+    corners[at] = { loop, vertex, kind, interiorAngle: degrees(interiorAngle), seamTilt, jetTilt }
   }
-  return corners
+  return { corners, interiorAngles }
 }
 
 function degreesOrNull(angle: number | null): number | null {

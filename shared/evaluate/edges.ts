@@ -18,6 +18,9 @@ export function evaluatedEdges(
 ): EvaluatedEdge[] {
   const figures = new Map<unknown, WallFigures>()
   const edges: EvaluatedEdge[] = []
+  // Neighbours mostly share a prep: the map is asked only where it changes.
+  let lastList: unknown
+  let known: WallFigures | undefined
   for (const [loop, segments] of body.loops.entries()) {
     const n = segments.length
     const turned = reversed[loop] ?? false
@@ -28,7 +31,8 @@ export function evaluatedEdges(
       const wall = body.walls[loop]?.[own]
       const list = facets[loop]?.[edge]
       if (!wall || !list) throw new Error('every edge has a wall')
-      let known = figures.get(list)
+      if (list !== lastList) known = figures.get(list)
+      lastList = list
       if (!known) {
         const jetTilts = list.map(({ tilt }) => tilt - taper)
         const wholeTilt = jetTilts.reduce((most, tilt) => Math.max(most, Math.abs(tilt)), 0)

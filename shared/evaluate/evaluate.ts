@@ -5,11 +5,11 @@ import { volumeOf } from '../body/volume.ts'
 import { LIMIT_ROUNDING } from '../findings/place.ts'
 import { cornerInDrawing, edgeInDrawing } from '../geometry/orient.ts'
 import { contourVertices, soundContours } from './contours.ts'
-import { evaluatedCorners, type CornerFigures } from './corners.ts'
+import { evaluatedCorners } from './corners.ts'
 import { evaluatedEdges } from './edges.ts'
 import { callersEdge, findingsOf } from './findings.ts'
 import { readRequest, type ReadRequest } from './read.ts'
-import type { EvaluatedEdge, Evaluation, EvaluationRequest } from './schema.ts'
+import type { EvaluatedCorner, EvaluatedEdge, Evaluation, EvaluationRequest } from './schema.ts'
 
 /**
  * The front door: a set-up in, everything known about it out. Pure; the browser's worker and the server run
@@ -52,12 +52,12 @@ function evaluationOf(request: EvaluationRequest, read: ReadRequest): Evaluation
   const range = read.problems.length === 0 ? soundRange(body) : null
   const contours = range ? soundContours(body, range) : []
   const edges = evaluatedEdges(read, taper, at(contours, 0), at(contours, body.thickness))
-  const corners = evaluatedCorners(read, taper)
-  const neededTilt = largestTilt(edges, corners)
+  const cornerFigures = evaluatedCorners(read, taper)
+  const neededTilt = largestTilt(edges, cornerFigures.corners)
   const event = range?.event ?? null
   return {
     edges,
-    corners: corners.map(({ out }) => out),
+    corners: cornerFigures.corners,
     contours: contours.map(contourVertices),
     firstEvent: event && {
       kind: event.kind,
@@ -68,7 +68,7 @@ function evaluationOf(request: EvaluationRequest, read: ReadRequest): Evaluation
     },
     volume: range && !event ? volumeOf(body) : null,
     neededTilt,
-    findings: findingsOf({ request, read, range, contours, corners, neededTilt }),
+    findings: findingsOf({ request, read, range, contours, cornerFigures, neededTilt }),
   }
 }
 
@@ -120,15 +120,15 @@ function at(contours: readonly Contour[], depth: number): Contour | null {
 /** A corner counts only where it asks for more than every edge. */
 function largestTilt(
   edges: readonly EvaluatedEdge[],
-  corners: readonly CornerFigures[],
+  corners: readonly EvaluatedCorner[],
 ): Evaluation['neededTilt'] {
   let most: Evaluation['neededTilt'] = null
   for (const { loop, edge, wholeTilt } of edges) {
     if (!most || wholeTilt > most.tilt) most = { tilt: wholeTilt, at: { loop, edge } }
   }
-  for (const { out } of corners) {
-    if (out.jetTilt !== null && (!most || out.jetTilt > most.tilt + LIMIT_ROUNDING)) {
-      most = { tilt: out.jetTilt, at: { loop: out.loop, vertex: out.vertex } }
+  for (const { loop, vertex, jetTilt } of corners) {
+    if (jetTilt !== null && (!most || jetTilt > most.tilt + LIMIT_ROUNDING)) {
+      most = { tilt: jetTilt, at: { loop, vertex } }
     }
   }
   return most

@@ -5,7 +5,7 @@ import { edgeOverLimit, facetsCutIn } from '../findings/edge.ts'
 import { narrowestWidth } from '../findings/hole-width.ts'
 import { nozzleTouches } from '../findings/nozzle.ts'
 import { eventFinding, holeSmallerThanKerf, loopOutside, profileCrosses } from '../findings/part.ts'
-import type { EdgeWall, Limits } from '../findings/place.ts'
+import { strictestLimit, type EdgeWall, type Limits } from '../findings/place.ts'
 import { findingSeverities, type Finding } from '../findings/schema.ts'
 import { edgeInDrawing } from '../geometry/orient.ts'
 import { radians } from '../units/angle.ts'
@@ -21,7 +21,7 @@ export interface Known {
   /** Null where the profile itself is not sound. */
   readonly range: SoundRange | null
   readonly contours: readonly Contour[]
-  readonly corners: readonly CornerFigures[]
+  readonly cornerFigures: CornerFigures
   readonly neededTilt: Evaluation['neededTilt']
 }
 
@@ -84,27 +84,26 @@ function edgeFindings({ request, read }: Known): Finding[] {
   return findings
 }
 
-function cornerFindings({ request, read, corners }: Known): Finding[] {
+function cornerFindings({ request, read, cornerFigures }: Known): Finding[] {
   const limits = limitsOf(request)
   const kerf = request.jet?.kerf
   const fillet = kerf === undefined ? null : concaveFillets(kerf)
   const taper = request.jet?.taper ?? 0
+  const lowest = limits && strictestLimit(limits)
   const findings: Finding[] = []
-  for (const { out, interiorAngle } of corners) {
-    const { kind, jetTilt } = out
+  for (const [i, corner] of cornerFigures.corners.entries()) {
+    const { kind, jetTilt } = corner
+    const interiorAngle = cornerFigures.interiorAngles[i] ?? 0
     if (kind === 'smooth') {
-      if (out.seamTilt === null) findings.push(smoothStep(out, ...wallsAt(read, out)))
+      if (corner.seamTilt === null) findings.push(smoothStep(corner, ...wallsAt(read, corner)))
       continue
     }
-    if (limits && jetTilt !== null) {
-      const lowest = Math.min(limits.mechanical, limits.working ?? limits.mechanical)
-      if (jetTilt > lowest) {
-        const [before, after] = wallsAt(read, out)
-        const over = cornerOverLimit(out, jetTilt, { before, after, interiorAngle, taper }, limits)
-        if (over) findings.push(over)
-      }
+    if (limits && lowest !== null && jetTilt !== null && jetTilt > lowest) {
+      const [before, after] = wallsAt(read, corner)
+      const over = cornerOverLimit(corner, jetTilt, { before, after, interiorAngle, taper }, limits)
+      if (over) findings.push(over)
     }
-    const rounded = kind === 'concave' && fillet ? fillet(out, interiorAngle) : null
+    const rounded = kind === 'concave' && fillet ? fillet(corner, interiorAngle) : null
     if (rounded) findings.push(rounded)
   }
   return findings

@@ -38,19 +38,12 @@ export function readRequest(request: EvaluationRequest): ReadRequest {
   )
   const problems = profileProblems(loops).map((problem) => renumbered(problem, loops, reversed))
   for (const problem of problems) refuse(problem)
-  const walls = radianWalls(facets, thickness)
   return {
     body: {
       thickness,
       datum: request.datum ?? 'top',
       loops,
-      walls: loops.map((loop, l) =>
-        loop.map((_, e) => {
-          const wall = walls[l]?.[edgeInDrawing(e, loop.length, reversed[l] ?? false)]
-          if (!wall) throw new Error('every edge has a wall')
-          return wall
-        }),
-      ),
+      walls: radianWalls(facets, thickness).map((walls, l) => (reversed[l] ? walls.reverse() : walls)),
     },
     reversed,
     facets,
@@ -64,14 +57,14 @@ function facetsByEdge(
   thickness: number,
 ): (readonly FacetDegrees[])[][] {
   const square: readonly FacetDegrees[] = [{ depth: thickness, tilt: 0 }]
-  const facets = edgeCounts.map((count) => Array.from({ length: count }, () => square))
+  const facets = edgeCounts.map((count) => new Array<readonly FacetDegrees[]>(count).fill(square))
   const named = edgeCounts.map((count) => new Uint8Array(count))
   const share = sharer(square)
   for (const wall of walls) {
     const { loop, edge } = wall
     const ofLoop = facets[loop]
     const seen = named[loop]
-    if (!ofLoop || !seen || edge >= ofLoop.length) {
+    if (!seen || ofLoop?.[edge] === undefined) {
       throw new EvaluationError(
         'wall-names-no-edge',
         `A wall is given for edge ${edge} of loop ${loop}, which the profile does not have. Count loops and edges from 0.`,
@@ -123,8 +116,7 @@ const MOST_SHARED = 8
 function sharer(first: readonly FacetDegrees[]): (list: readonly FacetDegrees[]) => readonly FacetDegrees[] {
   const recent = [first]
   return (list) => {
-    const known = recent.find((other) => sameFacets(list, other))
-    if (known) return known
+    for (const other of recent) if (sameFacets(list, other)) return other
     if (recent.length === MOST_SHARED) recent.shift()
     recent.push(list)
     return list
