@@ -30,8 +30,8 @@ export function UnitQuestion({
       }
     >
       {source} in {unitWords[used]}, the drawing is <strong>{formatSize(reading.bounds, shown)}</strong>. In{' '}
-      {suggested} it would be <strong>{formatSize(boundsIn(reading.bounds, used, suggested), shown)}</strong>.
-      Did you mean
+      {unitWords[suggested]} it would be{' '}
+      <strong>{formatSize(boundsIn(reading.bounds, used, suggested), shown)}</strong>. Did you mean{' '}
       {unitWords[suggested]}?
     </Notice>
   )
