@@ -13,7 +13,12 @@ const scope = self as unknown as WorkerScope
 
 scope.onmessage = ({ data: { id, request } }) => {
   const outcome = compute(request)
-  if (!outcome.ok) return scope.postMessage({ id, outcome }, [])
+  if (!outcome.ok) return scope.postMessage({ kind: 'answer', id, outcome }, [])
   const { mesh, buffers } = packMesh(outcome.result.mesh)
-  scope.postMessage({ id, outcome: { ok: true, result: { ...outcome.result, mesh } } }, buffers)
+  scope.postMessage(
+    { kind: 'answer', id, outcome: { ok: true, result: { ...outcome.result, mesh } } },
+    buffers,
+  )
 }
+
+scope.postMessage({ kind: 'ready' }, [])

@@ -8,7 +8,7 @@ export interface Ask<Request> {
   readonly request: Request
 }
 
-export interface Answer<Result> {
-  readonly id: number
-  readonly outcome: Outcome<Result>
-}
+/** The worker says once that it is loaded, then answers what it is asked. */
+export type Answer<Result> =
+  | { readonly kind: 'ready' }
+  | { readonly kind: 'answer'; readonly id: number; readonly outcome: Outcome<Result> }

@@ -25,7 +25,9 @@ export class LatestQueue<Request, Result> {
   readonly #deliver: (delivery: Delivery<Request, Result>) => void
   readonly #now: () => number
   #worker: WorkerLike<Request, Result> | null = null
-  #running: { id: number; request: Request; since: number } | null = null
+  /** `since` is null while the worker itself is still loading. */
+  #running: { id: number; request: Request; since: number | null } | null = null
+  #loaded = false
   #waiting: Request | null = null
   #lastId = 0
   #closed = false
@@ -44,8 +46,8 @@ export class LatestQueue<Request, Result> {
     if (this.#closed) return
     if (this.#running === null) {
       this.#start(request)
-    } else if (this.#now() - this.#running.since > GIVE_WAY_AFTER_MS) {
-      this.#endWorker()
+    } else if (this.#running.since !== null && this.#now() - this.#running.since > GIVE_WAY_AFTER_MS) {
+      this.drop()
       this.#start(request)
     } else {
       this.#waiting = request
@@ -66,17 +68,19 @@ export class LatestQueue<Request, Result> {
 
   #start(request: Request): void {
     const worker = (this.#worker ??= this.#connect())
-    this.#running = { id: ++this.#lastId, request, since: this.#now() }
+    this.#running = { id: ++this.#lastId, request, since: this.#loaded ? this.#now() : null }
     worker.postMessage({ id: this.#running.id, request })
   }
 
   #connect(): WorkerLike<Request, Result> {
     const worker = this.#spawn()
     worker.onmessage = ({ data }) => {
-      if (this.#running === null || data.id !== this.#running.id) return
-      this.#finish(data.outcome)
+      if (worker !== this.#worker) return
+      if (data.kind === 'ready') this.#ready()
+      else if (data.id === this.#running?.id) this.#finish(data.outcome)
     }
     worker.onerror = ({ message }) => {
+      if (worker !== this.#worker) return
       this.#dropWorker()
       this.#finish({
         ok: false,
@@ -85,6 +89,11 @@ export class LatestQueue<Request, Result> {
       })
     }
     return worker
+  }
+
+  #ready(): void {
+    this.#loaded = true
+    if (this.#running !== null) this.#running.since = this.#now()
   }
 
   #finish(outcome: Outcome<Result>): void {
@@ -104,5 +113,6 @@ export class LatestQueue<Request, Result> {
   #dropWorker(): void {
     this.#worker?.terminate()
     this.#worker = null
+    this.#loaded = false
   }
 }

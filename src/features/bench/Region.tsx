@@ -18,8 +18,8 @@ export function Region({ id, title, aside, className = '', children }: RegionPro
       aria-labelledby={`${id}-title`}
       className={`min-w-0 outline-none ${className}`}
     >
-      <div className="flex flex-wrap items-baseline justify-between gap-x-4 border-b border-rule sm:border-0 pb-1">
-        <h2 id={`${id}-title`} className="text-label uppercase text-muted">
+      <div className="flex flex-wrap items-center justify-between gap-x-4 border-b border-rule sm:border-0 pb-1">
+        <h2 id={`${id}-title`} className="text-label text-muted uppercase">
           <span className="max-sm:hidden">{title}</span>
           <button
             type="button"

@@ -1,4 +1,4 @@
-import { EdgeCard } from './card/EdgeCard.tsx'
+import { EdgeCard, useCardHead } from './card/EdgeCard.tsx'
 import { EdgeTable } from './edges/EdgeTable.tsx'
 import { SelectMany } from './edges/SelectMany.tsx'
 import { MarginNotes } from './notes/MarginNotes.tsx'
@@ -15,6 +15,7 @@ import { TiltLegend } from './TiltLegend.tsx'
  */
 export function Sheet() {
   const { theme, notes } = useScene()
+  const card = useCardHead()
   return (
     <div className="flex flex-col gap-4 pb-6">
       <div className="bench-sheet">
@@ -30,7 +31,12 @@ export function Sheet() {
           <MarginNotes />
         </Region>
         <div className="bench-card">
-          <Region id="bench-card" title="Edge" className="bg-panel border border-rule p-3">
+          <Region
+            id="bench-card"
+            title={card.title}
+            aside={card.aside}
+            className="bg-panel border border-rule p-3"
+          >
             <EdgeCard />
           </Region>
           <div className="pt-2 bg-sheet">

@@ -91,12 +91,15 @@ function isTyping(target: EventTarget | null): boolean {
   )
 }
 
-/** Focuses the first thing in a region that takes focus. */
+/** What takes the focus in a region, by preference: its own choice, the item the arrow keys stand on, any control. */
+const LANDINGS = ['[data-landing]', '[tabindex="0"]', 'input', 'button', 'a[href]']
+
 function land(id: string): void {
   const region = document.getElementById(id)
-  const first = region?.querySelector<HTMLElement>(
-    '[data-landing], input:not(:disabled), [tabindex="0"], button:not(:disabled), a[href]',
+  if (region === null) return
+  const target = LANDINGS.flatMap((selector) => [...region.querySelectorAll<HTMLElement>(selector)]).find(
+    (element) => element.checkVisibility() && !element.matches(':disabled'),
   )
-  ;(first ?? region)?.focus()
-  region?.scrollIntoView({ block: 'nearest' })
+  ;(target ?? region).focus()
+  region.scrollIntoView({ block: 'nearest' })
 }

@@ -18,9 +18,12 @@ class FakeWorker implements WorkerLike<string, string> {
   terminate() {
     this.ended = true
   }
+  loaded() {
+    this.onmessage?.({ data: { kind: 'ready' } })
+  }
   answer(at = this.asked.length - 1) {
     const { id, request } = this.asked[at]!
-    this.onmessage?.({ data: { id, outcome: { ok: true, result: request.toUpperCase() } } })
+    this.onmessage?.({ data: { kind: 'answer', id, outcome: { ok: true, result: request.toUpperCase() } } })
   }
 }
 
@@ -56,6 +59,8 @@ describe('the latest-wins queue', () => {
   it('ends a job that takes long when a newer one comes, and ignores its late answer', () => {
     const { workers, deliveries, clock, queue } = bench()
     queue.ask('slow')
+    workers[0]!.loaded()
+    queue.ask('between')
     clock.now = GIVE_WAY_AFTER_MS + 1
     queue.ask('new')
     expect(workers.map(({ ended }) => ended)).toEqual([true, false])
@@ -63,6 +68,20 @@ describe('the latest-wins queue', () => {
     expect(deliveries).toEqual([])
     workers[1]!.answer()
     expect(deliveries.map(({ request }) => request)).toEqual(['new'])
+    // what waited behind the slow job is older than the new one and must not follow it
+    expect(workers[1]!.asked).toHaveLength(1)
+  })
+
+  it('does not count the time in which the worker itself loads', () => {
+    const { workers, deliveries, clock, queue } = bench()
+    queue.ask('first')
+    clock.now = 10 * GIVE_WAY_AFTER_MS
+    queue.ask('second')
+    expect(workers).toHaveLength(1)
+    workers[0]!.loaded()
+    workers[0]!.answer()
+    workers[0]!.answer()
+    expect(deliveries.map(({ request }) => request)).toEqual(['first', 'second'])
   })
 
   it('gives a crash as a value and goes on with a new worker', () => {

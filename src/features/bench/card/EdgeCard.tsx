@@ -13,15 +13,12 @@ import { SectionEditor } from './SectionEditor.tsx'
 
 /** The prep of the selected edges as a dimensioned section whose numbers are the inputs. */
 export function EdgeCard() {
-  const { unit } = useScene()
   const content = useContent()
   const selection = useBench((state) => state.selection)
   const active = useBench((state) => state.active)
   const lead = selection.find((edge) => active !== null && sameEdge(edge, active)) ?? selection[0]
   if (lead === undefined) return <NoEdge />
 
-  const facets = facetsOf(content, lead)
-  const users = content.walls.filter((wall) => sameFacets(wall.facets, facets)).length
   const kinds = new Map<number, EdgeRef[]>()
   for (const edge of selection) {
     const count = facetsOf(content, edge).length
@@ -29,16 +26,6 @@ export function EdgeCard() {
   }
   return (
     <div className="flex flex-col gap-3">
-      <div className="flex flex-wrap justify-between gap-x-3">
-        <p className="font-medium">{selection.length === 1 ? edgeName(lead) : `${selection.length} edges`}</p>
-        <p className="text-small text-muted">
-          {selection.length === 1
-            ? users > 1
-              ? `same prep on ${users} edges`
-              : wallWords(facets, unit)
-            : namesOf(selection)}
-        </p>
-      </div>
       {kinds.size > 1 ? (
         <Unlike kinds={[...kinds.values()]} />
       ) : (
@@ -49,6 +36,22 @@ export function EdgeCard() {
       <JointFields lead={lead} selection={selection} />
     </div>
   )
+}
+
+/** The card's heading: which edges it speaks of, and the prep or the names. */
+export function useCardHead(): { title: string; aside: string } {
+  const { unit } = useScene()
+  const content = useContent()
+  const selection = useBench((state) => state.selection)
+  const [edge] = selection
+  if (edge === undefined) return { title: 'Edge card', aside: '' }
+  if (selection.length > 1) return { title: `${selection.length} edges`, aside: namesOf(selection) }
+  const facets = facetsOf(content, edge)
+  const users = content.walls.filter((wall) => sameFacets(wall.facets, facets)).length
+  return {
+    title: `Edge ${edgeName(edge)}`,
+    aside: users > 1 ? `same prep on ${users} edges` : wallWords(facets, unit),
+  }
 }
 
 const MOST_NAMES = 6

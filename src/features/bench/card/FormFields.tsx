@@ -40,7 +40,7 @@ export function FormFields({ lead, selection }: FormFieldsProps) {
     <div className="flex flex-col gap-2">
       <Choice
         showLegend
-        legend={form.mixed ? 'Form: mixed' : shownForm === 'own' ? `Form: ${formWords.own}` : 'Form'}
+        legend={form.mixed ? 'Bevel: mixed' : shownForm === 'own' ? `Bevel: ${formWords.own}` : 'Bevel'}
         value={shownForm ?? ('own' as CardForm)}
         options={options}
         onChange={choose}

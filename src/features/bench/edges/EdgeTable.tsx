@@ -123,6 +123,7 @@ function EdgeRow({ edge, index, selected, tabbable }: EdgeRowProps) {
   const known = edges.get(edgeKey(edge))
   const limit = limitOf(head)
   const over = breaches.has(edgeKey(edge))
+  const words = wallWords(facetsOf(content, edge), unit)
   const length = (mm: number | null | undefined) =>
     mm === undefined ? '…' : mm === null ? 'none' : formatLength(mm, unit)
 
@@ -148,7 +149,9 @@ function EdgeRow({ edge, index, selected, tabbable }: EdgeRowProps) {
       >
         {edgeName(edge)}
       </th>
-      <td className="px-2">{wallWords(facetsOf(content, edge), unit)}</td>
+      <td className="px-2 max-sm:max-w-40 truncate" title={words}>
+        {words}
+      </td>
       <td className="px-2 text-right">{length(known?.topLength)}</td>
       <td className="px-2 text-right">{length(known?.bottomLength)}</td>
       <td className="px-2 text-right">

@@ -7,8 +7,8 @@ export type CardForm = (typeof cardForms)[number] | 'own'
 
 export const formWords: Record<CardForm, string> = {
   square: 'square',
-  top: 'bevel, open to the top',
-  bottom: 'bevel, open to the bottom',
+  top: 'open to the top',
+  bottom: 'open to the bottom',
   double: 'double bevel',
   own: 'own chain of facets',
 }

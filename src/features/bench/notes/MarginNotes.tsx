@@ -63,7 +63,11 @@ function Note({ note }: { note: MarginNote }) {
         </button>
         {places.length > 1 && <Places places={places} />}
         {cure !== null && !readOnly && (
-          <Button look="quiet" className="-ml-3" onClick={() => apply(cure.cures, cure.message)}>
+          <Button
+            look="quiet"
+            className="-ml-3 text-left! justify-start!"
+            onClick={() => apply(cure.cures, cure.message)}
+          >
             {cure.message} [apply]
           </Button>
         )}

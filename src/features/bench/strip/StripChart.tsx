@@ -64,7 +64,12 @@ export function StripChart({ strip, scale }: StripChartProps) {
           [mechanical, working].every((limit) => limit === null || Math.abs(limit - tilt) > 6),
         )
         .map((tilt) => (
-          <text key={tilt} x={3} y={y(tilt) - 2} className="fill-muted text-[10px]">
+          <text
+            key={tilt}
+            x={3}
+            y={y(tilt) - 2}
+            className="fill-muted text-[10px] [paint-order:stroke] stroke-panel stroke-[3px]"
+          >
             {tilt}°
           </text>
         ))}
