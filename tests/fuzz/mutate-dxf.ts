@@ -9,7 +9,7 @@ import {
   oldPolyline,
   polyline,
   square,
-} from '../support/dxf-text.ts'
+} from '../../server/demo/dxf-text.ts'
 
 /** A seeded source of numbers in [0, 1) (mulberry32), so that every failure can be made again. */
 export function seeded(seed: number): () => number {

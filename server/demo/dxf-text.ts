@@ -1,9 +1,11 @@
-/** Small DXF files for tests, written group by group. */
+/** Small DXF files, written group by group: the demo's drawings, and what tests read. */
 
 export type Group = readonly [code: number, value: string | number]
 
 export interface DxfParts {
+  /** $INSUNITS: 1 inch, 4 millimetre. */
   readonly units?: number
+  readonly layers?: readonly string[]
   readonly blocks?: readonly string[]
   readonly entities: readonly string[]
 }
@@ -12,15 +14,35 @@ export function groups(...pairs: readonly Group[]): string {
   return pairs.map(([code, value]) => `${code}\n${value}\n`).join('')
 }
 
-export function dxfText({ units, blocks = [], entities }: DxfParts): string {
+export function dxfText({ units, layers = [], blocks = [], entities }: DxfParts): string {
   const header =
     units === undefined
       ? ''
       : groups([0, 'SECTION'], [2, 'HEADER'], [9, '$INSUNITS'], [70, units], [0, 'ENDSEC'])
   const definitions =
     blocks.length === 0 ? '' : groups([0, 'SECTION'], [2, 'BLOCKS']) + blocks.join('') + groups([0, 'ENDSEC'])
+  const tables =
+    layers.length === 0
+      ? ''
+      : groups(
+          [0, 'SECTION'],
+          [2, 'TABLES'],
+          [0, 'TABLE'],
+          [2, 'LAYER'],
+          [70, layers.length],
+          ...layers.flatMap((name): Group[] => [
+            [0, 'LAYER'],
+            [2, name],
+            [70, 0],
+            [62, 7],
+            [6, 'CONTINUOUS'],
+          ]),
+          [0, 'ENDTAB'],
+          [0, 'ENDSEC'],
+        )
   return (
     header +
+    tables +
     definitions +
     groups([0, 'SECTION'], [2, 'ENTITIES']) +
     entities.join('') +
@@ -92,6 +114,10 @@ export function block(
     entities.join('') +
     groups([0, 'ENDBLK'], [8, '0'])
   )
+}
+
+export function text(x: number, y: number, height: number, words: string, layer = '0'): string {
+  return groups([0, 'TEXT'], [8, layer], [10, x], [20, y], [40, height], [1, words])
 }
 
 export function insert(name: string, x: number, y: number, ...more: readonly Group[]): string {
