@@ -17,7 +17,7 @@ export type Query<K extends RouteName> = Read<K, 'query'>
 /** What a handler returns: the value of the answer's schema, a file, or nothing. */
 export type Answer<K extends RouteName> = Routes[K] extends { readonly answer: infer A }
   ? A extends z.ZodType
-    ? z.input<A>
+    ? z.output<A>
     : Download
   : void
 

@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { createHash } from 'node:crypto'
+import { setTimeout as wait } from 'node:timers/promises'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Head } from '../../shared/api/heads.ts'
 import type { Part } from '../../shared/api/parts.ts'
@@ -49,7 +50,8 @@ const submit = (setup: Setup) =>
 
 describe('two editors', () => {
   it(`save the same version at once: one wins, one is told, for ${ROUNDS} rounds`, async () => {
-    let { id, version } = await makeSetup(app, part.id, head.id)
+    const { id, ...first } = await makeSetup(app, part.id, head.id)
+    let { version } = first
     const second = await app.as('programmer2')
     for (let round = 1; round <= ROUNDS; round += 1) {
       const setup = await read(id)
@@ -116,9 +118,7 @@ describe('approving against editing', () => {
     edit: () => PromiseLike<{ status: number }>,
   ) {
     const editing = Promise.resolve(edit())
-    const approving = new Promise<{ status: number }>((resolve, reject) => {
-      setTimeout(() => Promise.resolve(approve()).then(resolve, reject), 2)
-    })
+    const approving = wait(2).then(() => approve())
     return [approving, editing] as const
   }
 
