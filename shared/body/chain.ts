@@ -1,4 +1,4 @@
-import { startAngle, startTangent } from '../geometry/segment.ts'
+import { startAngle } from '../geometry/segment.ts'
 import { branchPoint, branchRange, branchStray, type Branch, type BranchRange } from './branch.ts'
 import { CornerMode, makePlaces, place, radiusAt, sweepAt, type Frame } from './frame.ts'
 
@@ -54,9 +54,8 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
       if (segment.kind === 'arc') {
         kind[e] = PieceKind.arc
       } else {
-        const u = startTangent(segment)
-        ux[e] = u.x
-        uy[e] = u.y
+        ux[e] = frame.ux[g]!
+        uy[e] = frame.uy[g]!
       }
       bent[e] = frame.branches.get(g)
       e++

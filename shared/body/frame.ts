@@ -1,5 +1,5 @@
 import { endTangent, startTangent } from '../geometry/segment.ts'
-import type { Point, Segment } from '../geometry/types.ts'
+import type { Segment } from '../geometry/types.ts'
 import { branchOf, branchPoint, type Branch } from './branch.ts'
 import type { Body } from './types.ts'
 import { sameOffsets, wallTable, type WallTable } from './wall-table.ts'
@@ -20,6 +20,9 @@ export interface Frame {
   readonly segments: readonly Segment[]
   readonly px: Float64Array
   readonly py: Float64Array
+  /** Unit direction in which each edge starts. */
+  readonly ux: Float64Array
+  readonly uy: Float64Array
   /** Signed turn of the tangent at each corner, (−π, π], left positive. */
   readonly turn: Float64Array
   readonly mode: Uint8Array
@@ -98,20 +101,17 @@ function compile(body: Body): Frame {
     loopStart[l + 1] = segments.length
   }
   const numbers = () => new Float64Array(count)
-  const [px, py, turn, mx, my, kx, ky] = [
-    numbers(),
-    numbers(),
-    numbers(),
-    numbers(),
-    numbers(),
-    numbers(),
-    numbers(),
-  ]
+  const [px, py, ux, uy, turn] = [numbers(), numbers(), numbers(), numbers(), numbers()]
+  const [mx, my, kx, ky] = [numbers(), numbers(), numbers(), numbers()]
   const mode = new Uint8Array(count)
   const branches = new Map<number, Branch>()
   let hasArcs = false
   let hasSteps = false
-  const startsTangents = segments.map(startTangent)
+  for (let g = 0; g < count; g++) {
+    const direction = startTangent(segments[g]!)
+    ux[g] = direction.x
+    uy[g] = direction.y
+  }
   for (let g = 0; g < count; g++) {
     const p = previous[g]!
     const after = segments[g]!
@@ -119,10 +119,13 @@ function compile(body: Body): Frame {
     px[g] = after.from.x
     py[g] = after.from.y
     if (after.kind === 'arc') hasArcs = true
-    const a = before.kind === 'line' ? startsTangents[p]! : endTangent(before)
-    const b = startsTangents[g]!
-    const sin = a.x * b.y - a.y * b.x
-    const cos = a.x * b.x + a.y * b.y
+    const end = before.kind === 'arc' ? endTangent(before) : null
+    const ax = end ? end.x : ux[p]!
+    const ay = end ? end.y : uy[p]!
+    const bx = ux[g]!
+    const by = uy[g]!
+    const sin = ax * by - ay * bx
+    const cos = ax * bx + ay * by
     const phi = Math.atan2(sin, cos)
     turn[g] = phi
     const lines = before.kind === 'line' && after.kind === 'line'
@@ -136,11 +139,13 @@ function compile(body: Body): Frame {
       mode[g] = CornerMode.spike
       continue
     }
-    setMitre(g, a, b, cos)
+    // m·n₁ = m·n₂ = 1: the sum of both normals over 1 + cos(turn), steady down to no turn at all.
+    mx[g] = (ay + by) / (1 + cos)
+    my[g] = -(ax + bx) / (1 + cos)
     if (!smooth) {
       mode[g] = CornerMode.mitre
-      kx[g] = a.x / sin
-      ky[g] = a.y / sin
+      kx[g] = ax / sin
+      ky[g] = ay / sin
     } else if (sameOffsets(table, table.rowOfEdge[p]!, table.rowOfEdge[g]!)) {
       mode[g] = CornerMode.smooth
     } else {
@@ -159,6 +164,8 @@ function compile(body: Body): Frame {
     segments,
     px,
     py,
+    ux,
+    uy,
     turn,
     mode,
     mx,
@@ -168,12 +175,6 @@ function compile(body: Body): Frame {
     branches,
     hasArcs,
     hasSteps,
-  }
-
-  /** m·n₁ = m·n₂ = 1: the sum of both normals over 1 + cos(turn), steady down to no turn at all. */
-  function setMitre(g: number, a: Point, b: Point, cos: number): void {
-    mx[g] = (a.y + b.y) / (1 + cos)
-    my[g] = -(a.x + b.x) / (1 + cos)
   }
 }
 

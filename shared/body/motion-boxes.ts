@@ -32,7 +32,12 @@ export function fillMotionBoxes(march: March, span: number, pad: number, out: Fl
         out[at + 4 * end + 3] = ay < by ? by : ay
       }
     }
-    for (let side = 0; side < BOX_STRIDE; side++) out[at + side]! += side % 4 < 2 ? -pad : pad
+    for (let side = at; side < at + BOX_STRIDE; side += 4) {
+      out[side]! -= pad
+      out[side + 1]! -= pad
+      out[side + 2]! += pad
+      out[side + 3]! += pad
+    }
   }
 }
 

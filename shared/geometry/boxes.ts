@@ -50,14 +50,18 @@ export function boxTree(boxes: Float64Array): BoxTree {
 }
 
 function merge(out: Float64Array, at: number, boxes: Float64Array, from: number, to: number): void {
-  for (let side = 0; side < BOX_STRIDE; side++) {
-    const low = side % 4 < 2
-    let value = low ? Infinity : -Infinity
-    for (let b = from; b < to; b++) {
-      const v = boxes[b * BOX_STRIDE + side]!
-      if (low ? v < value : v > value) value = v
+  for (let end = 0; end < BOX_STRIDE; end += 4) {
+    let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity]
+    for (let b = from * BOX_STRIDE + end; b < to * BOX_STRIDE; b += BOX_STRIDE) {
+      if (boxes[b]! < minX) minX = boxes[b]!
+      if (boxes[b + 1]! < minY) minY = boxes[b + 1]!
+      if (boxes[b + 2]! > maxX) maxX = boxes[b + 2]!
+      if (boxes[b + 3]! > maxY) maxY = boxes[b + 3]!
     }
-    out[at + side] = value
+    out[at + end] = minX
+    out[at + end + 1] = minY
+    out[at + end + 2] = maxX
+    out[at + end + 3] = maxY
   }
 }
 
@@ -109,21 +113,34 @@ export function visitMeetingPairs(
 
 /** Whether two moving boxes overlap at some moment in [0, until]: four linear gaps must be closed at once. */
 function boxesMeet(p: Float64Array, i: number, q: Float64Array, j: number, until: number): boolean {
-  let enter = 0
-  let leave = until
-  for (let axis = 0; axis < 2; axis++) {
-    for (let turn = 0; turn < 2; turn++) {
-      const start = turn === 0 ? p[i + axis]! - q[j + axis + 2]! : q[j + axis]! - p[i + axis + 2]!
-      const end = turn === 0 ? p[i + axis + 4]! - q[j + axis + 6]! : q[j + axis + 4]! - p[i + axis + 6]!
-      if (start > 0) {
-        if (end > 0) return false
-        const closes = start / (start - end)
-        if (closes > enter) enter = closes
-      } else if (end > 0) {
-        const opens = start / (start - end)
-        if (opens < leave) leave = opens
-      }
-    }
-  }
+  const left = p[i]! - q[j + 2]!
+  const right = q[j]! - p[i + 2]!
+  const below = p[i + 1]! - q[j + 3]!
+  const above = q[j + 1]! - p[i + 3]!
+  const apart = left > 0 || right > 0 || below > 0 || above > 0
+  if (!apart) return true
+  if (until <= 0) return false
+  // Each gap that is open at the start closes at some moment, and each that is closed opens; open throughout: never.
+  const leftEnd = p[i + 4]! - q[j + 6]!
+  const rightEnd = q[j + 4]! - p[i + 6]!
+  const belowEnd = p[i + 5]! - q[j + 7]!
+  const aboveEnd = q[j + 5]! - p[i + 7]!
+  if (left > 0 && leftEnd > 0) return false
+  if (right > 0 && rightEnd > 0) return false
+  if (below > 0 && belowEnd > 0) return false
+  if (above > 0 && aboveEnd > 0) return false
+  const enter = Math.max(
+    left > 0 ? left / (left - leftEnd) : 0,
+    right > 0 ? right / (right - rightEnd) : 0,
+    below > 0 ? below / (below - belowEnd) : 0,
+    above > 0 ? above / (above - aboveEnd) : 0,
+  )
+  const leave = Math.min(
+    left <= 0 && leftEnd > 0 ? left / (left - leftEnd) : until,
+    right <= 0 && rightEnd > 0 ? right / (right - rightEnd) : until,
+    below <= 0 && belowEnd > 0 ? below / (below - belowEnd) : until,
+    above <= 0 && aboveEnd > 0 ? above / (above - aboveEnd) : until,
+    until,
+  )
   return enter <= leave
 }

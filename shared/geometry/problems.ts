@@ -84,11 +84,12 @@ function meetingProblems(loops: readonly Loop[], within: number): ProfileProblem
       loopOf[i] = l
       edgeOf[i] = e
       const box = segmentBounds(segment)
+      // At rest: the visit below looks at the start only.
       const at = i++ * BOX_STRIDE
-      boxes[at] = boxes[at + 4] = box.minX - within
-      boxes[at + 1] = boxes[at + 5] = box.minY - within
-      boxes[at + 2] = boxes[at + 6] = box.maxX + within
-      boxes[at + 3] = boxes[at + 7] = box.maxY + within
+      boxes[at] = box.minX - within
+      boxes[at + 1] = box.minY - within
+      boxes[at + 2] = box.maxX + within
+      boxes[at + 3] = box.maxY + within
     }
   }
   const problems: ProfileProblem[] = []

@@ -101,7 +101,10 @@ function withQuadrants(ends: Bounds, centre: Point, radius: number, start: numbe
 }
 
 function lineDirection({ from, to }: Segment): Point {
-  return unit({ x: to.x - from.x, y: to.y - from.y })
+  const x = to.x - from.x
+  const y = to.y - from.y
+  const length = Math.sqrt(x * x + y * y)
+  return length === 0 ? { x, y } : { x: x / length, y: y / length }
 }
 
 function arcTangent({ centre, sweep }: ArcSegment, at: Point): Point {
