@@ -16,7 +16,7 @@ import { Banners } from './save/Banners.tsx'
 import { Sheet } from './Sheet.tsx'
 import { headOf, requestOf } from './model/content.ts'
 import { readEdges } from './model/link.ts'
-import { breachesIn, notesOf } from './model/notes.ts'
+import { breachesIn, notesOf, type MarginNote } from './model/notes.ts'
 import { baseOf } from './model/state.ts'
 import { BenchContext, makeBenchStore, useContent } from './model/store.ts'
 import { SceneContext, type Scene } from './scene.ts'
@@ -48,7 +48,7 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
   const unit = useUnit()
   const theme = useTheme()
   const maySave = useMay('saveSetup')
-  const [chosenNote, chooseNote] = useState<number | null>(null)
+  const [chosen, setChosen] = useState<{ number: number | null; of: readonly MarginNote[] } | null>(null)
   // The profile is the part's and does not change while the bench is open.
   const [stored] = useState(setup.revision.content)
 
@@ -97,8 +97,9 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
     corners,
     breaches,
     notes,
-    chosenNote,
-    chooseNote,
+    // Numbers belong to one list of notes: another list begins without a choice.
+    chosenNote: chosen?.of === notes ? chosen.number : null,
+    chooseNote: (number) => setChosen({ number, of: notes }),
   }
   return (
     <SceneContext value={scene}>

@@ -2,7 +2,7 @@ import { useState, type ReactNode } from 'react'
 
 interface RegionProps {
   readonly id: string
-  readonly title: string
+  readonly title: ReactNode
   readonly aside?: ReactNode
   readonly className?: string
   readonly children: ReactNode

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import { edgeName } from '../../../../shared/body/names.ts'
 import type { EdgeRef } from '../../../../shared/body/types.ts'
 import { Button } from '../../../ui/Button.tsx'
@@ -39,7 +40,7 @@ export function EdgeCard() {
 }
 
 /** The card's heading: which edges it speaks of, and the prep or the names. */
-export function useCardHead(): { title: string; aside: string } {
+export function useCardHead(): { title: ReactNode; aside: string } {
   const { unit } = useScene()
   const content = useContent()
   const selection = useBench((state) => state.selection)
@@ -49,7 +50,11 @@ export function useCardHead(): { title: string; aside: string } {
   const facets = facetsOf(content, edge)
   const users = content.walls.filter((wall) => sameFacets(wall.facets, facets)).length
   return {
-    title: `Edge ${edgeName(edge)}`,
+    title: (
+      <>
+        Edge <span className="normal-case font-bold text-ink">{edgeName(edge)}</span>
+      </>
+    ),
     aside: users > 1 ? `same prep on ${users} edges` : wallWords(facets, unit),
   }
 }

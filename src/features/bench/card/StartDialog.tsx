@@ -45,12 +45,15 @@ export function StartDialog({ selection, onClose }: StartDialogProps) {
                 {row.standard} {row.detail}: {row.form}
               </p>
               <p className="text-small">{rangesText(row, unit)}</p>
+              <p className="text-small">gives {wallWords(start.facets, unit)}</p>
               <p className="text-small text-muted">
                 {row.source}
                 {row.known === 'memory' && !row.source.includes('memory') ? ', from memory' : ''}
               </p>
             </div>
             <Button
+              className="self-center"
+              aria-label={`Set ${row.standard} ${row.detail}, ${row.form}`}
               onClick={() => {
                 acts.edit((before) =>
                   withJoint(
@@ -62,7 +65,7 @@ export function StartDialog({ selection, onClose }: StartDialogProps) {
                 onClose()
               }}
             >
-              Set {wallWords(start.facets, unit)}
+              Set it
             </Button>
           </li>
         ))}

@@ -10,7 +10,7 @@ import {
   type StripEdge,
   type StripPoint,
 } from '../model/strip.ts'
-import { useBench } from '../model/store.ts'
+import { useBench, useContent } from '../model/store.ts'
 import { useScene } from '../scene.ts'
 
 export interface Strip {
@@ -28,9 +28,9 @@ const NO_BREACH = 0.005
 
 /** What the strip draws of one loop, from the evaluation. Nothing is drawn above it before the first answer. */
 export function useStrip(loop: number): Strip {
-  const { edges: evaluated, corners, head, stored } = useScene()
+  const { edges: evaluated, corners, head } = useScene()
+  const { thickness } = useContent().plate
   const loops = useBench((state) => state.loops)
-  const { thickness } = stored.plate
   return useMemo(() => {
     const edges = (loops[loop] ?? []).map((segment, edge): StripEdge => {
       const known = evaluated.get(edgeKey({ loop, edge }))
