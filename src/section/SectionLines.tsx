@@ -34,7 +34,6 @@ export function SectionLines({ layout, theme, label, breached, print }: SectionL
       aria-label={label}
       width={layout.width}
       height={layout.height}
-      viewBox={`0 0 ${layout.width} ${layout.height}`}
       className="block overflow-visible"
       fill="none"
     >

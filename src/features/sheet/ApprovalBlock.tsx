@@ -9,7 +9,7 @@ export function ApprovalBlock({ revision, standing }: { revision: Revision; stan
   const { approval, supersededBy } = standing
   const good = approval !== null && supersededBy === null
   return (
-    <section aria-label="Approval" className="sheet-keep border-2 border-black print:mt-[4mm]">
+    <section aria-label="Approval, as printed" className="sheet-keep border-2 border-black print:mt-[4mm]">
       {!good && <PrintHatch />}
       <div className="px-[3mm] py-[1.5mm] flex flex-wrap items-baseline gap-x-[5mm]">
         <p className="text-[14pt] font-bold">{standingWord(standing)}</p>

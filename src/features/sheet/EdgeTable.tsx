@@ -38,7 +38,7 @@ export function EdgeTable({ rows, groups, unit }: EdgeTableProps) {
               <th
                 key={column}
                 scope="col"
-                className={`font-normal text-[6.5pt] leading-tight px-[1mm] py-[0.5mm] ${column === 'Edge' || column === 'Prep' ? 'text-left' : 'text-right'}`}
+                className={`font-normal text-[6.5pt] leading-tight px-[1mm] py-[0.5mm] ${column === 'Prep' ? 'text-left pl-[3mm]' : column === 'Edge' ? 'text-left' : 'text-right'}`}
               >
                 {column}
               </th>
@@ -90,7 +90,7 @@ function EdgeLines({ row, letter, unit }: EdgeLinesProps) {
               <td rowSpan={span} className={number}>
                 {length(row.bottomLength)}
               </td>
-              <td rowSpan={span} className="px-[1mm] py-[0.3mm]">
+              <td rowSpan={span} className="pl-[3mm] pr-[1mm] py-[0.3mm]">
                 {letter && <strong>{letter} </strong>}
                 {describeWall(row.facets, unit)}
                 {row.joint && <span className="block">joint {row.joint.label || 'without a number'}</span>}

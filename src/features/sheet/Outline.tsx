@@ -7,14 +7,14 @@ import type { Point, VertexLoop } from '../../../shared/geometry/types.ts'
 import type { SetupContent } from '../../../shared/setup/schema.ts'
 import { formatLength } from '../../../shared/units/format.ts'
 import type { DisplayUnit } from '../../../shared/units/length.ts'
-import { standardScaleWithin } from '../../section/scales.ts'
+import { PX_PER_MM, standardScaleWithin } from '../../section/scales.ts'
 import { outlinePath } from '../../ui/outline-path.ts'
 import { Heading } from './Heading.tsx'
 import { placeNames } from './name-places.ts'
 import { isPlain, type SheetRow } from './sheet-model.ts'
 
-/** Room for the picture and, round it, for names. mm on paper. */
-const WIDTH = 186
+/** Room for the picture and, round it, for names. mm on paper; anything wider than the page would shrink it all. */
+const WIDTH = 182
 const HEIGHT = 124
 const RIM = 8
 const FONT = 2.6
@@ -55,36 +55,39 @@ export function Outline({ content, evaluation, rows, unit }: OutlineProps) {
       <svg
         role="img"
         aria-label={`Part from above with ${rows.length} edges`}
-        viewBox={`0 0 ${WIDTH} ${height}`}
-        style={{ width: `${WIDTH}mm`, height: `${height}mm` }}
+        width={WIDTH * PX_PER_MM}
+        height={height * PX_PER_MM}
         fill="none"
         stroke="#000"
       >
-        {bottom && (
+        {/* No view box: browsers snap one to whole pixels, and the scale would be off. */}
+        <g transform={`scale(${PX_PER_MM})`}>
+          {bottom && (
+            <g transform={place}>
+              <path
+                d={outlinePath(bottom.loops)}
+                strokeWidth={0.18 / scale}
+                strokeDasharray={`${1.6 / scale} ${0.9 / scale}`}
+              />
+            </g>
+          )}
           <g transform={place}>
-            <path
-              d={outlinePath(bottom.loops)}
-              strokeWidth={0.18 / scale}
-              strokeDasharray={`${1.6 / scale} ${0.9 / scale}`}
-            />
+            <path d={outlinePath(top)} strokeWidth={0.4 / scale} />
           </g>
-        )}
-        <g transform={place}>
-          <path d={outlinePath(top)} strokeWidth={0.4 / scale} />
+          {names.map(({ name, at }) => (
+            <text
+              key={name}
+              x={at.x}
+              y={at.y + FONT * 0.35}
+              fontSize={FONT}
+              textAnchor="middle"
+              fill="#000"
+              stroke="none"
+            >
+              {name}
+            </text>
+          ))}
         </g>
-        {names.map(({ name, at }) => (
-          <text
-            key={name}
-            x={at.x}
-            y={at.y + FONT * 0.35}
-            fontSize={FONT}
-            textAnchor="middle"
-            fill="#000"
-            stroke="none"
-          >
-            {name}
-          </text>
-        ))}
       </svg>
       <figcaption className="text-[7.5pt]">
         Full line: top edge.{' '}
