@@ -171,6 +171,36 @@ describe('problems of a profile', () => {
     expect(codes(...loops)).toContain(code)
   }) // prettier-ignore
 
+  test('tangent corners are no crossings, wherever the part lies and however its digits were cut', () => {
+    const random = seeded(11)
+    for (let i = 0; i < 200; i++) {
+      const r = 1 + 30 * random()
+      const [w, h] = [100 * random(), 2.5 * r + 100 * random()]
+      const [turn, dx, dy] = [7 * random(), 900 * random(), 900 * random()]
+      const quarter = Math.tan(Math.PI / 8)
+      // A rounded rectangle with an S of two arcs in its side, moved and written to four digits or in full.
+      const drawn: Vertex[] = [
+        { x: -r, y: 0 },
+        { x: r + w, y: 0, bulge: quarter },
+        { x: 2 * r + w, y: r },
+        { x: 2 * r + w, y: r + h, bulge: quarter },
+        { x: r + w, y: 2 * r + h },
+        { x: r, y: 2 * r + h, bulge: quarter },
+        { x: 0, y: r + h, bulge: -quarter },
+        { x: -r, y: h, bulge: quarter },
+        { x: -2 * r, y: h - r },
+        { x: -2 * r, y: r, bulge: quarter },
+      ]
+      const cut = (v: number) => (i % 2 ? v : Math.round(v * 1e4) / 1e4)
+      const moved = drawn.map(({ x, y, bulge }) => ({
+        x: cut(dx + x * Math.cos(turn) - y * Math.sin(turn)),
+        y: cut(dy + x * Math.sin(turn) + y * Math.cos(turn)),
+        bulge,
+      }))
+      expect(profileProblems([loopFromVertices(moved)]), `case ${i}`).toEqual([])
+    }
+  })
+
   test('says where: edges and the point', () => {
     const bow = [{ x: 0, y: 0 }, { x: 10, y: 10 }, { x: 10, y: 0 }, { x: 0, y: 10 }] // prettier-ignore
     const problem = profileProblems([loopFromVertices(bow)]).find((p) => p.code === 'crosses-itself')!
