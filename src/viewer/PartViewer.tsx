@@ -89,8 +89,8 @@ export default function PartViewer(props: PartViewerProps) {
   const onHover = useCallback(
     (at: { x: number; y: number } | null) => {
       const edge = at && picker.edgeAt(control.view, control.frame, at.x, at.y, REACH.fine)
-      scene.current.part?.hover(edge)
-      if (stage.current) stage.current.style.cursor = edge ? 'pointer' : 'grab'
+      if (!scene.current.part?.hover(edge)) return
+      if (stage.current) stage.current.style.cursor = edge ? 'pointer' : ''
       scene.current.invalidate()
     },
     [control, picker],

@@ -73,7 +73,9 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
         const element = labelNodes.get(key)
         const lines = index?.edges.get(edgeKey(edge))
         const stations = lines ? stationsOf(lines) : []
-        return element && stations.length > 0 ? [{ element, edge, stations, must: tone !== 'plain' }] : []
+        return element && lines && stations.length > 0
+          ? [{ element, edge, stations, length: lines.length, must: tone !== 'plain' }]
+          : []
       }),
     )
     layer.setBalloons(

@@ -19,6 +19,9 @@ import { labelPlaces, type LabelPlace, type Station } from './stations.ts'
 /** Above this many triangles, labels are not tested for being hidden: the search tree waits for the pointer. */
 const TEST_HIDDEN_UP_TO = 60_000
 
+/** An edge shorter than this on screen has no label until it is selected or zoomed in on, px. */
+const SHORTEST_EDGE = 24
+
 /** Corner of the picture that the scale bar holds, px. */
 const BAR_ROOM = { width: 160, height: 34 }
 
@@ -29,6 +32,8 @@ interface LabelNode {
   readonly element: HTMLElement
   readonly edge: EdgeRef
   readonly stations: readonly Station[]
+  /** Of the edge, mm. */
+  readonly length: number
   /** Shown even where its edge is hidden. */
   readonly must: boolean
   readonly width: number
@@ -78,7 +83,7 @@ export class OverlayLayer {
   }
 
   /** Elements and where they belong; sizes are measured here, once, not in a frame. */
-  setLabels(nodes: readonly Pick<LabelNode, 'element' | 'edge' | 'stations' | 'must'>[]): void {
+  setLabels(nodes: readonly Omit<LabelNode, 'width' | 'height' | 'last'>[]): void {
     const before = new Map(this.#labels.map((label) => [label.element, label.last]))
     this.#labels = nodes.map((node) => ({
       ...node,
@@ -173,7 +178,7 @@ export class OverlayLayer {
       height: label.height,
       last: label.last,
       places:
-        label.must || this.#inSight(label, picker, toward)
+        label.must || (label.length * scale >= SHORTEST_EDGE && this.#inSight(label, picker, toward))
           ? labelPlaces(label.stations, project, scale, label)
           : [],
     }))

@@ -18,8 +18,8 @@ export interface Station {
 const SHARES = [0.5, 0.32, 0.68, 0.18, 0.82]
 /** Gaps between the part and the label that are tried, px. */
 const GAPS = [7, 22, 40]
-/** An outward direction shorter than this on screen (px per mm of it, scaled) points at the eye. */
-const HEAD_ON = 0.12
+/** A wall whose outward direction is seen shorter than this share of its length faces the eye, or away. */
+const HEAD_ON = 0.65
 
 export function stationsOf(lines: EdgeLines): Station[] {
   const top = lines.top[0]
@@ -58,9 +58,10 @@ export function labelPlaces(
       const top = project(station.top)
       const ahead = project(along(station.top, station.outward, 1 / pixelsPerMm))
       const length = Math.hypot(ahead.x - top.x, ahead.y - top.y)
-      // A wall that faces the eye has its label below it.
+      // A wall that faces the eye has its label below it, one that faces away above.
+      const upright = ahead.nearness > top.nearness ? 1 : -1
       const dx = length < HEAD_ON ? 0 : (ahead.x - top.x) / length
-      const dy = length < HEAD_ON ? 1 : (ahead.y - top.y) / length
+      const dy = length < HEAD_ON ? upright : (ahead.y - top.y) / length
       const reach = (p: { x: number; y: number }) => p.x * dx + p.y * dy
       const rim = station.rims.map(project).reduce((far, p) => (reach(p) > reach(far) ? p : far))
       const push = gap + (Math.abs(dx) * size.width) / 2 + (Math.abs(dy) * size.height) / 2

@@ -90,17 +90,23 @@ export class LineSet {
     this.#positions.needsUpdate = true
     this.#distances.needsUpdate = true
     this.#geometry.instanceCount = count
-    const many = count > RULED_UP_TO
-    if (many) this.#fillPlain(count)
-    this.plain.visible = many
-    this.shown.visible = count > 0 && !many
-    if (this.behind) this.behind.visible = count > 0 && !many
+    if (count > RULED_UP_TO) this.#fillPlain(count)
+    this.omit(false)
   }
 
   colour([r, g, b]: Rgb): void {
     const colour = new Color(`rgb(${r},${g},${b})`)
     this.#plainMaterial.color = colour
     for (const material of this.#materials) material.color = colour
+  }
+
+  /** Leaves the lines out of the picture without forgetting them. */
+  omit(omitted: boolean): void {
+    const count = omitted ? 0 : this.#geometry.instanceCount
+    const many = count > RULED_UP_TO
+    this.plain.visible = many
+    this.shown.visible = count > 0 && !many
+    if (this.behind) this.behind.visible = count > 0 && !many
   }
 
   /** Keeps dashes the same length on screen at any zoom. */

@@ -20,6 +20,8 @@ export interface MeshIndex {
   /** Radius of the sphere round the box of the part, mm; 0 for an empty mesh. */
   readonly radius: number
   readonly faceOfVertex: Uint32Array
+  /** Mean length of the top lines, mm. */
+  readonly meanEdge: number
   readonly edges: ReadonlyMap<string, EdgeLines>
   readonly runs: Readonly<Record<'top' | 'bottom' | 'level' | 'seam', Float64Array[]>>
 }
@@ -42,8 +44,10 @@ export function indexMesh(mesh: BodyMesh): MeshIndex {
     lines[kind].push(points)
     if (kind === 'top') lines.length += lengthOf(points)
   }
+  const total = [...edges.values()].reduce((sum, { length }) => sum + length, 0)
   return {
     mesh,
+    meanEdge: edges.size === 0 ? 0 : total / edges.size,
     centre: box?.centre ?? [0, 0, 0],
     radius: box?.radius ?? 0,
     faceOfVertex: faceOfVertices(mesh),

@@ -15,6 +15,9 @@ const LINE_LIFT = 1.5
 /** How far behind a face a line must be before it counts as hidden, px. */
 const HIDDEN_LIFT = 4
 
+/** Seams closer together than this on screen would only blacken the walls, px. */
+const CROWDED = 4
+
 export interface Dress {
   readonly palette: Palette
   readonly tiltOf: (loop: number, edge: number, facet: number) => number
@@ -41,6 +44,7 @@ export class PartScene {
     select: new LineSet({ width: 4, hidden: { width: 2.4, opacity: 0.6 }, order: 9 }),
   }
   #index: MeshIndex | null = null
+  #hovered: string | null = null
 
   constructor() {
     const faces = new Mesh(this.#part.geometry, this.#faces)
@@ -66,6 +70,7 @@ export class PartScene {
       this.#lines[kind].fill(index.runs[kind], index.centre)
     }
     this.#lines.hover.fill([], index.centre)
+    this.#hovered = null
     this.group.visible = true
   }
 
@@ -105,11 +110,14 @@ export class PartScene {
     )
   }
 
-  /** Outlines the edge under the pointer. */
-  hover(edge: EdgeRef | null): void {
-    if (!this.#index) return
-    const lines = edge && this.#index.edges.get(edgeKey(edge))
+  /** Outlines the edge under the pointer; answers whether that is another one than before. */
+  hover(edge: EdgeRef | null): boolean {
+    const key = edge && edgeKey(edge)
+    if (!this.#index || key === this.#hovered) return false
+    this.#hovered = key
+    const lines = key === null ? undefined : this.#index.edges.get(key)
     this.#lines.hover.fill(lines ? [...lines.top, ...lines.bottom] : [], this.#index.centre)
+    return true
   }
 
   /** Before each frame: lines move toward the eye by a pixel or so, which an orthographic view cannot see. */
@@ -120,6 +128,9 @@ export class PartScene {
       lift(set.plain, toward, LINE_LIFT / pixelsPerMm)
       if (set.behind) lift(set.behind, toward, HIDDEN_LIFT / pixelsPerMm)
     }
+    const crowded = (this.#index?.meanEdge ?? 0) * pixelsPerMm < CROWDED
+    this.#lines.seam.omit(crowded)
+    this.#lines.level.omit(crowded)
     this.#faces.setPixelRatio(pixelRatio)
     this.#discs.setPixelRatio(pixelRatio)
   }
