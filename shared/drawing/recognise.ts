@@ -32,7 +32,7 @@ export function recogniseArcs(loop: readonly DrawnSegment[], tolerance: number):
   const circle = wholeCircle(loop, turns, tolerance)
   if (circle) return circle
 
-  const start = firstBreak(turns)
+  const start = firstBreak(loop, turns)
   const ordered = [...loop.slice(start), ...loop.slice(0, start)]
   const into = [...turns.slice(start), ...turns.slice(0, start)]
   const segments: DrawnSegment[] = []
@@ -61,11 +61,12 @@ function turnInto(before: Segment | undefined, segment: Segment): number {
   return Math.abs(turn) <= WIDEST_TURN ? turn : 0
 }
 
-/** Where to start going round: at a corner that no arc can contain, else at the sharpest one. */
-function firstBreak(turns: readonly number[]): number {
+/** Where to start going round: at a corner that no arc can contain, else at the longest line. */
+function firstBreak(loop: readonly DrawnSegment[], turns: readonly number[]): number {
   const broken = turns.findIndex((turn, i) => turn * (turns.at(i - 1) ?? 0) <= 0)
   if (broken >= 0) return broken
-  return turns.reduce((best, turn, i) => (Math.abs(turn) > Math.abs(turns[best] ?? 0) ? i : best), 0)
+  const lengths = loop.map((drawn) => segmentLength(drawn.segment))
+  return lengths.reduce((best, length, i) => (length > (lengths[best] ?? 0) ? i : best), 0)
 }
 
 /** End (exclusive) of the lines from `start` on that keep turning the same way. */
