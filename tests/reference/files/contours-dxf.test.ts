@@ -3,7 +3,7 @@ import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
-import DxfParser from 'dxf-parser'
+import dxfParserModule, { type ILwpolylineEntity } from 'dxf-parser'
 import { beforeAll, describe, expect, it } from 'vitest'
 import { evaluate } from '../../../shared/evaluate/evaluate.ts'
 import type { Evaluation } from '../../../shared/evaluate/schema.ts'
@@ -11,6 +11,9 @@ import { cautions } from '../../../shared/files/cautions.ts'
 import { contoursDxf, type FileInfo } from '../../../shared/files/contours-dxf.ts'
 import { evaluationRequestOf } from '../../../shared/setup/schema.ts'
 import { content } from '../../unit/setup/content.ts'
+
+/** The package is CommonJS: its types name the class as default export, at run time it is the export itself. */
+const DxfParser = dxfParserModule as unknown as typeof dxfParserModule.default
 
 /** The file is read back by two readers that share no code with its writer: ezdxf (Debian's python3-ezdxf) and dxf-parser. */
 
@@ -129,10 +132,7 @@ describe('contours as DXF', () => {
   it('is read the same by dxf-parser', () => {
     const parsed = new DxfParser().parseSync(text)
     expect(parsed?.header['$INSUNITS']).toBe(4)
-    const bottom = (parsed?.entities ?? []).filter(({ layer }) => layer === 'BOTTOM') as unknown as {
-      vertices: { x: number; y: number; bulge?: number }[]
-      shape: boolean
-    }[]
+    const bottom = (parsed?.entities ?? []).filter(({ layer }) => layer === 'BOTTOM') as ILwpolylineEntity[]
     const last = evaluation.contours.at(-1)
     expect(bottom.map(({ shape }) => shape)).toEqual([true, true])
     for (const [l, { vertices }] of bottom.entries()) {
