@@ -72,7 +72,7 @@ export function branchPoint(branch: Branch, before: number, after: number): Poin
 }
 
 /** Along the axis, and the square of the distance across it (negative: the curves do not meet). */
-export function branchPlace(
+function branchPlace(
   branch: Branch,
   before: number,
   after: number,

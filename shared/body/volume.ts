@@ -36,7 +36,7 @@ export function volumeOf(body: Body): number | null {
 }
 
 /** Area of the contour as a function of depth, mm². */
-export function areaByDepth(body: Body): (depth: number) => number {
+function areaByDepth(body: Body): (depth: number) => number {
   const frame = frameOf(body)
   const offsets = new Float64Array(frame.count)
   const places = makePlaces(frame.count)
@@ -48,7 +48,7 @@ export function areaByDepth(body: Body): (depth: number) => number {
 }
 
 /** Chords about the first corner, steps between unlike neighbours, and the caps of arcs. */
-export function areaOf(frame: Frame, offsets: Float64Array, places: Places): number {
+function areaOf(frame: Frame, offsets: Float64Array, places: Places): number {
   const { sx, sy, ex, ey } = places
   const ox = sx[0] ?? 0
   const oy = sy[0] ?? 0

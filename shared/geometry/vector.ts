@@ -47,11 +47,6 @@ export function leftOf(a: Point): Point {
   return { x: -a.y, y: a.x }
 }
 
-/** A quarter turn clockwise: from a direction of travel to the outward normal. */
-export function rightOf(a: Point): Point {
-  return { x: a.y, y: -a.x }
-}
-
 export function middle(a: Point, b: Point): Point {
   return { x: (a.x + b.x) / 2, y: (a.y + b.y) / 2 }
 }
