@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react'
+import { memo, useCallback, useMemo, useState } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import type { Head } from '../../../shared/api/heads.ts'
 import type { Setup } from '../../../shared/api/setups.ts'
@@ -48,6 +48,7 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
   const unit = useUnit()
   const theme = useTheme()
   const maySave = useMay('saveSetup')
+  // A number belongs to one list of notes: another list begins without a choice.
   const [chosen, setChosen] = useState<{ number: number | null; of: readonly MarginNote[] } | null>(null)
   // The profile is the part's and does not change while the bench is open.
   const [stored] = useState(setup.revision.content)
@@ -83,36 +84,68 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
     [evaluation],
   )
   const breaches = useMemo(() => breachesIn(evaluation?.findings ?? []), [evaluation])
-  const scene: Scene = {
-    setup,
-    newest,
-    stored,
-    heads,
-    head,
-    readOnly,
-    unit,
-    theme,
-    result,
-    edges,
-    corners,
-    breaches,
-    notes,
-    // Numbers belong to one list of notes: another list begins without a choice.
-    chosenNote: chosen?.of === notes ? chosen.number : null,
-    chooseNote: (number) => setChosen({ number, of: notes }),
-  }
+  const chosenNote = chosen?.of === notes ? chosen.number : null
+  const chooseNote = useCallback((number: number | null) => setChosen({ number, of: notes }), [notes])
+  const { mesh, request: answered, error, pending } = result
+  const scene = useMemo(
+    (): Scene => ({
+      setup,
+      newest,
+      stored,
+      heads,
+      head,
+      readOnly,
+      unit,
+      theme,
+      result: { evaluation, mesh, request: answered, error, pending },
+      edges,
+      corners,
+      breaches,
+      notes,
+      chosenNote,
+      chooseNote,
+    }),
+    [
+      setup,
+      newest,
+      stored,
+      heads,
+      head,
+      readOnly,
+      unit,
+      theme,
+      evaluation,
+      mesh,
+      answered,
+      error,
+      pending,
+      edges,
+      corners,
+      breaches,
+      notes,
+      chosenNote,
+      chooseNote,
+    ],
+  )
   return (
     <SceneContext value={scene}>
       <InStep />
-      <Page>
-        <TitleBlock />
-        <ActRow />
-        <Banners />
-        <Sheet />
-      </Page>
+      <Everything />
     </SceneContext>
   )
 }
+
+/** Drawn anew by what it reads, not by a change of the address. */
+const Everything = memo(function Everything() {
+  return (
+    <Page>
+      <TitleBlock />
+      <ActRow />
+      <Banners />
+      <Sheet />
+    </Page>
+  )
+})
 
 /** Keeps the address and the screen reader in step; draws nothing. */
 function InStep() {

@@ -10,8 +10,16 @@ export type Facets = readonly FacetSpec[]
 
 type Walls = SaveSetup['walls']
 
-export function squareFacets(thickness: number): FacetSpec[] {
-  return [{ depth: thickness, tilt: 0 }]
+const squares = new Map<number, Facets>()
+
+/** The same value for the same thickness, so that a thousand square edges are told apart by nothing. */
+export function squareFacets(thickness: number): Facets {
+  let facets = squares.get(thickness)
+  if (facets === undefined) {
+    facets = [{ depth: thickness, tilt: 0 }]
+    squares.set(thickness, facets)
+  }
+  return facets
 }
 
 const indexes = new WeakMap<Walls, ReadonlyMap<string, Facets>>()

@@ -1,3 +1,6 @@
+import { useMemo } from 'react'
+import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { MarginNote } from '../model/notes.ts'
 import { tiltAt } from '../model/strip.ts'
 import { useActs } from '../model/store.ts'
 import { useScene } from '../scene.ts'
@@ -11,21 +14,10 @@ const GAP = 2 * RADIUS + 2
 export function StripBalloons({ strip, scale }: { strip: Strip; scale: StripScale }) {
   const { notes, chosenNote, chooseNote } = useScene()
   const acts = useActs()
-  const marks = notes.flatMap(({ number, severity, places }) =>
-    places.flatMap((place) => {
-      if (place.loop !== strip.loop || place.edges.length > 2) return []
-      const s = placeOf(strip, place.vertex, place.edge)
-      return s === null ? [] : [{ number, severity, edges: place.edges, s }]
-    }),
-  )
-  const placed: { x: number; y: number }[] = []
+  const marks = useMemo(() => placeMarks(notes, strip, scale), [notes, strip, scale])
   return (
     <g>
-      {marks.map(({ number, severity, edges, s }, i) => {
-        const x = Math.max(RADIUS + 1, Math.min(scale.width - RADIUS - 1, scale.x(s)))
-        const y = freeHeight(placed, x, scale.y(tiltAt(strip.line, s) ?? 0) - RADIUS - 3)
-        if (y === null) return null
-        placed.push({ x, y })
+      {marks.map(({ number, severity, edges, x, y }, i) => {
         const tone =
           chosenNote === number
             ? 'stroke-select fill-select'
@@ -56,6 +48,28 @@ export function StripBalloons({ strip, scale }: { strip: Strip; scale: StripScal
       })}
     </g>
   )
+}
+
+interface Mark {
+  readonly number: number
+  readonly severity: MarginNote['severity']
+  readonly edges: readonly EdgeRef[]
+  readonly x: number
+  readonly y: number
+}
+
+function placeMarks(notes: readonly MarginNote[], strip: Strip, scale: StripScale): Mark[] {
+  const marks: Mark[] = []
+  for (const { number, severity, places } of notes) {
+    for (const { loop, vertex, edge, edges } of places) {
+      const s = loop === strip.loop && edges.length <= 2 ? placeOf(strip, vertex, edge) : null
+      if (s === null) continue
+      const x = Math.max(RADIUS + 1, Math.min(scale.width - RADIUS - 1, scale.x(s)))
+      const y = freeHeight(marks, x, scale.y(tiltAt(strip.line, s) ?? 0) - RADIUS - 3)
+      if (y !== null) marks.push({ number, severity, edges, x, y })
+    }
+  }
+  return marks
 }
 
 function placeOf(strip: Strip, vertex: number | null, edge: number | null): number | null {

@@ -1,6 +1,6 @@
-import { useEffect, useMemo, useRef, type KeyboardEvent, type MouseEvent } from 'react'
-import { edgeKey, edgeName } from '../../../../shared/body/names.ts'
-import { tiltColour } from '../../../theme/tilt-colour.ts'
+import { memo, useCallback, useEffect, useMemo, useRef, type KeyboardEvent, type MouseEvent } from 'react'
+import { edgeKey, edgeName, parseEdgeKey } from '../../../../shared/body/names.ts'
+import { tiltColour, type Theme } from '../../../theme/tilt-colour.ts'
 import { labelled, type DrawnCell } from '../model/strip.ts'
 import { useActs, useBench, useContent } from '../model/store.ts'
 import { facetsOf, type Facets } from '../model/walls.ts'
@@ -48,6 +48,14 @@ export function StripWalls({ strip, cells, scale }: StripWallsProps) {
     moveKeys(event, { edges, at, back: 'ArrowLeft', forth: 'ArrowRight', acts })
   }
 
+  const pick = useCallback(
+    (key: string, event: MouseEvent) => {
+      const how = event.shiftKey ? 'range' : event.ctrlKey || event.metaKey ? 'toggle' : 'replace'
+      acts.select(parseEdgeKey(key), how)
+    },
+    [acts],
+  )
+
   return (
     <g ref={list} role="listbox" aria-multiselectable="true" aria-label="Walls of the loop" onKeyDown={keyed}>
       {cells.map((cell) => {
@@ -62,18 +70,13 @@ export function StripWalls({ strip, cells, scale }: StripWallsProps) {
             width={scale.x(cell.to) - scale.x(cell.from)}
             facets={facets}
             thickness={content.plate.thickness}
-            colourOf={(tilt) => tiltColour(tilt, theme)}
+            theme={theme}
             name={names.has(edge) ? edgeName({ loop, edge }) : null}
             label={`${edgeName({ loop, edge })}, ${wallWords(own, unit)}`}
             edge={edgeKey({ loop, edge })}
             selected={cell.edges.some((each) => selected.has(edgeKey({ loop, edge: each })))}
             tabbable={here}
-            onPick={(event) =>
-              acts.select(
-                { loop, edge },
-                event.shiftKey ? 'range' : event.ctrlKey || event.metaKey ? 'toggle' : 'replace',
-              )
-            }
+            onPick={pick}
           />
         )
       })}
@@ -92,17 +95,18 @@ interface CellProps {
   readonly width: number
   readonly facets: Facets
   readonly thickness: number
-  readonly colourOf: (tilt: number) => string
+  readonly theme: Theme
   readonly name: string | null
   readonly label: string
   readonly edge: string
   readonly selected: boolean
   readonly tabbable: boolean
-  readonly onPick: (event: MouseEvent) => void
+  readonly onPick: (edge: string, event: MouseEvent) => void
 }
 
-function Cell(props: CellProps) {
-  const { x, width, facets, thickness, colourOf, name, selected, tabbable } = props
+/** Kept as it is while its own numbers stay: a loop may have a thousand. */
+const Cell = memo(function Cell(props: CellProps) {
+  const { x, width, facets, thickness, theme, name, selected, tabbable } = props
   const depth = (mm: number) => WALLS.top + (mm / thickness) * (WALLS.bottom - WALLS.top)
   const bands = facets.map(({ depth: end, tilt }, i) => ({
     top: depth(facets[i - 1]?.depth ?? 0),
@@ -116,7 +120,7 @@ function Cell(props: CellProps) {
       aria-label={props.label}
       data-edge={props.edge}
       tabIndex={tabbable ? 0 : -1}
-      onClick={props.onPick}
+      onClick={(event) => props.onPick(props.edge, event)}
       className="group cursor-pointer outline-none"
     >
       {bands.map(({ top, bottom, tilt }) => (
@@ -126,7 +130,7 @@ function Cell(props: CellProps) {
           y={top}
           width={width}
           height={Math.max(0, bottom - top)}
-          fill={colourOf(tilt)}
+          fill={tiltColour(tilt, theme)}
         />
       ))}
       {width >= LEAST_STROKED && bands.map((band) => <Lean key={band.top} x={x} width={width} {...band} />)}
@@ -165,7 +169,7 @@ function Cell(props: CellProps) {
       )}
     </g>
   )
-}
+})
 
 /** Strokes that lean as the facet does, so that a print without colour tells the same. */
 function Lean({
