@@ -48,6 +48,7 @@ export function cureCorner(corner: CornerWalls, limit: number, headLimit: number
       edges: chosen.map(({ loop, edge }) => ({ loop, edge })),
       facet: trial.facet,
       tilt: trial.tilt,
+      most: trial.most,
     },
   }
 }

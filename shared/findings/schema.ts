@@ -33,7 +33,8 @@ export const cureSchema = z.strictObject({
     .strictObject({
       edges: z.array(z.strictObject({ loop: z.int(), edge: z.int() })),
       facet: z.int().describe('index of the facet, from the top'),
-      tilt: z.number().describe('degrees from vertical, positive outward'),
+      tilt: z.number().describe('degrees from vertical, positive outward; rounded to the safe side'),
+      most: z.number().optional().describe('the largest tilt allowed there, unrounded'),
     })
     .optional(),
   /** The stand-off to set instead, mm. */

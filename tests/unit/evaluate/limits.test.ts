@@ -30,6 +30,7 @@ describe('two equal walls at a square corner', () => {
           ],
           facet: 0,
           tilt: 50.7,
+          most: expect.closeTo(50.7685, 4) as number,
         },
       },
     })
