@@ -2,9 +2,12 @@ import { existsSync } from 'node:fs'
 import { createServer, type Server } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import path from 'node:path'
+import { setTimeout as wait } from 'node:timers/promises'
 import { fileURLToPath } from 'node:url'
+import type { DataSource } from 'typeorm'
 import { type Config, ConfigError, readConfig } from './config.ts'
 import { createDataSource, openDatabase } from './db/data-source.ts'
+import { isDatabaseAway } from './db/failures.ts'
 import { keepHouse } from './db/housekeeping.ts'
 import { createFirstAdmin, refuseDemoAccounts } from './features/people/first-people.ts'
 import { createApp } from './http/app.ts'
@@ -14,12 +17,16 @@ import { createServices } from './start-services.ts'
 /** How long requests in work may take to finish once the server has been told to stop, ms. */
 const STOP_PATIENCE = 15_000
 
+/** A database that does not answer is tried for a minute, every second. */
+const OPENING_TRIES = 60
+const OPENING_WAIT = 1_000
+
 async function main(): Promise<void> {
   const config = readConfig(process.env)
   const log = createLog(config.logLevel)
   const root = projectRoot()
   const dataSource = createDataSource(config.databaseUrl, config.databasePool)
-  await openDatabase(dataSource)
+  await openPatiently(dataSource, log)
   const services = createServices(config, log, dataSource, root)
   if (config.demo) {
     const { seedDemo } = await import('./db/seed.ts')
@@ -44,6 +51,20 @@ async function main(): Promise<void> {
     await close(server)
     await dataSource.destroy()
   })
+}
+
+/** The database may still be starting, after a power cut for example. */
+async function openPatiently(dataSource: DataSource, log: Logger): Promise<void> {
+  for (let attempt = 1; ; attempt += 1) {
+    try {
+      await openDatabase(dataSource)
+      return
+    } catch (error) {
+      if (attempt === OPENING_TRIES || !isDatabaseAway(error)) throw error
+      log.warn({ attempt }, 'waiting for the database')
+      await wait(OPENING_WAIT)
+    }
+  }
 }
 
 /** The nearest folder above with a package.json: sources and build lie at different depths below it. */

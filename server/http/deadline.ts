@@ -10,3 +10,20 @@ export async function within<T>(ms: number, promise: Promise<T>, late: () => Err
     clearTimeout(timer)
   }
 }
+
+/** Whether the promise is settled, either way, before `ms` have passed. */
+export async function settlesWithin(ms: number, promise: Promise<unknown>): Promise<boolean> {
+  let timer: NodeJS.Timeout | undefined
+  const late = new Promise<false>((resolve) => {
+    timer = setTimeout(() => resolve(false), ms)
+  })
+  const settled = promise.then(
+    () => true,
+    () => true,
+  )
+  try {
+    return await Promise.race([settled, late])
+  } finally {
+    clearTimeout(timer)
+  }
+}

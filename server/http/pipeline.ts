@@ -7,7 +7,7 @@ import type { CurrentUser } from '../../shared/api/people.ts'
 import type { Services } from '../services.ts'
 import { writeOnce } from './act.ts'
 import type { Handlers, SessionControl } from './call.ts'
-import { within } from './deadline.ts'
+import { settlesWithin, within } from './deadline.ts'
 import { type Download, sendDownload } from './download.ts'
 import { idempotentRequest, keptAnswer, type IdempotentRequest } from './idempotency.ts'
 import { readIfMatch, readInputs, receiveBody } from './read-request.ts'
@@ -15,22 +15,13 @@ import { databaseAway, Refusal } from './refusal.ts'
 import { sessionControl } from './session-control.ts'
 import { TokenBuckets } from './token-buckets.ts'
 
-/** A handler that waits for the database answers within this, ms. */
-const HANDLER_DEADLINE = 4_800
-/** Routes that read drawings or evaluate bodies have deadlines of their own inside; this is on top. */
-const LONG_ROUTES: ReadonlySet<RouteName> = new Set([
-  'uploadDrawing',
-  'readDrawing',
-  'createPart',
-  'createSetup',
-  'saveSetup',
-  'submitSetup',
-  'approveSetup',
-  'revisionEvaluation',
-  'revisionContours',
-  'revisionEdges',
-  'evaluate',
-])
+/**
+ * A handler may take long for good reasons (a large drawing, many sign-ins at once). When it has not answered
+ * after the first of these, the database is asked for a sign of life within the second; so a database that
+ * hangs is reported within five seconds. ms.
+ */
+const PATIENCE = 3_500
+const SIGN_OF_LIFE = 1_300
 
 export const routeNames = Object.keys(routes) as RouteName[]
 
@@ -133,11 +124,14 @@ async function answeredBefore(
   return visitor && repeatable ? keptAnswer(dataSource.manager, visitor, repeatable) : null
 }
 
-async function handle(handlers: Handlers, name: RouteName, call: unknown): Promise<unknown> {
+async function handle(handlers: Handlers, name: RouteName, call: { services: Services }): Promise<unknown> {
   // The table ties each name to its schemas and its handler; the loop over names cannot show that to the compiler.
   const handler = handlers[name] as (call: unknown) => Promise<unknown>
   const work = handler(call)
-  return LONG_ROUTES.has(name) ? work : within(HANDLER_DEADLINE, work, databaseAway)
+  while (!(await settlesWithin(PATIENCE, work))) {
+    await within(SIGN_OF_LIFE, call.services.dataSource.query('SELECT 1'), databaseAway)
+  }
+  return work
 }
 
 function present({ config }: Services, route: Route, res: Response, answer: unknown): void {

@@ -2,7 +2,13 @@ import { createRequire } from 'node:module'
 import { pathToFileURL } from 'node:url'
 import { Worker } from 'node:worker_threads'
 
-/** What a worker posts back: one message, then it ends. */
+/** What a worker posts first, once it is loaded and its work begins: from then on the deadline runs. */
+export const STARTED = 'started'
+
+/** How long a thread may take to load its modules on a busy machine, ms. */
+const LOADING_PATIENCE = 60_000
+
+/** What a worker posts last; then it ends. */
 export type WorkerAnswer<T, F> = { readonly value: T } | { readonly failure: F }
 
 export interface Bounds {
@@ -14,7 +20,8 @@ export interface Bounds {
 export type WorkerOutcome<T, F> = WorkerAnswer<T, F> | { readonly broken: 'late' | 'out-of-memory' }
 
 /**
- * Runs one job in a thread of its own, which is ended whatever it is doing once the deadline has passed.
+ * Runs one job in a thread of its own, which is ended whatever it is doing once the deadline has passed. The
+ * deadline is for the work, not for loading the thread's modules.
  * A crash of the thread rejects.
  */
 export async function runInWorker<T, F>(
@@ -29,8 +36,16 @@ export async function runInWorker<T, F>(
   let timer: NodeJS.Timeout | undefined
   try {
     return await new Promise((resolve, reject) => {
-      timer = setTimeout(() => resolve({ broken: 'late' }), deadline)
-      worker.once('message', resolve)
+      const late = () => resolve({ broken: 'late' })
+      timer = setTimeout(late, LOADING_PATIENCE)
+      worker.on('message', (message: WorkerAnswer<T, F> | typeof STARTED) => {
+        if (message !== STARTED) {
+          resolve(message)
+          return
+        }
+        clearTimeout(timer)
+        timer = setTimeout(late, deadline)
+      })
       worker.once('error', (error: Error & { code?: string }) => {
         if (error.code === 'ERR_WORKER_OUT_OF_MEMORY') resolve({ broken: 'out-of-memory' })
         else reject(error)

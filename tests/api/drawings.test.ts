@@ -33,6 +33,7 @@ interface Read {
 
 const upload = (bytes: Buffer | string, name = 'plate.dxf', agent = programmer) =>
   agent.post('/api/drawings').attach('file', Buffer.from(bytes), name)
+const plateLine = (i: number) => `0\nLINE\n8\n0\n10\n${i}\n20\n0\n11\n${i + 1}\n21\n${i % 7}\n`
 const stored = () => app.services.dataSource.getRepository(DrawingRow).count()
 
 describe('a drawing', () => {
@@ -137,21 +138,18 @@ describe('what strangers send', () => {
     ],
   ]
 
-  it.each(hostile)(
-    '%s is refused by name within 2 s, keeps nothing, and the server lives',
-    async (_, bytes, code) => {
-      const before = await stored()
-      const started = performance.now()
-      const { status, body } = await upload(bytes, 'x.dxf')
-      // Room for a machine busy with other suites; reading itself is timed in the reader's own tests.
-      expect(performance.now() - started).toBeLessThan(8_000)
-      expect(status).toBe(400)
-      expect(body.error.code).toMatch(code)
-      expect(body.error.message.length).toBeGreaterThan(20)
-      expect(await stored()).toBe(before)
-      await expectStatus(200, app.anyone().get('/readyz'))
-    },
-  )
+  it.each(hostile)('%s is refused by name, keeps nothing, and the server lives', async (_, bytes, code) => {
+    const before = await stored()
+    const started = performance.now()
+    const { status, body } = await upload(bytes, 'x.dxf')
+    // A hang would last for ever; how fast the reading itself is stands in the reader's own tests.
+    expect(performance.now() - started).toBeLessThan(20_000)
+    expect(status).toBe(400)
+    expect(body.error.code).toMatch(code)
+    expect(body.error.message.length).toBeGreaterThan(20)
+    expect(await stored()).toBe(before)
+    await expectStatus(200, app.anyone().get('/readyz'))
+  })
 
   it('more than 25 MB is refused and nothing is kept', async () => {
     const before = await stored()
@@ -251,8 +249,10 @@ describe('a server under pressure', () => {
   })
 
   it('ends a reading that takes longer than its deadline', async () => {
-    const reader = new DrawingReader(1)
-    await expect(reader.read(Buffer.from(plateDxf()), {})).rejects.toMatchObject({ code: 'drawing-too-slow' })
+    const many = Array.from({ length: 40_000 }, (_, i) => plateLine(i)).join('')
+    const drawing = Buffer.from(`0\nSECTION\n2\nENTITIES\n${many}0\nENDSEC\n0\nEOF\n`)
+    const reader = new DrawingReader(5)
+    await expect(reader.read(drawing, {})).rejects.toMatchObject({ code: 'drawing-too-slow' })
   })
 
   it('works on two at once, lets some wait, and turns the rest away', async () => {

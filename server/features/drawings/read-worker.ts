@@ -2,6 +2,7 @@ import { parentPort, workerData } from 'node:worker_threads'
 import { DrawingError } from '../../../shared/drawing/errors.ts'
 import { readDrawing } from '../../../shared/drawing/read.ts'
 import type { ReadingOptions } from '../../../shared/drawing/schema.ts'
+import { STARTED } from '../../workers/run-in-worker.ts'
 import type { DrawingAnswer } from './reader.ts'
 
 /** Reads one drawing and ends. */
@@ -17,4 +18,5 @@ function answer(): DrawingAnswer {
   }
 }
 
+parentPort?.postMessage(STARTED)
 parentPort?.postMessage(answer())
