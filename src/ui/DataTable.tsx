@@ -58,7 +58,7 @@ export function DataTable<Row>({ caption, columns, query, keyOf, list, empty }: 
                     <td
                       role="cell"
                       key={column.key}
-                      className={`py-2 pr-6 align-middle max-sm:p-0 max-sm:text-left ${column.figures ? 'text-right' : ''} ${column.lead ? 'max-sm:w-full' : ''}`}
+                      className={`py-2 pr-6 align-middle max-sm:p-0 max-sm:text-left max-sm:max-w-full break-words ${column.figures ? 'text-right' : ''} ${column.lead ? 'max-sm:w-full' : ''}`}
                     >
                       {!column.lead && (
                         <span className="sm:hidden text-label uppercase text-muted mr-2" aria-hidden="true">

@@ -34,8 +34,8 @@ function Review({ setup }: { setup: Setup }) {
       />
       <PageBody>
         <div className="flex flex-wrap gap-2">
-          <ButtonLink to={`/setups/${setup.id}?revision=${revision.number}`}>Open on the bench</ButtonLink>
-          <ButtonLink to={`/setups/${setup.id}/sheet?revision=${revision.number}`}>Open the sheet</ButtonLink>
+          <ButtonLink to={`/setups/${setup.id}?rev=${revision.number}`}>Open on the bench</ButtonLink>
+          <ButtonLink to={`/setups/${setup.id}/sheet?rev=${revision.number}`}>Open the sheet</ButtonLink>
           <ButtonLink to={`/parts/${setup.partId}`}>The part</ButtonLink>
           <ButtonLink to="/approvals" look="quiet">
             All that waits

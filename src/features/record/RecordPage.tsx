@@ -66,7 +66,7 @@ function columnsFor(onlySubject: (id: string) => void): Column<AuditEntry>[] {
       cell: ({ subject }) => (
         <button
           type="button"
-          className="underline decoration-rule underline-offset-4 text-left cursor-pointer hover:text-select min-h-6"
+          className="underline decoration-rule underline-offset-4 text-left break-all cursor-pointer hover:text-select min-h-6"
           onClick={() => onlySubject(subject.id)}
           title="Show only this subject"
         >

@@ -39,7 +39,7 @@ export function SetupJoints({ setup }: { setup: SetupRow }) {
         {edges.map(({ edge, label, facets }) => (
           <li key={edgeKey(edge)}>
             <ButtonLink
-              to={`/setups/${setup.id}/joint/${edgeKey(edge)}?revision=${revision}`}
+              to={`/setups/${setup.id}/joint/${edgeKey(edge)}?rev=${revision}`}
               size="glove"
               className="w-full flex-col !items-start !gap-0 py-2 !text-left"
             >

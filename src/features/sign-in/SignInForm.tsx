@@ -22,6 +22,10 @@ export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) 
   const signIn = useMutation(signInMutation(useQueryClient()))
   const form = useForm({ resolver: zodResolver(signInBody), defaultValues: { email, password: '' } })
   const { errors } = form.formState
+  // Someone who signs in again goes on as who they were.
+  const accounts = (about.data?.demoAccounts ?? []).filter(
+    (account) => email === '' || account.email === email,
+  )
 
   const submit = form.handleSubmit((body) => {
     signIn.mutate(body, {
@@ -60,14 +64,14 @@ export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) 
       <Button type="submit" look="main" size="glove" busy={signIn.isPending && 'Signing in…'}>
         Sign in
       </Button>
-      {about.data?.demo === true && (
+      {accounts.length > 0 && (
         <fieldset className="border-t border-rule pt-3 flex flex-col gap-2">
           <legend className="text-label uppercase text-muted pr-2">Demo accounts</legend>
           <p className="text-small text-muted">
             This installation shows invented data. Press one to fill it in.
           </p>
           <div className="grid grid-cols-2 gap-2">
-            {about.data.demoAccounts.map((account) => (
+            {accounts.map((account) => (
               <Button
                 key={account.email}
                 onClick={() => {
