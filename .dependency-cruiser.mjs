@@ -16,7 +16,7 @@ const sharedArrows = {
 }
 
 /** Inside src, the rooms below the screens; screens (`features`) may use them all. */
-const rooms = ['theme', 'api', 'ui', 'section', 'viewer', 'evaluation']
+const rooms = ['theme', 'api', 'ui', 'section', 'viewer', 'evaluation', 'revision']
 
 export default {
   forbidden: [
