@@ -58,7 +58,8 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
 
   useLayoutEffect(() => {
     const labelNodes = nodesBy(root.current!, 'edge')
-    const balloonNodes = nodesBy(root.current!, 'balloon')
+    // One note may stand at many places, so its number does not tell its balloons apart: their order does.
+    const balloonNodes = root.current!.querySelectorAll<HTMLElement>('[data-balloon]')
     layer.setFixed({
       leaders: leaders.current,
       event: eventNode.current,
@@ -79,8 +80,8 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
       }),
     )
     layer.setBalloons(
-      balloons.flatMap(({ number, at }) => {
-        const element = balloonNodes.get(String(number))
+      balloons.flatMap(({ at }, i) => {
+        const element = balloonNodes[i]
         return element ? [{ element, at: [at.x, at.y, -at.depth] as const }] : []
       }),
     )
@@ -113,9 +114,9 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
           {text}
         </span>
       ))}
-      {balloons.map(({ number, tone, selected }) => (
+      {balloons.map(({ number, tone, selected }, i) => (
         <button
-          key={number}
+          key={`${number} ${i}`}
           type="button"
           data-balloon={number}
           // The list of findings holds the same buttons; a second row of stops would be in the way.
