@@ -8,6 +8,7 @@ import {
   dot,
   middle,
   norm,
+  scale,
   subtract,
   turnBetween,
   unit,
@@ -127,14 +128,17 @@ function isOneArc([first, second]: Segment[]): boolean {
 /** Share of the range stepped aside where the curve stands still (coincident control points). */
 const STEP_ASIDE = 1e-5
 
+/** A velocity below this share of the mean one beside it is taken for a standstill. */
+const STANDING_STILL = 1e-3
+
+/** Unit direction of travel at t, where the range may run backwards; `side` says on which side the curve goes on. */
 function directionAt(curve: Curve, t: number, side: 1 | -1): Point {
   const velocity = curve.velocity(t)
   const range = curve.end - curve.start
-  const aside = curve.point(t + side * STEP_ASIDE * range)
-  const step = subtract(aside, curve.point(t))
+  const step = subtract(curve.point(t + side * STEP_ASIDE * range), curve.point(t))
   const expected = norm(step) / (STEP_ASIDE * Math.abs(range))
-  if (norm(velocity) > expected * 1e-3) return unit(velocity)
-  return unit({ x: side * Math.sign(range) * step.x, y: side * Math.sign(range) * step.y })
+  if (norm(velocity) > STANDING_STILL * expected) return unit(scale(velocity, Math.sign(range)))
+  return unit(scale(step, side))
 }
 
 /** Ellipse through conjugate radii: centre + u·cos t + v·sin t. */

@@ -6,7 +6,6 @@ import os
 import sys
 
 import ezdxf
-from ezdxf import path as ezpath
 
 SAGITTA = 1e-5
 folder = sys.argv[1]
@@ -21,7 +20,24 @@ def outlines(entities):
             for insert in inserts:
                 yield from outlines(insert.virtual_entities())
         else:
-            yield [(p.x, p.y) for p in ezpath.make_path(entity).flattening(SAGITTA, segments=64)]
+            yield flattened(entity)
+
+
+def flattened(entity):
+    # A path of ezdxf holds cubic pieces only; every curve is flattened by itself instead.
+    if entity.dxftype() == "SPLINE":
+        points = list(entity.construction_tool().flattening(SAGITTA, segments=64))
+    elif entity.dxftype() in ("LWPOLYLINE", "POLYLINE"):
+        points = []
+        for piece in entity.virtual_entities():
+            part = [piece.dxf.start, piece.dxf.end] if piece.dxftype() == "LINE" else list(piece.flattening(SAGITTA))
+            # Arcs of a polyline come counter-clockwise, whichever way it runs.
+            if points and part[0].distance(points[-1]) > part[-1].distance(points[-1]):
+                part.reverse()
+            points += part
+    else:
+        points = list(entity.flattening(SAGITTA))
+    return [(p.x, p.y) for p in points]
 
 
 def measure(points):
@@ -56,17 +72,18 @@ def closed_spline(degree, weights=None):
     return draw
 
 
-def shape(block):
-    block.add_lwpolyline([(0, 0, 0.4), (30, 0, 0), (30, 20, -0.3), (0, 20, 0)], format="xyb", close=True)
+def shape(block, bulges):
+    if bulges:
+        block.add_lwpolyline([(30, 0, 0), (30, 20, -0.3), (0, 20, 0), (0, 0, 0.4)], format="xyb", close=True)
     block.add_circle((60, 10), 7)
     block.add_ellipse((0, 60), major_axis=(15, 8), ratio=0.55)
     spline = block.add_spline(dxfattribs={"degree": 3})
     spline.set_open_uniform([(x / 2 + 80, y / 2 + 40, 0) for x, y in CLOUD + CLOUD[:1]], degree=3)
 
 
-def inserted(**attributes):
+def inserted(bulges=True, **attributes):
     def draw(doc, msp):
-        shape(doc.blocks.new("SHAPE", base_point=(5, 3)))
+        shape(doc.blocks.new("SHAPE", base_point=(5, 3)), bulges)
         pair = doc.blocks.new("PAIR")
         pair.add_blockref("SHAPE", (0, 0))
         pair.add_blockref("SHAPE", (250, 40), dxfattribs={"rotation": 35, "xscale": -1})
@@ -81,10 +98,11 @@ save("ellipse.dxf", lambda _, msp: msp.add_ellipse((3, 4), major_axis=(50, 20), 
 save("ellipse-back.dxf", lambda _, msp: msp.add_ellipse((3, 4), (50, 20), 0.3, dxfattribs={"extrusion": (0, 0, -1)}))
 save("circle-back.dxf", lambda _, msp: msp.add_circle((30, 4), 9, dxfattribs={"extrusion": (0, 0, -1)}))
 save("plain.dxf", inserted())
-save("old.dxf", lambda _, msp: msp.add_polyline2d([(0, 0, 0.4), (30, 0, 0), (30, 20, -0.3)], format="xyb", close=True), "R12")
+save("old.dxf", lambda _, msp: msp.add_polyline2d([(30, 0, 0), (30, 20, -0.3), (0, 0, 0.4)], format="xyb", close=True), "R12")
 save("turned.dxf", inserted(rotation=77, xscale=1.5, yscale=1.5))
 save("mirrored.dxf", inserted(xscale=-2, yscale=2, rotation=10))
-save("stretched.dxf", inserted(xscale=1.7, yscale=0.6, rotation=-25))
+# Stretched, ezdxf breaks a bulged polyline into loose pieces.
+save("stretched.dxf", inserted(bulges=False, xscale=1.7, yscale=0.6, rotation=-25))
 save("rows.dxf", inserted(row_count=2, column_count=3, row_spacing=400, column_spacing=700, rotation=12))
 save("back.dxf", inserted(extrusion=(0, 0, -1), rotation=20))
 print(json.dumps(rows))

@@ -190,6 +190,34 @@ describe('blocks', () => {
     expect(notice(reading, 'ellipse-approximated')?.count).toBe(2)
   })
 
+  it('bulges either way, stretched: the area grows by the determinant', () => {
+    const blocks = [
+      block('A', [
+        polyline([
+          [30, 0],
+          [30, 20, -0.3],
+          [0, 20],
+          [0, 0, 0.4],
+        ]),
+      ]),
+    ]
+    const plain = areas(read({ blocks, entities: [insert('A', 0, 0)] }))[0] ?? 0
+    for (const [x, y] of [
+      [1.7, 0.6],
+      [-1.7, 0.6],
+      [3, -0.5],
+    ] as const) {
+      const reading = read(
+        { blocks, entities: [insert('A', 5, 5, [41, x], [42, y], [50, 25])] },
+        { arcTolerance: 0.001 },
+      )
+      expect(reading.loops).toHaveLength(1)
+      expect(areas(reading)[0]).toBeGreaterThan(plain * Math.abs(x * y) - 0.2)
+      expect(areas(reading)[0]).toBeLessThan(plain * Math.abs(x * y) + 0.2)
+      expect(reading.loops[0]?.vertices.length).toBeLessThan(100)
+    }
+  })
+
   it('entities on layer 0 take the layer of the insertion; a missing block is reported', () => {
     const inserted = groups([0, 'INSERT'], [8, 'CUT'], [2, 'A'], [10, 0], [20, 0])
     const reading = read({
