@@ -145,11 +145,11 @@ function EdgeRow({ edge, index, selected, tabbable }: EdgeRowProps) {
       <th
         role="gridcell"
         scope="row"
-        className={`px-2 font-medium border-l-4 ${selected ? 'border-l-select text-select' : 'border-l-transparent'}`}
+        className={`px-2 font-medium border-l-4 ${selected ? 'border-l-select font-bold' : 'border-l-transparent'}`}
       >
         {edgeName(edge)}
       </th>
-      <td className="px-2 max-sm:max-w-40 truncate" title={words}>
+      <td className="px-2 max-sm:max-w-40 max-[1199px]:max-w-72 truncate" title={words}>
         {words}
       </td>
       <td className="px-2 text-right">{length(known?.topLength)}</td>
