@@ -13,7 +13,7 @@ type Names = 'signIn' | 'whoAmI' | 'signOut' | 'ownSessions' | 'endSession' | 'c
 export const sessionHandlers: HandlersOf<Names> = {
   signIn: async ({ session, body, write }) => {
     const user = await session.signIn(body.email, body.password)
-    if (!user) throw new Refusal('wrong-sign-in', 'E-mail address or password is not right.')
+    if (!user) throw new Refusal('wrong-sign-in', 'Email address or password is not right.')
     await write((manager) =>
       appendToRecord(manager, user, { action: 'session.start', subject: subjectOf(user) }),
     )

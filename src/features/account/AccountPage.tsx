@@ -13,7 +13,7 @@ export default function AccountPage() {
         label="Account"
         cells={[
           { label: 'Role', value: me.role },
-          { label: 'E-mail', value: <span className="break-all">{me.email}</span> },
+          { label: 'Email', value: <span className="break-all">{me.email}</span> },
         ]}
       />
       <PageBody narrow>

@@ -31,12 +31,12 @@ export function AddPersonDialog({ onClose }: { onClose: () => void }) {
           )}
         </Field>
         <Field
-          label="E-mail"
+          label="Email"
           hint="They sign in with it"
           error={
             taken
               ? create.error?.message
-              : errors.email && 'Type an e-mail address, for instance name@shop.example.'
+              : errors.email && 'Type an email address, for instance name@shop.example.'
           }
         >
           {(control) => (

@@ -29,7 +29,7 @@ export default function PeoplePage() {
       <PageHead title="People" cells={[{ label: 'Count', value: query.data?.total ?? '–' }]} actions={add} />
       <PageBody>
         <div className="flex flex-wrap items-end gap-4">
-          <SearchField label="Name or e-mail" value={list.values.q ?? ''} onChange={(q) => list.set({ q })} />
+          <SearchField label="Name or email" value={list.values.q ?? ''} onChange={(q) => list.set({ q })} />
           <Choice
             legend="Role"
             showLegend
@@ -66,7 +66,7 @@ function columnsFor(edit: (user: User) => void): Column<User>[] {
         <span className={disabled ? 'line-through text-muted' : 'font-bold'}>{name}</span>
       ),
     },
-    { key: 'email', head: 'E-mail', cell: ({ email }) => <span className="break-all">{email}</span> },
+    { key: 'email', head: 'Email', cell: ({ email }) => <span className="break-all">{email}</span> },
     { key: 'role', head: 'Role', cell: ({ role }) => role },
     { key: 'state', head: 'State', cell: ({ disabled }) => (disabled ? 'disabled' : 'may sign in') },
     {

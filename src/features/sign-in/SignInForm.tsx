@@ -37,7 +37,7 @@ export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) 
   return (
     <form noValidate onSubmit={(event) => void submit(event)} className="flex flex-col gap-4">
       {signIn.isError && <SignInProblem error={signIn.error} />}
-      <Field label="E-mail" error={errors.email && 'Type the e-mail address of your account.'}>
+      <Field label="Email" error={errors.email && 'Type the email address of your account.'}>
         {(control) => (
           <input
             {...control}
@@ -93,7 +93,7 @@ function SignInProblem({ error }: { error: unknown }) {
   if (isCode(error, 'wrong-sign-in'))
     return (
       <Notice tone="breach" title="Not signed in">
-        E-mail and password do not belong together. Check both and try again; an administrator can give you a
+        Email and password do not belong together. Check both and try again; an administrator can give you a
         new password.
       </Notice>
     )
