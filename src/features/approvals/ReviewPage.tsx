@@ -1,12 +1,14 @@
 import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
 import type { Setup } from '../../../shared/api/setups.ts'
+import { cautions } from '../../../shared/files/cautions.ts'
 import { formatAngle, formatLength } from '../../../shared/units/format.ts'
 import { setupQuery } from '../../api/setups.ts'
 import { Page, PageBody, PageHead, Section, type Cell } from '../../app/Page.tsx'
 import { QueryGate } from '../../app/QueryGate.tsx'
 import { useUnit } from '../../app/preferences.ts'
 import { ButtonLink } from '../../ui/Button.tsx'
+import { Caution } from '../../ui/Caution.tsx'
 import { Facts } from '../../ui/Facts.tsx'
 import { Notice } from '../../ui/Notice.tsx'
 import { ProfileOutline } from '../../ui/ProfileOutline.tsx'
@@ -52,6 +54,13 @@ function Review({ setup }: { setup: Setup }) {
             <Section title="Facts">
               <SetupFacts setup={setup} />
             </Section>
+            <Caution>
+              <ul className="flex flex-col gap-1">
+                {cautions.map((text) => (
+                  <li key={text}>{text}</li>
+                ))}
+              </ul>
+            </Caution>
           </div>
           <div className="min-w-0">
             {setup.state === 'submitted' ? (
