@@ -80,7 +80,6 @@ function NoEdge() {
 
 /** Preps with unlike chains of facets have no common section: pick one kind, or give all one form below. */
 function Unlike({ kinds }: { kinds: readonly (readonly EdgeRef[])[] }) {
-  const { unit } = useScene()
   const content = useContent()
   const acts = useActs()
   return (
@@ -90,11 +89,15 @@ function Unlike({ kinds }: { kinds: readonly (readonly EdgeRef[])[] }) {
         {kinds.map((edges) => (
           <li key={edges[0]!.loop + '-' + edges[0]!.edge}>
             <Button look="quiet" onClick={() => acts.selectMany(edges)}>
-              only the {edges.length} like {wallWords(facetsOf(content, edges[0]!), unit)}
+              only the {edges.length} cut in {passWords(facetsOf(content, edges[0]!).length)}
             </Button>
           </li>
         ))}
       </ul>
     </div>
   )
+}
+
+function passWords(passes: number): string {
+  return passes === 1 ? '1 pass' : `${passes} passes`
 }

@@ -63,7 +63,7 @@ export function EdgeTable() {
     <div
       ref={box}
       onScroll={onScroll}
-      className="overflow-auto border border-rule bg-panel"
+      className="relative overflow-auto border border-rule bg-panel"
       style={{ maxHeight: height }}
     >
       <table
