@@ -7,3 +7,9 @@ export function formatSize(bounds: Bounds, unit: DisplayUnit): string {
   const width = formatLength(bounds.maxX - bounds.minX, unit, { bare: true })
   return `${width} × ${formatLength(bounds.maxY - bounds.minY, unit)}`
 }
+
+/** `outline, 2 holes`: the loops of a part. */
+export function loopsInWords(holes: number): string {
+  if (holes === 0) return 'outline only'
+  return `outline, ${holes} ${holes === 1 ? 'hole' : 'holes'}`
+}

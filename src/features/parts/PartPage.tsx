@@ -10,7 +10,7 @@ import { useUnit } from '../../app/preferences.ts'
 import { formatArea } from '../../../shared/units/format.ts'
 import { Button, ButtonAnchor, ButtonLink } from '../../ui/Button.tsx'
 import { Facts } from '../../ui/Facts.tsx'
-import { formatSize } from '../../ui/measures.ts'
+import { formatSize, loopsInWords } from '../../ui/measures.ts'
 import { formatInstant } from '../../ui/when.ts'
 import { DimensionedOutline } from './DimensionedOutline.tsx'
 import { NewSetupDialog } from './NewSetupDialog.tsx'
@@ -41,10 +41,7 @@ function PartSheet({ part }: { part: Part }) {
         label="Part"
         cells={[
           { label: 'Size', value: formatSize(part.bounds, unit) },
-          {
-            label: 'Loops',
-            value: part.loops.length === 1 ? 'outline only' : `outline, ${part.loops.length - 1} holes`,
-          },
+          { label: 'Loops', value: loopsInWords(part.loops.length - 1) },
         ]}
         actions={
           <>

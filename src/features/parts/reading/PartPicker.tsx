@@ -1,6 +1,6 @@
 import type { Reading } from '../../../../shared/drawing/schema.ts'
 import { useUnit } from '../../../app/preferences.ts'
-import { formatSize } from '../../../ui/measures.ts'
+import { formatSize, loopsInWords } from '../../../ui/measures.ts'
 
 interface PartPickerProps {
   readonly reading: Reading
@@ -29,8 +29,7 @@ export function PartPicker({ reading, pick, onPick }: PartPickerProps) {
             className="accent-select"
           />
           <span>
-            Part {index + 1}: {formatSize(part.bounds, unit)}
-            {part.holes.length > 0 && `, ${part.holes.length} ${part.holes.length === 1 ? 'hole' : 'holes'}`}
+            Part {index + 1}: {formatSize(part.bounds, unit)}, {loopsInWords(part.holes.length)}
           </span>
         </label>
       ))}

@@ -5,7 +5,7 @@ import { readingQuery, type DrawingRead } from '../../../api/drawings.ts'
 import { Page, PageBody, PageHead, Section } from '../../../app/Page.tsx'
 import { useUnit } from '../../../app/preferences.ts'
 import { Button, ButtonLink } from '../../../ui/Button.tsx'
-import { formatSize } from '../../../ui/measures.ts'
+import { formatSize, loopsInWords } from '../../../ui/measures.ts'
 import { ErrorNotice, Notice } from '../../../ui/Notice.tsx'
 import { EntityTable } from './EntityTable.tsx'
 import { NewPartForm } from './NewPartForm.tsx'
@@ -85,7 +85,7 @@ function Report({ read: { drawing, reading }, options, change, busy, error }: Re
           { label: 'Size', value: reading.bounds === null ? '–' : formatSize(reading.bounds, unit) },
           {
             label: 'Parts found',
-            value: reading.parts.length,
+            value: partsInWords(reading, pick),
             tone: reading.parts.length > 0 ? 'plain' : 'breach',
           },
           { label: 'Notes', value: noticesInWords(reading), tone: hasErrors(reading) ? 'breach' : 'plain' },
@@ -164,4 +164,11 @@ function useSettled<T>(value: T): T {
     return () => clearTimeout(timer)
   }, [value])
   return settled
+}
+
+function partsInWords({ parts }: Reading, pick: number): string {
+  const part = parts[pick]
+  if (part === undefined) return 'none'
+  const loops = loopsInWords(part.holes.length)
+  return parts.length === 1 ? `1 · ${loops}` : `${parts.length} · chosen: ${loops}`
 }
