@@ -61,7 +61,7 @@ export function ViewStrip({ context, hasSelection, folded, compact }: ViewStripP
           {(stop) => groups(stop, true)}
         </Toolbar>
       )}
-      <Toolbar label="view" first={FIRST[0]!.name} className="flex border-t border-rule bg-panel">
+      <Toolbar label="view" first={FIRST[0]!.name} className="flex flex-wrap border-t border-rule bg-panel">
         {(stop) => (
           <>
             {cells(FIRST, stop, true)}
