@@ -1,7 +1,8 @@
 import * as z from 'zod'
 import { errorSchema, type ErrorCode } from '../../shared/api/errors.ts'
 import { policy } from '../../shared/api/policy.ts'
-import { routes, type Route, type RouteName } from '../../shared/api/routes.ts'
+import type { Route } from '../../shared/api/route.ts'
+import { routes, type RouteName } from '../../shared/api/routes.ts'
 import { SESSION_COOKIE } from './session-control.ts'
 
 /** OpenAPI 3.1, made of the same table and schemas that validate. */

@@ -1,7 +1,8 @@
 import express, { type Request, type RequestHandler, type Response } from 'express'
 import multer from 'multer'
 import * as z from 'zod'
-import type { Route, RouteName } from '../../shared/api/routes.ts'
+import type { Route } from '../../shared/api/route.ts'
+import type { RouteName } from '../../shared/api/routes.ts'
 import { Refusal } from './refusal.ts'
 
 const MEGABYTE = 1024 * 1024

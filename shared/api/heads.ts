@@ -1,6 +1,7 @@
 import * as z from 'zod'
 import { jetSchema } from '../evaluate/schema.ts'
-import { instant, pageOf, pageQuery, personSchema, version } from './common.ts'
+import { idParams, instant, pageOf, pageQuery, personSchema, version } from './common.ts'
+import type { Route } from './route.ts'
 
 const name = z.string().trim().min(1).max(120)
 const limit = z.number().gt(0).max(90)
@@ -40,3 +41,51 @@ export const workingLimitBody = z.strictObject({
 })
 
 export type Head = z.infer<typeof headSchema>
+
+/** Heads and their limits. */
+export const headRoutes = {
+  listHeads: {
+    method: 'get',
+    path: '/api/heads',
+    summary: 'Heads',
+    query: headsQuery,
+    status: 200,
+    answer: headsPage,
+  },
+  getHead: {
+    method: 'get',
+    path: '/api/heads/:id',
+    summary: 'A head',
+    params: idParams,
+    status: 200,
+    answer: headSchema,
+  },
+  createHead: {
+    method: 'post',
+    path: '/api/heads',
+    summary: 'Add a head',
+    body: createHeadBody,
+    status: 201,
+    answer: headSchema,
+  },
+  updateHead: {
+    method: 'patch',
+    path: '/api/heads/:id',
+    summary: 'Change a head',
+    params: idParams,
+    body: updateHeadBody,
+    ifMatch: true,
+    status: 200,
+    answer: headSchema,
+  },
+  setWorkingLimit: {
+    method: 'put',
+    path: '/api/heads/:id/working-limit',
+    summary: "Approve a head's working limit",
+    params: idParams,
+    body: workingLimitBody,
+    ifMatch: true,
+    status: 200,
+    answer: headSchema,
+  },
+} as const satisfies Record<string, Route>

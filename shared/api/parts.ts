@@ -1,7 +1,8 @@
 import * as z from 'zod'
 import { readingOptionsSchema, readingSchema } from '../drawing/schema.ts'
 import { boundsSchema, vertexLoopsSchema } from '../geometry/schema.ts'
-import { instant, pageOf, pageQuery, personSchema, version } from './common.ts'
+import { idParams, instant, pageOf, pageQuery, personSchema, version } from './common.ts'
+import type { Route } from './route.ts'
 
 export const drawingSchema = z.strictObject({
   id: z.uuid(),
@@ -56,3 +57,66 @@ export const updatePartBody = z.strictObject({ number: number.optional(), name: 
 export type Drawing = z.infer<typeof drawingSchema>
 export type Part = z.infer<typeof partSchema>
 export type PartRow = z.infer<typeof partRowSchema>
+
+/** Drawings and parts. */
+export const partRoutes = {
+  uploadDrawing: {
+    method: 'post',
+    path: '/api/drawings',
+    summary: 'Upload a DXF and read it',
+    upload: 'file',
+    status: 201,
+    answer: drawingReadSchema,
+  },
+  readDrawing: {
+    method: 'post',
+    path: '/api/drawings/:id/reading',
+    summary: 'Read a stored drawing again with other options',
+    params: idParams,
+    body: readDrawingBody,
+    status: 200,
+    answer: drawingReadSchema,
+  },
+  drawingFile: {
+    method: 'get',
+    path: '/api/drawings/:id/file',
+    summary: 'The drawing as uploaded',
+    params: idParams,
+    status: 200,
+    answer: 'application/dxf',
+  },
+  listParts: {
+    method: 'get',
+    path: '/api/parts',
+    summary: 'Parts',
+    query: partsQuery,
+    status: 200,
+    answer: partsPage,
+  },
+  createPart: {
+    method: 'post',
+    path: '/api/parts',
+    summary: 'Make a part of a drawing',
+    body: createPartBody,
+    status: 201,
+    answer: partSchema,
+  },
+  getPart: {
+    method: 'get',
+    path: '/api/parts/:id',
+    summary: 'A part',
+    params: idParams,
+    status: 200,
+    answer: partSchema,
+  },
+  updatePart: {
+    method: 'patch',
+    path: '/api/parts/:id',
+    summary: 'Rename a part',
+    params: idParams,
+    body: updatePartBody,
+    ifMatch: true,
+    status: 200,
+    answer: partSchema,
+  },
+} as const satisfies Record<string, Route>

@@ -1,5 +1,6 @@
 import * as z from 'zod'
-import { instant, pageOf, pageQuery, roleSchema, version } from './common.ts'
+import { idParams, instant, pageOf, pageQuery, roleSchema, version } from './common.ts'
+import type { Route } from './route.ts'
 
 export const passwordSchema = z.string().min(8).max(256)
 export const emailSchema = z.email().max(254)
@@ -60,3 +61,70 @@ export const updateUserBody = z.strictObject({
 export type User = z.infer<typeof userSchema>
 export type CurrentUser = z.infer<typeof currentUserSchema>
 export type OwnSession = z.infer<typeof ownSessionSchema>
+
+/** Sessions and people. */
+export const peopleRoutes = {
+  signIn: {
+    method: 'post',
+    path: '/api/session',
+    summary: 'Sign in',
+    body: signInBody,
+    status: 200,
+    answer: sessionSchema,
+  },
+  whoAmI: {
+    method: 'get',
+    path: '/api/session',
+    summary: 'Who is signed in',
+    status: 200,
+    answer: sessionSchema,
+  },
+  signOut: { method: 'delete', path: '/api/session', summary: 'Sign out', status: 204 },
+  ownSessions: {
+    method: 'get',
+    path: '/api/sessions',
+    summary: 'Own sessions',
+    status: 200,
+    answer: ownSessionsSchema,
+  },
+  endSession: {
+    method: 'delete',
+    path: '/api/sessions/:id',
+    summary: 'End one of the own sessions',
+    params: sessionIdParams,
+    status: 204,
+  },
+  changePassword: {
+    method: 'post',
+    path: '/api/session/password',
+    summary: 'Change the own password',
+    body: changePasswordBody,
+    status: 204,
+  },
+  listUsers: {
+    method: 'get',
+    path: '/api/users',
+    summary: 'People',
+    query: usersQuery,
+    status: 200,
+    answer: usersPage,
+  },
+  createUser: {
+    method: 'post',
+    path: '/api/users',
+    summary: 'Add a person',
+    body: createUserBody,
+    status: 201,
+    answer: userSchema,
+  },
+  updateUser: {
+    method: 'patch',
+    path: '/api/users/:id',
+    summary: 'Change a person',
+    params: idParams,
+    body: updateUserBody,
+    ifMatch: true,
+    status: 200,
+    answer: userSchema,
+  },
+} as const satisfies Record<string, Route>

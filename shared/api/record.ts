@@ -1,5 +1,6 @@
 import * as z from 'zod'
 import { instant, pageOf, pageQuery, personSchema } from './common.ts'
+import type { Route } from './route.ts'
 
 /** The audit record: append-only, each entry bound to the one before by its hash. */
 export const auditEntrySchema = z.strictObject({
@@ -20,3 +21,15 @@ export const auditQuery = z.strictObject({
 export const auditPage = pageOf(auditEntrySchema)
 
 export type AuditEntry = z.infer<typeof auditEntrySchema>
+
+/** The record. */
+export const recordRoutes = {
+  listAudit: {
+    method: 'get',
+    path: '/api/audit',
+    summary: 'The record',
+    query: auditQuery,
+    status: 200,
+    answer: auditPage,
+  },
+} as const satisfies Record<string, Route>

@@ -1,7 +1,8 @@
 import * as z from 'zod'
 import { evaluationSchema } from '../evaluate/schema.ts'
 import { setupContentSchema } from '../setup/schema.ts'
-import { instant, pageOf, pageQuery, personSchema, version } from './common.ts'
+import { idParams, instant, pageOf, pageQuery, personSchema, version } from './common.ts'
+import type { Route } from './route.ts'
 
 /**
  * A set-up belongs to a part; each save writes an immutable revision. The state is that of the newest
@@ -119,3 +120,119 @@ export type Revision = z.infer<typeof revisionSchema>
 export type RevisionRow = z.infer<typeof revisionRowSchema>
 export type SaveSetup = z.infer<typeof saveSetupBody>
 export type Decision = z.infer<typeof decisionSchema>
+
+/** Set-ups, revisions, decisions, downloads. */
+export const setupRoutes = {
+  listSetups: {
+    method: 'get',
+    path: '/api/setups',
+    summary: 'Set-ups',
+    query: setupsQuery,
+    status: 200,
+    answer: setupsPage,
+  },
+  createSetup: {
+    method: 'post',
+    path: '/api/setups',
+    summary: 'Start a set-up',
+    body: createSetupBody,
+    status: 201,
+    answer: setupSchema,
+  },
+  getSetup: {
+    method: 'get',
+    path: '/api/setups/:id',
+    summary: 'A set-up with its newest revision',
+    params: idParams,
+    status: 200,
+    answer: setupSchema,
+  },
+  saveSetup: {
+    method: 'put',
+    path: '/api/setups/:id',
+    summary: 'Save a new revision',
+    params: idParams,
+    body: saveSetupBody,
+    ifMatch: true,
+    status: 200,
+    answer: setupSchema,
+  },
+  submitSetup: {
+    method: 'post',
+    path: '/api/setups/:id/submit',
+    summary: 'Ask for approval',
+    params: idParams,
+    body: submitBody,
+    ifMatch: true,
+    status: 200,
+    answer: setupSchema,
+  },
+  approveSetup: {
+    method: 'post',
+    path: '/api/setups/:id/approve',
+    summary: 'Approve what was submitted',
+    params: idParams,
+    body: approveBody,
+    ifMatch: true,
+    status: 200,
+    answer: setupSchema,
+  },
+  returnSetup: {
+    method: 'post',
+    path: '/api/setups/:id/return',
+    summary: 'Send back with a reason',
+    params: idParams,
+    body: returnBody,
+    ifMatch: true,
+    status: 200,
+    answer: setupSchema,
+  },
+  listRevisions: {
+    method: 'get',
+    path: '/api/setups/:id/revisions',
+    summary: 'Every revision',
+    params: idParams,
+    status: 200,
+    answer: revisionsPage,
+  },
+  getRevision: {
+    method: 'get',
+    path: '/api/setups/:id/revisions/:revision',
+    summary: 'One revision',
+    params: revisionParams,
+    status: 200,
+    answer: revisionSchema,
+  },
+  revisionContent: {
+    method: 'get',
+    path: '/api/setups/:id/revisions/:revision/content',
+    summary: 'The bytes that were hashed',
+    params: revisionParams,
+    status: 200,
+    answer: 'application/json',
+  },
+  revisionEvaluation: {
+    method: 'get',
+    path: '/api/setups/:id/revisions/:revision/evaluation',
+    summary: "The server's own evaluation",
+    params: revisionParams,
+    status: 200,
+    answer: revisionEvaluationSchema,
+  },
+  revisionContours: {
+    method: 'get',
+    path: '/api/setups/:id/revisions/:revision/contours.dxf',
+    summary: 'Contours at every level on named layers',
+    params: revisionParams,
+    status: 200,
+    answer: 'application/dxf',
+  },
+  revisionEdges: {
+    method: 'get',
+    path: '/api/setups/:id/revisions/:revision/edges.csv',
+    summary: 'The edges as a table',
+    params: revisionParams,
+    status: 200,
+    answer: 'text/csv',
+  },
+} as const satisfies Record<string, Route>

@@ -1,6 +1,7 @@
 import type * as z from 'zod'
 import { errorCodes, type ErrorBody, type ErrorCode } from '../../shared/api/errors.ts'
-import { routes, type Route, type RouteName } from '../../shared/api/routes.ts'
+import type { Route } from '../../shared/api/route.ts'
+import { routes, type RouteName } from '../../shared/api/routes.ts'
 import { ApiError, NetworkError } from './errors.ts'
 import { askToSignIn } from './sign-in-gate.ts'
 

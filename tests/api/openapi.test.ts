@@ -1,7 +1,8 @@
 import SwaggerParser from '@apidevtools/swagger-parser'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { evaluationRequestSchema, evaluationSchema } from '../../shared/evaluate/schema.ts'
-import { routes, type Route } from '../../shared/api/routes.ts'
+import type { Route } from '../../shared/api/route.ts'
+import { routes } from '../../shared/api/routes.ts'
 import { expectStatus, startApp, type TestApp } from '../support/app.ts'
 
 interface Document {

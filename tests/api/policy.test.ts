@@ -2,7 +2,8 @@ import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { roles } from '../../shared/api/common.ts'
 import { mayCall, policy } from '../../shared/api/policy.ts'
-import { routes, type Route, type RouteName } from '../../shared/api/routes.ts'
+import type { Route } from '../../shared/api/route.ts'
+import { routes, type RouteName } from '../../shared/api/routes.ts'
 import { type Agent, startApp, type TestApp } from '../support/app.ts'
 
 /** Role × route, made of the table: whoever may not is told so, whoever may gets past the door. */

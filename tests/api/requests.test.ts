@@ -3,7 +3,8 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { errorSchema } from '../../shared/api/errors.ts'
 import { mayCall } from '../../shared/api/policy.ts'
 import { roles } from '../../shared/api/common.ts'
-import { routes, type Route, type RouteName } from '../../shared/api/routes.ts'
+import type { Route } from '../../shared/api/route.ts'
+import { routes, type RouteName } from '../../shared/api/routes.ts'
 import { type Agent, expectStatus, makeHead, startApp, type TestApp } from '../support/app.ts'
 
 let app: TestApp
