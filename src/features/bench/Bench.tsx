@@ -13,6 +13,9 @@ import './bench.css'
 import { ActRow } from './title/ActRow.tsx'
 import { TitleBlock } from './title/TitleBlock.tsx'
 import { Banners } from './save/Banners.tsx'
+import { EdgeTable } from './edges/EdgeTable.tsx'
+import { SelectMany } from './edges/SelectMany.tsx'
+import { Region } from './Region.tsx'
 import { Sheet } from './Sheet.tsx'
 import { headOf, requestOf } from './model/content.ts'
 import { readEdges } from './model/link.ts'
@@ -139,10 +142,18 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
 const Everything = memo(function Everything() {
   return (
     <Page>
-      <TitleBlock />
-      <ActRow />
-      <Banners />
-      <Sheet />
+      <div className="bench-fold">
+        <TitleBlock />
+        <div className="flex flex-wrap bg-panel border-b border-rule print:hidden">
+          <ActRow />
+          <Banners />
+        </div>
+        <Sheet />
+      </div>
+      <Region id="bench-table" title="Edge table" className="px-3 sm:px-6 py-4">
+        <SelectMany />
+        <EdgeTable />
+      </Region>
     </Page>
   )
 })

@@ -16,9 +16,9 @@ import { useLayout } from './use-layout.ts'
 /** More tilted edges than this are not all labelled: only the selected ones are. */
 const MOST_LABELS = 40
 /** Balloons of one note in the picture; the chosen note shows all of its own. */
-const MOST_BALLOONS = 12
+const MOST_BALLOONS = 8
 
-const insetsOnDesk: Insets = { top: 16, right: 372, bottom: 16, left: 300 }
+const insetsOnDesk: Insets = { top: 8, right: 364, bottom: 8, left: 292 }
 
 const eventWords = {
   vanish: 'vanishes',
@@ -78,7 +78,7 @@ export function PartView() {
   )
 
   function balloonsOf(note: MarginNote, chosen: boolean): Balloon[] {
-    const places = chosen ? note.places : note.places.slice(0, MOST_BALLOONS)
+    const places = chosen ? note.places : spread(note.places, MOST_BALLOONS)
     return places.flatMap((place) => {
       const at = standsAt(place)
       return at === null
@@ -95,7 +95,7 @@ export function PartView() {
   }
 
   return (
-    <Suspense fallback={<p className="p-6 text-muted appear-late">Drawing…</p>}>
+    <Suspense fallback={<Drawing />}>
       <PartViewer
         mesh={result.mesh}
         thickness={plate.thickness}
@@ -122,4 +122,15 @@ export function PartView() {
       />
     </Suspense>
   )
+}
+
+/** At most so many of a list, evenly from all of it, so that they do not crowd one side of the part. */
+function spread<T>(all: readonly T[], most: number): T[] {
+  const pitch = Math.max(1, all.length / most)
+  return all.filter((_, i) => Math.floor(i / pitch) !== Math.floor((i - 1) / pitch))
+}
+
+/** In the middle of the picture, where neither the notes nor the card stand. */
+function Drawing() {
+  return <p className="h-full grid place-items-center text-muted appear-late">Drawing…</p>
 }

@@ -32,7 +32,7 @@ export function Region({ id, title, aside, className = '', children }: RegionPro
             {title}
           </button>
         </h2>
-        {aside !== undefined && <div className="text-small text-muted">{aside}</div>}
+        {aside !== undefined && <div className="grow text-right text-small text-muted">{aside}</div>}
       </div>
       <div id={`${id}-body`} className={open ? '' : 'max-sm:hidden'}>
         {children}

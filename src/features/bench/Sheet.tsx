@@ -1,6 +1,4 @@
 import { EdgeCard, useCardHead } from './card/EdgeCard.tsx'
-import { EdgeTable } from './edges/EdgeTable.tsx'
-import { SelectMany } from './edges/SelectMany.tsx'
 import { MarginNotes } from './notes/MarginNotes.tsx'
 import { PartView } from './PartView.tsx'
 import { Region } from './Region.tsx'
@@ -10,47 +8,39 @@ import { TiltLegend } from './TiltLegend.tsx'
 
 /**
  * The drawing sheet. On a desk the part fills it, notes stand in the left margin, the edge card at the right,
- * the wall strip along the foot, the table below. A tablet has the part on top and two columns under it; a
+ * the wall strip along the foot. A tablet has the part on top and two columns under it; a
  * phone has one column.
  */
 export function Sheet() {
   const { theme, notes } = useScene()
   const card = useCardHead()
   return (
-    <div className="flex flex-col gap-4 pb-6">
-      <div className="bench-sheet">
-        <div className="bench-part">
-          <PartView />
-        </div>
-        <Region
-          id="bench-notes"
-          title="Notes"
-          aside={notes.length > 0 ? `${notes.length} open` : undefined}
-          className="bench-notes"
-        >
-          <MarginNotes />
-        </Region>
-        <div className="bench-card">
-          <Region
-            id="bench-card"
-            title={card.title}
-            aside={card.aside}
-            className="bg-panel border border-rule p-3"
-          >
-            <EdgeCard />
-          </Region>
-          <div className="pt-2 bg-sheet">
-            <TiltLegend theme={theme} />
-          </div>
-        </div>
-        <Region id="bench-strip" title="Wall strip" className="bench-strip">
-          <WallStrip />
-        </Region>
+    <div className="bench-sheet">
+      <div className="bench-part">
+        <PartView />
       </div>
-      <Region id="bench-table" title="Edge table" className="px-3 sm:px-6">
-        <SelectMany />
-        <EdgeTable />
+      <Region
+        id="bench-notes"
+        title="Notes"
+        aside={notes.length > 0 ? `${notes.length} open` : undefined}
+        className="bench-notes"
+      >
+        <MarginNotes />
       </Region>
+      <div className="bench-card">
+        <Region
+          id="bench-card"
+          title={card.title}
+          aside={card.aside}
+          className="bg-panel border border-rule px-3 py-2"
+        >
+          <EdgeCard />
+        </Region>
+        <div className="pt-1.5 bg-sheet">
+          <TiltLegend theme={theme} />
+        </div>
+      </div>
+      <WallStrip />
     </div>
   )
 }

@@ -4,7 +4,7 @@ import { along, basisOf, dot, type Frame, type Vec3, type ViewState } from './vi
 export type Runs = readonly ArrayLike<number>[]
 
 /** Air left round a fitted part as a share of the free side; labels and balloons stand in it. */
-export const FIT_AIR = 0.14
+export const FIT_AIR = 0.12
 
 /** The smallest thing that a fit magnifies to fill the screen, mm. */
 const LEAST_EXTENT = 1

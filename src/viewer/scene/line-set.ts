@@ -100,13 +100,13 @@ export class LineSet {
     for (const material of this.#materials) material.color = colour
   }
 
-  /** Leaves the lines out of the picture without forgetting them. */
-  omit(omitted: boolean): void {
+  /** Leaves the lines, or only their hidden part, out of the picture without forgetting them. */
+  omit(omitted: boolean, omittedBehind = omitted): void {
     const count = omitted ? 0 : this.#geometry.instanceCount
     const many = count > RULED_UP_TO
     this.plain.visible = many
     this.shown.visible = count > 0 && !many
-    if (this.behind) this.behind.visible = count > 0 && !many
+    if (this.behind) this.behind.visible = count > 0 && !many && !omittedBehind
   }
 
   /** Keeps dashes the same length on screen at any zoom. */

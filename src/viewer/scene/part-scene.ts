@@ -17,6 +17,8 @@ const HIDDEN_LIFT = 4
 
 /** Seams closer together than this on screen would only blacken the walls, px. */
 const CROWDED = 4
+/** Hidden seams closer together than this would only grey the face before them, px. */
+const CROWDED_BEHIND = 24
 
 export interface Dress {
   readonly palette: Palette
@@ -128,9 +130,9 @@ export class PartScene {
       lift(set.plain, toward, LINE_LIFT / pixelsPerMm)
       if (set.behind) lift(set.behind, toward, HIDDEN_LIFT / pixelsPerMm)
     }
-    const crowded = (this.#index?.meanEdge ?? 0) * pixelsPerMm < CROWDED
-    this.#lines.seam.omit(crowded)
-    this.#lines.level.omit(crowded)
+    const apart = (this.#index?.meanEdge ?? 0) * pixelsPerMm
+    this.#lines.seam.omit(apart < CROWDED, apart < CROWDED_BEHIND)
+    this.#lines.level.omit(apart < CROWDED)
     this.#faces.setPixelRatio(pixelRatio)
     this.#discs.setPixelRatio(pixelRatio)
   }

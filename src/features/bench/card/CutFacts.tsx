@@ -5,53 +5,44 @@ import { formatAngle, formatLength } from '../../../../shared/units/format.ts'
 import { Facts, type Fact } from '../../../ui/Facts.tsx'
 import { useContent } from '../model/store.ts'
 import { facetsOf, jointOf, shared } from '../model/walls.ts'
-import { tiltWords } from '../model/words.ts'
 import { limitOf, useScene } from '../scene.ts'
 
 interface CutFactsProps {
-  readonly lead: EdgeRef
   readonly selection: readonly EdgeRef[]
 }
 
-/** What follows from the prep: the angle three ways, where the bottom edge lands, what the jet does. */
-export function CutFacts({ lead, selection }: CutFactsProps) {
+/** What follows from the prep: the tilt's other two angles, where the bottom edge lands, what the jet does. */
+export function CutFacts({ selection }: CutFactsProps) {
+  const angles = useAngles(selection)
+  const cut = useCutFacts(selection)
   return (
-    <>
-      <AnglesThreeWays lead={lead} />
-      <Facts facts={useCutFacts(selection)} />
-    </>
+    <div className="text-small [&_div]:py-0">
+      <Facts facts={[...cut.slice(0, 1), ...angles, ...cut.slice(1)]} />
+    </div>
   )
 }
 
-function AnglesThreeWays({ lead }: { lead: EdgeRef }) {
+/** The angles of each bevelled facet beside the one from vertical, which stands in the section. */
+function useAngles(selection: readonly EdgeRef[]): Fact[] {
   const content = useContent()
-  const facets = facetsOf(content, lead)
-  const square = jointOf(content, lead)?.mate === 'square'
-  if (facets.every(({ tilt }) => tilt === 0)) return null
-  return (
-    <table className="w-full text-left">
-      <caption className="text-left text-small text-muted pb-1">The same tilt, three ways</caption>
-      <thead className="text-small text-muted">
-        <tr className="border-b border-rule align-bottom">
-          <th className="font-normal pr-2">from vertical</th>
-          <th className="font-normal pr-2">from the plate face</th>
-          <th className="font-normal">groove, {square ? 'square mate' : 'with its twin'}</th>
-        </tr>
-      </thead>
-      <tbody>
-        {facets.map(({ tilt }, i) => {
-          const { fromPlateFace, grooveAngle } = anglesThreeWays(tilt, square ? 0 : tilt)
-          return (
-            <tr key={i} className="border-b border-rule align-top">
-              <td className="py-1 pr-2">{tilt === 0 ? '0° root face' : tiltWords(tilt)}</td>
-              <td className="py-1 pr-2">{formatAngle(fromPlateFace)}</td>
-              <td className="py-1">{tilt === 0 ? '–' : formatAngle(grooveAngle)}</td>
-            </tr>
-          )
-        })}
-      </tbody>
-    </table>
-  )
+  const preps = selection.map((edge) => {
+    const square = jointOf(content, edge)?.mate === 'square'
+    const bevels = facetsOf(content, edge).filter(({ tilt }) => tilt !== 0)
+    return { square, angles: bevels.map(({ tilt }) => anglesThreeWays(tilt, square ? 0 : tilt)) }
+  })
+  if (preps.every(({ angles }) => angles.length === 0)) return []
+  const mate = shared(preps.map(({ square }) => square))
+  const twin = mate.mixed ? '' : mate.value ? ', with a square mate' : ', with its twin'
+  const said = (read: (angles: ReturnType<typeof anglesThreeWays>) => number) => {
+    const text = shared(
+      preps.map(({ angles }) => angles.map((each) => formatAngle(read(each))).join(' / ') || 'square'),
+    )
+    return text.mixed ? 'mixed' : text.value
+  }
+  return [
+    ['from the plate face', said(({ fromPlateFace }) => fromPlateFace)],
+    [`groove${twin}`, said(({ grooveAngle }) => grooveAngle)],
+  ]
 }
 
 function useCutFacts(selection: readonly EdgeRef[]): Fact[] {
@@ -70,17 +61,17 @@ function useCutFacts(selection: readonly EdgeRef[]): Fact[] {
   const over = selection.some((edge) => breaches.has(edgeKey(edge)))
   return [
     [
-      'bottom edge outside the top edge',
-      said(known.map(({ bottomOffset }) => formatLength(bottomOffset, unit, { sign: true }))),
-    ],
-    ['jet: wall less taper', said(tilts)],
-    [
       'jet tilt needed / limit',
       <span key="needed" className={over ? 'text-breach' : ''}>
         {formatAngle(most)} / {formatAngle(limit)}
         {over ? ', over the limit' : ''}
       </span>,
     ],
+    [
+      'bottom edge outside the top edge',
+      said(known.map(({ bottomOffset }) => formatLength(bottomOffset, unit, { sign: true }))),
+    ],
+    ['jet: wall less taper', said(tilts)],
     ['path in the metal', said(known.map(({ metalPath }) => formatLength(metalPath, unit)))],
     ['passes', `${said(known.map(({ jetTilts }) => String(jetTilts.length)))}${result.pending ? ' …' : ''}`],
   ]

@@ -5,8 +5,7 @@ import { Button } from '../../../ui/Button.tsx'
 import { sameEdge } from '../model/edges.ts'
 import { useActs, useBench, useContent } from '../model/store.ts'
 import { facetsOf, sameFacets } from '../model/walls.ts'
-import { wallWords } from '../model/words.ts'
-import { useScene } from '../scene.ts'
+import { tiltsText } from '../model/words.ts'
 import { CutFacts } from './CutFacts.tsx'
 import { FormFields } from './FormFields.tsx'
 import { JointFields } from './JointFields.tsx'
@@ -26,14 +25,14 @@ export function EdgeCard() {
     kinds.set(count, [...(kinds.get(count) ?? []), edge])
   }
   return (
-    <div className="flex flex-col gap-3">
+    <div className="flex flex-col gap-2">
       {kinds.size > 1 ? (
         <Unlike kinds={[...kinds.values()]} />
       ) : (
         <SectionEditor key={`${lead.loop}-${lead.edge}`} lead={lead} selection={selection} />
       )}
+      <CutFacts selection={selection} />
       <FormFields lead={lead} selection={selection} />
-      <CutFacts lead={lead} selection={selection} />
       <JointFields lead={lead} selection={selection} />
     </div>
   )
@@ -41,7 +40,6 @@ export function EdgeCard() {
 
 /** The card's heading: which edges it speaks of, and the prep or the names. */
 export function useCardHead(): { title: ReactNode; aside: string } {
-  const { unit } = useScene()
   const content = useContent()
   const selection = useBench((state) => state.selection)
   const [edge] = selection
@@ -55,7 +53,7 @@ export function useCardHead(): { title: ReactNode; aside: string } {
         Edge <span className="normal-case font-bold text-ink">{edgeName(edge)}</span>
       </>
     ),
-    aside: users > 1 ? `same prep on ${users} edges` : wallWords(facets, unit),
+    aside: users > 1 ? `same prep on ${users} edges` : tiltsText(facets),
   }
 }
 

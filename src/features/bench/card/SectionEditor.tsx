@@ -92,7 +92,7 @@ export function SectionEditor({ lead, selection }: SectionEditorProps) {
       breached={breached}
       renderDimension={slot}
       labelSize={labelSize}
-      plateHeight={150}
+      plateHeight={116}
     />
   )
 }

@@ -17,8 +17,12 @@ export function tiltWords(tilt: number): string {
 
 /** The short label that stands at an edge in 3D: `e1 +30° / 0°`. */
 export function edgeLabel(edge: EdgeRef, facets: Facets): string {
-  const tilts = facets.map(({ tilt }) => formatAngle(tilt, { decimals: 1, sign: true }))
-  return `${edgeName(edge)} ${tilts.join(' / ')}`
+  return `${edgeName(edge)} ${tiltsText(facets)}`
+}
+
+/** `+30° / 0°`, from the top face down. */
+export function tiltsText(facets: Facets): string {
+  return facets.map(({ tilt }) => formatAngle(tilt, { decimals: 1, sign: true })).join(' / ')
 }
 
 /** A wall in words with its sense, for the table and for screen readers. */

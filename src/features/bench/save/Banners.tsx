@@ -2,18 +2,18 @@ import { useNavigate } from 'react-router-dom'
 import type { Decision } from '../../../../shared/api/setups.ts'
 import { useMay } from '../../../app/current-user.tsx'
 import { Button, ButtonLink } from '../../../ui/Button.tsx'
-import { Notice } from '../../../ui/Notice.tsx'
 import { formatInstant } from '../../../ui/when.ts'
 import { clockText } from '../model/draft.ts'
 import { sameContent } from '../model/content.ts'
 import { useActs, useBench, useContent } from '../model/store.ts'
 import { useScene } from '../scene.ts'
+import { Banner } from './Banner.tsx'
 import { useDraft } from './use-draft.ts'
 
 /** What a person must know before touching anything: an old revision, a decision, a draft, a newer save. */
 export function Banners() {
   return (
-    <div className="flex flex-col empty:hidden print:hidden">
+    <div className="grow basis-96 flex flex-col empty:hidden">
       <OldRevision />
       <StateBanner />
       <DraftOffer />
@@ -29,7 +29,7 @@ function OldRevision() {
   if (newest === null) return null
   const { number, state } = setup.revision
   return (
-    <Notice
+    <Banner
       title={`Revision ${number} · ${state}`}
       actions={
         <Button onClick={() => void navigate({ search: '' })}>
@@ -39,7 +39,7 @@ function OldRevision() {
     >
       An older revision, to look at only. It was saved by {setup.revision.savedBy.name} on{' '}
       {formatInstant(setup.revision.savedAt)}.
-    </Notice>
+    </Banner>
   )
 }
 
@@ -54,14 +54,14 @@ function StateBanner() {
     </ButtonLink>
   )
   return (
-    <Notice
+    <Banner
       tone={setup.state === 'approved' ? 'good' : 'plain'}
       title={`Revision ${setup.revision.number} · ${setup.state}`}
       actions={review || undefined}
     >
       {decisionText(last)}
-      {!readOnly && setup.state !== 'returned' && ' Saving a change starts a new revision, as a draft.'}
-    </Notice>
+      {!readOnly && setup.state !== 'returned' && ' A saved change begins a new draft.'}
+    </Banner>
   )
 }
 
@@ -75,7 +75,7 @@ function DraftOffer() {
   const base = useBench((state) => state.base)
   if (found === null) return null
   return (
-    <Notice
+    <Banner
       title="Unsaved changes"
       actions={
         <>
@@ -89,7 +89,7 @@ function DraftOffer() {
       Unsaved changes from {dayAndClock(found.keptAt)} were kept in this browser.
       {found.version !== base.version &&
         ` The set-up has moved on since: they began on revision ${found.revision}. Saving will show both sides.`}
-    </Notice>
+    </Banner>
   )
 }
 
@@ -107,7 +107,7 @@ function SavedElsewhere() {
   if (newest !== null || setup.version <= base.version) return null
   const clean = sameContent(content, base.content)
   return (
-    <Notice
+    <Banner
       title="Changed elsewhere"
       actions={
         clean ? (
@@ -117,7 +117,7 @@ function SavedElsewhere() {
     >
       The set-up was changed meanwhile: revision {setup.revision.number} by {setup.revision.savedBy.name}, now{' '}
       {setup.state}. {clean ? '' : 'Your next save will show both sides.'}
-    </Notice>
+    </Banner>
   )
 }
 
@@ -125,8 +125,8 @@ function NotComputed() {
   const { result } = useScene()
   if (result.error === null) return null
   return (
-    <Notice tone="breach" title="Not computed">
+    <Banner tone="breach" title="Not computed">
       {result.error.message} The picture shows the last sound state.
-    </Notice>
+    </Banner>
   )
 }

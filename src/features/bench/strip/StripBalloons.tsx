@@ -9,12 +9,14 @@ import type { Strip } from './use-strip.ts'
 
 const RADIUS = 9
 const GAP = 2 * RADIUS + 2
+/** One number is not repeated nearer than this unless its note is chosen, px. */
+const REPEAT = 90
 
 /** A note's number where its places stand; numbers that would meet go one above the other, then are left out. */
 export function StripBalloons({ strip, scale }: { strip: Strip; scale: StripScale }) {
   const { notes, chosenNote, chooseNote } = useScene()
   const acts = useActs()
-  const marks = useMemo(() => placeMarks(notes, strip, scale), [notes, strip, scale])
+  const marks = useMemo(() => placeMarks(notes, chosenNote, strip, scale), [notes, chosenNote, strip, scale])
   return (
     <g>
       {marks.map(({ number, severity, edges, x, y }, i) => {
@@ -58,15 +60,24 @@ interface Mark {
   readonly y: number
 }
 
-function placeMarks(notes: readonly MarginNote[], strip: Strip, scale: StripScale): Mark[] {
+function placeMarks(
+  notes: readonly MarginNote[],
+  chosen: number | null,
+  strip: Strip,
+  scale: StripScale,
+): Mark[] {
   const marks: Mark[] = []
   for (const { number, severity, places } of notes) {
+    let last = -Infinity
     for (const { loop, vertex, edge, edges } of places) {
       const s = loop === strip.loop && edges.length <= 2 ? placeOf(strip, vertex, edge) : null
       if (s === null) continue
       const x = Math.max(RADIUS + 1, Math.min(scale.width - RADIUS - 1, scale.x(s)))
+      if (number !== chosen && Math.abs(x - last) < REPEAT) continue
       const y = freeHeight(marks, x, scale.y(tiltAt(strip.line, s) ?? 0) - RADIUS - 3)
-      if (y !== null) marks.push({ number, severity, edges, x, y })
+      if (y === null) continue
+      marks.push({ number, severity, edges, x, y })
+      last = x
     }
   }
   return marks

@@ -21,7 +21,7 @@ export function StripHead({ loop, onLoop, perimeter, zoom, onZoom }: StripHeadPr
   const acts = useActs()
   const round = `${formatLength(perimeter, unit, { decimals: unit === 'mm' ? 1 : 2 })} round`
   return (
-    <div className="flex flex-wrap items-center gap-x-4 gap-y-1 pb-1">
+    <div className="flex flex-wrap items-center gap-x-4 gap-y-1">
       {loops.length > 1 ? (
         <div className="w-56 max-w-full">
           <Select
@@ -39,12 +39,10 @@ export function StripHead({ loop, onLoop, perimeter, zoom, onZoom }: StripHeadPr
           />
         </div>
       ) : (
-        <span className="text-small">outer loop</span>
+        <span>outer loop</span>
       )}
-      <span className="text-small">{round}</span>
-      <span className="text-small text-muted grow text-right max-lg:hidden">
-        above: jet tilt needed · below: walls by tilt
-      </span>
+      <span>{round}</span>
+      <span className="grow text-right max-lg:hidden">above: jet tilt needed · below: walls by tilt</span>
       <div role="group" aria-label="Width of the strip" className="flex ml-auto">
         <Button aria-label="Narrower" disabled={zoom === 1} onClick={() => onZoom(zoom / 2)}>
           −

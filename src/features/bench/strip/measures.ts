@@ -1,8 +1,8 @@
 /** Bands of the strip's drawing, px from its top. */
-export const CHART = { top: 8, bottom: 112 }
-export const WALLS = { top: 116, bottom: 180 }
-export const NAMES = 194
-export const HEIGHT = 200
+export const CHART = { top: 8, bottom: 104 }
+export const WALLS = { top: 108, bottom: 170 }
+export const NAMES = 183
+export const HEIGHT = 188
 
 /** Narrower cells are drawn together, px. */
 export const LEAST_CELL = 2

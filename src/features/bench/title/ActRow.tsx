@@ -34,8 +34,8 @@ export function ActRow() {
   })
 
   return (
-    <div className="bg-panel border-b border-rule print:hidden">
-      <div role="group" aria-label="Set-up" className="flex flex-wrap items-center gap-2 px-3 py-1.5">
+    <>
+      <div role="group" aria-label="Set-up" className="flex flex-wrap items-center gap-2 px-3 py-1">
         {!readOnly && (
           <>
             <Button onClick={acts.undo} disabled={back === 0} title="Ctrl+Z">
@@ -76,7 +76,7 @@ export function ActRow() {
         )}
       </div>
       {saving.error !== null && (
-        <div className="px-3 pb-2">
+        <div className="order-last w-full px-3 pb-2">
           <ErrorNotice
             error={saving.error}
             actions={<Button onClick={() => void saving.save()}>Save again</Button>}
@@ -89,7 +89,7 @@ export function ActRow() {
       {open === 'take-away' && <TakeAway unsaved={saving.dirty} onClose={close} />}
       {open === 'keys' && <KeysDialog onClose={close} />}
       <LeaveGuard saving={saving} />
-    </div>
+    </>
   )
 
   async function submitAfterSave() {
