@@ -96,7 +96,8 @@ describe.each(themes)('in the %s theme', (theme) => {
       const found = await seriousAxeFindings(page)
       await page.setViewportSize(sizes.phone)
       await page.waitForTimeout(200)
-      found.push(...(await seriousAxeFindings(page)).map((line) => `phone: ${line}`))
+      // Colours do not depend on the size: one theme is enough at the second size.
+      if (theme === 'tank') found.push(...(await seriousAxeFindings(page)).map((line) => `phone: ${line}`))
       const spill = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
       if (spill > 0) found.push(`phone: ${spill} px wider than the screen`)
       if (found.length > 0) seen[path.replace(/[0-9a-f-]{36}/, ':id')] = found
