@@ -26,11 +26,11 @@ export function EdgeList({ edges, current, place, unit }: EdgeListProps) {
                 <Link
                   to={place(edge)}
                   aria-current={here ? 'page' : undefined}
-                  className={`flex flex-wrap items-center gap-x-3 min-h-glove px-2 text-large hover:bg-face ${here ? 'border-l-4 border-select text-select font-bold' : ''}`}
+                  className={`grid grid-cols-[3.5rem_minmax(0,1fr)_auto] items-center gap-x-3 min-h-glove px-2 py-1.5 text-large hover:bg-face ${here ? 'border-l-4 border-select text-select font-bold' : ''}`}
                 >
-                  <span className="min-w-14">{edge.name}</span>
-                  <span className="grow text-base">{describeWall(edge.facets, unit)}</span>
-                  <span className="text-base text-muted">{edge.joint?.label ?? 'no joint given'}</span>
+                  <span>{edge.name}</span>
+                  <span className="text-base">{describeWall(edge.facets, unit)}</span>
+                  <span className="text-base text-muted">{edge.joint?.label ?? 'no joint'}</span>
                 </Link>
               </li>
             )
