@@ -72,6 +72,7 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
   const notes = useMemo(
     () =>
       notesOf(evaluation?.findings ?? [], {
+        unit,
         length: (mm) => formatLength(mm, unit),
         angle: (degrees) => formatAngle(degrees, { decimals: 1 }),
         edgesIn: (loop) => stored.loops[loop]?.length ?? 0,

@@ -15,9 +15,11 @@ void main() {
 
 const fragmentShader = /* glsl */ `
 uniform vec3 colour;
+uniform vec3 sheet;
 uniform float pixelRatio;
 uniform float radius;
 const float pitch = 6.0;
+const float veil = 0.62;
 void main() {
   vec2 at = (gl_PointCoord - 0.5) * (radius + 1.5) * 2.0;
   float out_ = length(at);
@@ -26,8 +28,11 @@ void main() {
   float apart = abs(fract(across / pitch) - 0.5) * pitch;
   float ruled = (1.0 - smoothstep(0.3, 0.95, apart)) * (1.0 - smoothstep(radius - 1.0, radius, out_));
   float cover = max(ring, ruled * 0.9);
-  if (cover < 0.02) discard;
-  gl_FragColor = vec4(colour, cover);
+  // The sheet's colour under the hatch, or it would be lost on a wall of a bright tilt.
+  float ground = veil * (1.0 - smoothstep(radius - 1.0, radius, out_));
+  float alpha = cover + ground * (1.0 - cover);
+  if (alpha < 0.02) discard;
+  gl_FragColor = vec4(mix(sheet, colour, cover / alpha), alpha);
 }`
 
 export class CornerDiscs {
@@ -45,6 +50,7 @@ export class CornerDiscs {
       depthWrite: false,
       uniforms: {
         colour: { value: new Vector3() },
+        sheet: { value: new Vector3() },
         pixelRatio: { value: 1 },
         radius: { value: DISC_RADIUS },
       },
@@ -64,8 +70,9 @@ export class CornerDiscs {
     this.object.visible = points.length > 0
   }
 
-  colour(breach: Rgb): void {
+  colour(breach: Rgb, sheet: Rgb): void {
     setRgb(this.#material.uniforms.colour!.value as Vector3, breach)
+    setRgb(this.#material.uniforms.sheet!.value as Vector3, sheet)
   }
 
   setPixelRatio(ratio: number): void {

@@ -90,7 +90,7 @@ export class PartScene {
     for (const kind of ['select', 'hover'] as const) lines[kind].colour(palette.select)
     lines.thinSelect.colour(mix(palette.select, palette.ink, 0.15))
     lines.breach.colour(palette.breach)
-    this.#discs.colour(palette.breach)
+    this.#discs.colour(palette.breach, palette.sheet)
 
     const chosen = selection.flatMap((edge) => index.edges.get(edgeKey(edge)) ?? [])
     const broken = breaches.edges.flatMap((edge) => index.edges.get(edgeKey(edge)) ?? [])

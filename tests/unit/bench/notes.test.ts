@@ -3,6 +3,7 @@ import type { Finding } from '../../../shared/findings/schema.ts'
 import { GATHER_ABOVE, notesOf, type NoteFormat } from '../../../src/features/bench/model/notes.ts'
 
 const format: NoteFormat = {
+  unit: 'mm',
   length: (mm) => `${mm} mm`,
   angle: (degrees) => `${degrees}°`,
   edgesIn: () => 20,

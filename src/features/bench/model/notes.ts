@@ -1,5 +1,6 @@
 import { cornerName, edgeKey, edgeName } from '../../../../shared/body/names.ts'
 import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { DisplayUnit } from '../../../../shared/units/length.ts'
 import type { Cure, Finding, FindingCode, FindingSeverity } from '../../../../shared/findings/schema.ts'
 
 /**
@@ -63,6 +64,8 @@ const gathered: Record<FindingCode, { one: string; say: string; length?: true }>
 }
 
 export interface NoteFormat {
+  /** The unit that lengths are shown in; the findings themselves speak in millimetres. */
+  readonly unit: DisplayUnit
   readonly length: (mm: number) => string
   readonly angle: (degrees: number) => string
   /** Edges in a loop, so that a corner can name the two that meet there. */
@@ -89,12 +92,20 @@ function noteOf(findings: readonly Finding[], number: number, format: NoteFormat
     number,
     severity: first.severity,
     code: first.code,
-    message: findings.length === 1 ? first.message : gatheredMessage(findings, format),
+    message:
+      findings.length === 1 ? first.message + inShownUnit(first, format) : gatheredMessage(findings, format),
     findings,
     places: findings.map((finding) => placeOf(finding, format)),
-    cure: cureOf(findings),
+    cure: cureOf(findings, format),
     advice: findings.find(({ cure }) => cure && !isSettable(cure))?.cure?.message ?? null,
   }
+}
+
+/** A finding's lengths in the unit on the screen, from its own numbers, where that is not the millimetre. */
+function inShownUnit({ code, value, limit }: Finding, { unit, length }: NoteFormat): string {
+  if (unit === 'mm' || !gathered[code].length || value === undefined) return ''
+  const against = limit === undefined || limit === 0 ? '' : ` against ${length(limit)}`
+  return ` That is ${length(value)}${against}.`
 }
 
 function gatheredMessage(findings: readonly Finding[], format: NoteFormat): string {
@@ -137,10 +148,14 @@ export function isSettable(cure: Cure): boolean {
   return cure.set !== undefined || cure.standoff !== undefined
 }
 
-function cureOf(findings: readonly Finding[]): NoteCure | null {
+function cureOf(findings: readonly Finding[], { unit, length }: NoteFormat): NoteCure | null {
   const cures = findings.flatMap(({ cure }) => (cure && isSettable(cure) ? [cure] : []))
   if (cures.length === 0 || cures.length < findings.length) return null
-  const messages = new Set(cures.map(({ message }) => message))
+  const messages = new Set(
+    cures.map(({ message, standoff }) =>
+      unit === 'mm' || standoff === undefined ? message : `${message} That is ${length(standoff)}.`,
+    ),
+  )
   const message = messages.size === 1 ? [...messages][0]! : `Apply the cure of each of the ${cures.length}`
   return { message, cures }
 }
