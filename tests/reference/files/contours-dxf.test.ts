@@ -1,8 +1,4 @@
-import { execFileSync } from 'node:child_process'
-import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs'
-import { tmpdir } from 'node:os'
-import { join } from 'node:path'
-import { fileURLToPath } from 'node:url'
+import { existsSync } from 'node:fs'
 import dxfParserModule, { type ILwpolylineEntity } from 'dxf-parser'
 import { beforeAll, describe, expect, it } from 'vitest'
 import { evaluate } from '../../../shared/evaluate/evaluate.ts'
@@ -10,36 +6,13 @@ import type { Evaluation } from '../../../shared/evaluate/schema.ts'
 import { cautions } from '../../../shared/files/cautions.ts'
 import { contoursDxf, type FileInfo } from '../../../shared/files/contours-dxf.ts'
 import { evaluationRequestOf } from '../../../shared/setup/schema.ts'
+import { ezdxf, PYTHON, type ReadBack } from '../../support/ezdxf.ts'
 import { content } from '../../unit/setup/content.ts'
 
 /** The package is CommonJS: its types name the class as default export, at run time it is the export itself. */
 const DxfParser = dxfParserModule as unknown as typeof dxfParserModule.default
 
 /** The file is read back by two readers that share no code with its writer: ezdxf (Debian's python3-ezdxf) and dxf-parser. */
-
-interface ReadBack {
-  version: string
-  unit: number
-  errors: string[]
-  fixes: string[]
-  layers: string[]
-  polylines: { layer: string; closed: boolean; points: [number, number, number][] }[]
-  entities: number
-}
-
-const PYTHON = '/usr/bin/python3'
-const SCRIPT = fileURLToPath(new URL('read_back.py', import.meta.url))
-
-function ezdxf(text: string): ReadBack {
-  const folder = mkdtempSync(join(tmpdir(), 'contours-'))
-  try {
-    const file = join(folder, 'contours.dxf')
-    writeFileSync(file, text)
-    return JSON.parse(execFileSync(PYTHON, [SCRIPT, file], { encoding: 'utf8' })) as ReadBack
-  } finally {
-    rmSync(folder, { recursive: true })
-  }
-}
 
 function info(change: Partial<FileInfo> = {}): FileInfo {
   return {
