@@ -57,11 +57,21 @@ export const CornerMode = {
 export const STRAIGHT_TURN = 1e-4
 
 /**
- * Neighbours of which one is an arc are tangent below this turn, radians: 1 mm in a metre, a third of the
- * tightest angle class of ISO 13920 (A, 10′). An arc's ends are rounded, so that tangents are never exact. The
- * corner moves along its mitre normal: exactly on lines, off the circle by at most (offset × turn)² / 8r.
+ * Neighbours of which one is an arc are tangent below this turn, radians: 10′, the tightest angle class of
+ * ISO 13920 (A, from memory). An arc's ends are rounded, so that tangents are never exact, and a corner taken at its word
+ * ends the body in the first micrometres of depth, where the line leaves the circle. The corner moves along
+ * its mitre normal: exactly on lines, off the circle by at most (offset × turn)² / 8r.
  */
-export const TANGENT_TURN = 1e-3
+export const TANGENT_TURN = Math.PI / 1080
+
+/**
+ * On small arcs rounding turns the tangent further: tangent too, where moving the corner by this along would
+ * make it so, mm (the gap that a drawing's reading joins unasked) ...
+ */
+const TANGENT_SHIFT = 0.01
+
+/** ... but never past this turn, radians: 1°, the general tolerance of ISO 2768-1 on sides up to 10 mm (from memory). */
+const SMALL_ARC_TURN = Math.PI / 180
 
 /** Lines within this of doubling back form a spike, radians: their mitre would lie a million offsets away. */
 const SPIKE_TURN = Math.PI - 1e-6
@@ -129,7 +139,7 @@ function compile(body: Body): Frame {
     const phi = Math.atan2(sin, cos)
     turn[g] = phi
     const lines = before.kind === 'line' && after.kind === 'line'
-    const smooth = Math.abs(phi) <= (lines ? STRAIGHT_TURN : TANGENT_TURN)
+    const smooth = Math.abs(phi) <= (lines ? STRAIGHT_TURN : tangentTurn(before, after))
     if (!smooth && !lines) {
       mode[g] = CornerMode.branch
       branches.set(g, branchOf(before, after))
@@ -176,6 +186,15 @@ function compile(body: Body): Frame {
     hasArcs,
     hasSteps,
   }
+}
+
+/** Turn below which neighbours, at least one of them an arc, count as tangent. */
+function tangentTurn(before: Segment, after: Segment): number {
+  const radius = Math.min(
+    before.kind === 'arc' ? before.radius : Infinity,
+    after.kind === 'arc' ? after.radius : Infinity,
+  )
+  return Math.max(TANGENT_TURN, Math.min(SMALL_ARC_TURN, TANGENT_SHIFT / radius))
 }
 
 /** Ends of every edge at some offsets: edge g runs from (sx, sy)[g] to (ex, ey)[g]. */

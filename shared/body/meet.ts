@@ -88,7 +88,9 @@ function offerBentPoint(march: March, e: number, f: number, near: number, first:
       : x * nx + y * ny - height - t * rate
   }
   const slack = (from: number, to: number) =>
-    pointStray(march, e, from, to) + (Math.abs(rate) * (to - from)) / 2
+    passesBeside(march, e, f, from, to, near)
+      ? NO_CONTACT
+      : pointStray(march, e, from, to) + (Math.abs(rate) * (to - from)) / 2
   let start = 0
   const end = Math.min(first.until, march.length)
   while (start < end) {
@@ -104,6 +106,41 @@ function offerBentPoint(march: March, e: number, f: number, near: number, first:
     if (offerContact(march, e, f, from + t, x, y, near, first)) return
     start = from + t + end * PAST_CROSSING
   }
+}
+
+/** A bound below every distance: the span is dropped. */
+const NO_CONTACT = -1
+
+/**
+ * Whether point e keeps clear of piece f's ends, beyond them, through a whole span. Without this a point that
+ * rides along the same line or circle beside the piece (an arc drawn in two parts) would cross it at every moment.
+ */
+function passesBeside(march: March, e: number, f: number, from: number, to: number, near: number): boolean {
+  const { chain } = march
+  const following = chain.next[f]!
+  const t = (from + to) / 2
+  const [x, y] = [pointX(march, e, t), pointY(march, e, t)]
+  const [sx, sy] = [pointX(march, f, t), pointY(march, f, t)]
+  const [ex, ey] = [pointX(march, following, t), pointY(march, following, t)]
+  const stray = pointStray(march, e, from, to) + near
+  const startStray = pointStray(march, f, from, to)
+  const endStray = pointStray(march, following, from, to)
+  if (chain.kind[f] !== PieceKind.arc) {
+    const fromStart = (x - sx) * chain.ux[f]! + (y - sy) * chain.uy[f]!
+    const toEnd = (ex - x) * chain.ux[f]! + (ey - y) * chain.uy[f]!
+    const [atStart, atEnd] = [stray + startStray, stray + endStray]
+    // A step may run against its direction, so either order of signs is beyond an end.
+    return (fromStart < -atStart && toEnd > atEnd) || (fromStart > atStart && toEnd < -atEnd)
+  }
+  if (onPiece(march, f, t, x, y, near)) return false
+  const [r, w] = [march.radius[f]!, march.radiusRate[f]!]
+  const [atFrom, atTo] = [r + from * w, r + to * w]
+  const [narrow, wide] = [Math.min(atFrom, atTo), Math.max(atFrom, atTo)]
+  if (!(narrow > 0)) return false
+  // An end that strays by s turns by at most asin(s / r) ≤ (π/2) s / r, and uncovers as much of the arc.
+  const arcStray =
+    (wide - narrow) / 2 + (1 + ((Math.PI / 2) * wide) / narrow) * Math.max(startStray, endStray)
+  return Math.min(Math.hypot(x - sx, y - sy), Math.hypot(x - ex, y - ey)) > stray + arcStray
 }
 
 /** Where a crossing beside the piece was passed over, the search goes on this share of the march later. */

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest'
 import { contourProblems } from '../../../shared/body/check.ts'
 import { contourAt } from '../../../shared/body/contour.ts'
+import { cornersOf } from '../../../shared/body/corners.ts'
 import { soundRange } from '../../../shared/body/range.ts'
 import type { Body, ContourSegment, Datum, Wall } from '../../../shared/body/types.ts'
 import { segmentLength } from '../../../shared/geometry/segment.ts'
@@ -44,12 +45,15 @@ function sound(body: Body, depth: number): boolean {
 
 /** No line runs against its drawing, no radius is used up, and arcs still meet their neighbours. */
 function edgesKeepTheirWay(body: Body, loops: readonly (readonly ContourSegment[])[]): boolean {
+  const smooth = body.loops.map((loop) => loop.map(() => false))
+  for (const { loop, vertex, kind } of cornersOf(body)) smooth[loop]![vertex] = kind === 'smooth'
   return loops.every((loop, l) =>
     loop.every((s) => {
       if (s.edge === null) return true
+      const ends = [smooth[l]![s.edge]!, smooth[l]![(s.edge + 1) % body.loops[l]!.length]!]
       const drawn = body.loops[l]![s.edge]!
       if (s.kind === 'arc')
-        return drawn.kind === 'arc' && s.sweep * drawn.sweep > 0 && s.radius > 0 && endsOnCircle(s)
+        return drawn.kind === 'arc' && s.sweep * drawn.sweep > 0 && s.radius > 0 && endsOnCircle(s, ends)
       const along =
         (s.to.x - s.from.x) * (drawn.to.x - drawn.from.x) + (s.to.y - s.from.y) * (drawn.to.y - drawn.from.y)
       return along > 0
@@ -57,8 +61,14 @@ function edgesKeepTheirWay(body: Body, loops: readonly (readonly ContourSegment[
   )
 }
 
-function endsOnCircle({ from, to, centre, radius }: ArcSegment): boolean {
-  return [from, to].every((end) => Math.abs(Math.hypot(end.x - centre.x, end.y - centre.y) - radius) < 1e-7)
+/** Nearly tangent corners leave their circle by at most (offset × turn)² / 8r: here 60 mm, 10′ and r of 40 mm or more. */
+const OFF_CIRCLE = 1e-4
+
+function endsOnCircle({ from, to, centre, radius }: ArcSegment, smooth: readonly boolean[]): boolean {
+  return [from, to].every((end, i) => {
+    const off = Math.abs(Math.hypot(end.x - centre.x, end.y - centre.y) - radius)
+    return off < (smooth[i] ? OFF_CIRCLE : 1e-7)
+  })
 }
 
 const cases = (['top', 'bottom'] as const).flatMap((datum) => [
