@@ -21,12 +21,17 @@ const STOP_PATIENCE = 15_000
 const OPENING_TRIES = 60
 const OPENING_WAIT = 1_000
 
+type Close = () => void | Promise<void>
+
 async function main(): Promise<void> {
   const config = readConfig(process.env)
   const log = createLog(config.logLevel)
+  const opened: Close[] = []
+  stopOnSignal(log, opened)
   const root = projectRoot()
   const dataSource = createDataSource(config.databaseUrl, config.databasePool)
   await openPatiently(dataSource, log)
+  opened.push(() => dataSource.destroy())
   const services = createServices(config, log, dataSource, root)
   if (config.demo) {
     const { seedDemo } = await import('./db/seed.ts')
@@ -35,22 +40,17 @@ async function main(): Promise<void> {
     if (config.production) await refuseDemoAccounts(services)
     await createFirstAdmin(services)
   }
-  const stopHousekeeping = keepHouse(services)
+  opened.push(keepHouse(services))
 
   const webDir = config.webDir ?? path.join(root, 'dist', 'web')
   const hasWeb = existsSync(path.join(webDir, 'index.html'))
   if (!hasWeb) log.warn('the pages are not built: only the API is served')
   const server = createServer(createApp(services, hasWeb ? webDir : null))
   await listen(server, config)
+  opened.push(() => close(server))
   const { port } = server.address() as AddressInfo
   log.info({ port, host: config.host, demo: config.demo }, 'listening')
   process.send?.({ ready: true, port })
-
-  stopOnSignal(log, async () => {
-    stopHousekeeping()
-    await close(server)
-    await dataSource.destroy()
-  })
 }
 
 /** The database may still be starting, after a power cut for example. */
@@ -91,8 +91,12 @@ async function close(server: Server): Promise<void> {
   clearTimeout(timer)
 }
 
-function stopOnSignal(log: Logger, stop: () => Promise<void>): void {
+/** From the first moment on: whatever is open by then is closed, the last opened first. */
+function stopOnSignal(log: Logger, opened: readonly Close[]): void {
   let stopping = false
+  const stop = async () => {
+    for (const close of opened.toReversed()) await close()
+  }
   for (const signal of ['SIGTERM', 'SIGINT'] as const) {
     process.on(signal, () => {
       if (stopping) return

@@ -212,4 +212,15 @@ describe('the configuration', () => {
   it('costs a password 19 MiB and two passes, as OWASP asks', () => {
     expect(readConfig(base).passwordCost).toEqual({ memoryCost: 19 * 1024, timeCost: 2, parallelism: 1 })
   })
+
+  it('stops in order while it still waits for its database', { timeout: 120_000 }, async () => {
+    const nobody = new URL(database.url)
+    nobody.port = '1'
+    const started = start({ DATABASE_URL: nobody.toString() })
+    running.push(started)
+    while (!started.output().includes('waiting for the database'))
+      await new Promise((resolve) => setTimeout(resolve, 50))
+    started.child.kill('SIGTERM')
+    expect(await started.ended).toBe(0)
+  })
 })
