@@ -1,5 +1,5 @@
 import { Canvas } from '@react-three/fiber'
-import { useCallback, useEffect, useId, useMemo, useRef, useState } from 'react'
+import { memo, useCallback, useEffect, useId, useMemo, useRef, useState } from 'react'
 import { edgeKey } from '../../shared/body/names.ts'
 import { standardView } from './camera/standard-views.ts'
 import { useGestures } from './camera/use-gestures.ts'
@@ -13,8 +13,9 @@ import { OverlayLayer } from './overlay/layer.ts'
 import { Overlay } from './overlay/Overlay.tsx'
 import { Picker } from './pick/picker.ts'
 import { indexMesh } from './scene/mesh-index.ts'
-import type { PartScene } from './scene/part-scene.ts'
+import { PartScene } from './scene/part-scene.ts'
 import { Scene } from './scene/Scene.tsx'
+import { useDress } from './scene/use-dress.ts'
 import type { Insets, PartViewerProps } from './types.ts'
 import { canDrawInThree } from './webgl.ts'
 
@@ -30,20 +31,18 @@ const KEYS =
  * The bevelled part in 3D, drawn as a drawing is. Turning, moving and zooming never render React: the
  * camera, the outline under the pointer and the places of the texts are written directly.
  */
-export default function PartViewer(props: PartViewerProps) {
+export default memo(function PartViewer(props: PartViewerProps) {
   const { mesh, theme, selection, onSelect, compact = false, focusEdge = null, view = null } = props
   const { insets = NO_INSETS, onViewChange, label = 'Part in 3D', description } = props
   const [control] = useState(() => new ViewControl())
   const [picker] = useState(() => new Picker())
   const [layer] = useState(() => new OverlayLayer())
+  const [part] = useState(() => new PartScene())
   const [drawable] = useState(canDrawInThree)
   const [lost, setLost] = useState(false)
   const wrapper = useRef<HTMLDivElement>(null)
   const stage = useRef<HTMLDivElement>(null)
-  const scene = useRef<{ part: PartScene | null; invalidate: () => void }>({
-    part: null,
-    invalidate: () => {},
-  })
+  const askForFrame = useRef(() => {})
   const frames = useRef(0)
   const words = useId()
 
@@ -66,10 +65,12 @@ export default function PartViewer(props: PartViewerProps) {
   )
   useEffect(() => () => control.dispose(), [control])
 
-  const invalidate = useCallback(() => scene.current.invalidate(), [])
-  const onScene = useCallback((part: PartScene | null, ask: () => void) => {
-    scene.current = { part, invalidate: ask }
+  const invalidate = useCallback(() => askForFrame.current(), [])
+  const onCanvas = useCallback((ask: () => void) => {
+    askForFrame.current = ask
   }, [])
+  const { tiltOf, breaches, thickness } = props
+  useDress({ part, index, picker, wrapper, tiltOf, selection, breaches, theme, thickness, invalidate })
 
   /** Counts frames where a test can read them, without a render. */
   const onFrame = useCallback((ready: boolean) => {
@@ -89,11 +90,11 @@ export default function PartViewer(props: PartViewerProps) {
   const onHover = useCallback(
     (at: { x: number; y: number } | null) => {
       const edge = at && picker.edgeAt(control.view, control.frame, at.x, at.y, REACH.fine)
-      if (!scene.current.part?.hover(edge)) return
+      if (!part.hover(edge)) return
       if (stage.current) stage.current.style.cursor = edge ? 'pointer' : ''
-      scene.current.invalidate()
+      invalidate()
     },
-    [control, picker],
+    [control, picker, part, invalidate],
   )
   useGestures(stage, control, { onTap, onHover }, { wheelNeedsFocus: compact })
 
@@ -121,6 +122,32 @@ export default function PartViewer(props: PartViewerProps) {
     run(context)
   }
 
+  // Made once: its tree knows nothing of React's state, so nothing that changes there reaches it.
+  const canvas = useMemo(
+    () => (
+      <Canvas
+        frameloop="demand"
+        flat
+        gl={{ antialias: true, alpha: true, powerPreference: 'low-power' }}
+        dpr={[1, 2]}
+        events={noEvents}
+        resize={{ scroll: false }}
+        onCreated={({ gl }) => watchContext(gl.domElement, setLost, invalidate)}
+        className="absolute! inset-0"
+      >
+        <Scene
+          part={part}
+          control={control}
+          layer={layer}
+          picker={picker}
+          onCanvas={onCanvas}
+          onFrame={onFrame}
+        />
+      </Canvas>
+    ),
+    [part, control, layer, picker, onCanvas, onFrame, invalidate],
+  )
+
   return (
     <div
       ref={wrapper}
@@ -140,31 +167,7 @@ export default function PartViewer(props: PartViewerProps) {
       >
         {drawable ? (
           <PictureBoundary>
-            <Canvas
-              frameloop="demand"
-              flat
-              gl={{ antialias: true, alpha: true, powerPreference: 'low-power' }}
-              dpr={[1, 2]}
-              events={noEvents}
-              resize={{ scroll: false }}
-              onCreated={({ gl }) => watchContext(gl.domElement, setLost, invalidate)}
-              className="absolute! inset-0"
-            >
-              <Scene
-                index={index}
-                control={control}
-                layer={layer}
-                picker={picker}
-                wrapper={wrapper}
-                onScene={onScene}
-                onFrame={onFrame}
-                tiltOf={props.tiltOf}
-                selection={selection}
-                breaches={props.breaches}
-                theme={theme}
-                thickness={props.thickness}
-              />
-            </Canvas>
+            {canvas}
             {lost ? (
               <NoPicture>{LOST_WEBGL}</NoPicture>
             ) : (
@@ -173,7 +176,7 @@ export default function PartViewer(props: PartViewerProps) {
                 index={index}
                 onChange={invalidate}
                 selection={selection}
-                breaches={props.breaches}
+                breaches={breaches}
                 labels={props.labels}
                 balloons={props.balloons}
                 onBalloon={props.onBalloon}
@@ -194,7 +197,7 @@ export default function PartViewer(props: PartViewerProps) {
       )}
     </div>
   )
-}
+})
 
 /** Fiber's own pointer handling is not needed: one listener of ours asks the search tree. */
 const noEvents = () => ({ enabled: false, priority: 0 })

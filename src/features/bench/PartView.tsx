@@ -77,6 +77,15 @@ export function PartView() {
     [unit],
   )
 
+  const chooseBalloon = useCallback(
+    (number: number) => {
+      chooseNote(number)
+      const note = notes.find((each) => each.number === number)
+      if (note !== undefined) acts.selectMany(note.places.flatMap(({ edges }) => edges))
+    },
+    [notes, chooseNote, acts],
+  )
+
   function balloonsOf(note: MarginNote, chosen: boolean): Balloon[] {
     const places = chosen ? note.places : spread(note.places, MOST_BALLOONS)
     return places.flatMap((place) => {
@@ -101,15 +110,11 @@ export function PartView() {
         thickness={plate.thickness}
         tiltOf={tiltOf}
         selection={selection}
-        onSelect={(edge, how) => acts.select(edge, how)}
+        onSelect={acts.select}
         breaches={breached}
         labels={labels}
         balloons={balloons}
-        onBalloon={(number) => {
-          chooseNote(number)
-          const note = notes.find((each) => each.number === number)
-          if (note !== undefined) acts.selectMany(note.places.flatMap(({ edges }) => edges))
-        }}
+        onBalloon={chooseBalloon}
         event={event}
         theme={theme}
         compact={layout === 'phone'}

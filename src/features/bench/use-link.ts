@@ -1,5 +1,5 @@
-import { useEffect } from 'react'
-import { useSearchParams } from 'react-router-dom'
+import { useCallback, useEffect } from 'react'
+import { useNavigate, useSearchParams } from 'react-router-dom'
 import { writeEdges } from './model/link.ts'
 import { useBench } from './model/store.ts'
 
@@ -23,12 +23,17 @@ export function useLink(): void {
 
 /** The camera in the address, once it has come to rest. */
 export function useViewLink(): [view: string | null, keep: (view: string) => void] {
-  const [search, setSearch] = useSearchParams()
-  return [
-    search.get('view'),
-    (view) =>
-      setSearch((before) => withParam(before, 'view', view), { replace: true, preventScrollReset: true }),
-  ]
+  const [search] = useSearchParams()
+  const navigate = useNavigate()
+  // Reads the address itself: a function that changed with it would draw the picture anew.
+  const keep = useCallback(
+    (view: string) => {
+      const next = withParam(new URLSearchParams(location.search), 'view', view)
+      void navigate({ search: next.toString() }, { replace: true, preventScrollReset: true })
+    },
+    [navigate],
+  )
+  return [search.get('view'), keep]
 }
 
 function withParam(search: URLSearchParams, name: string, value: string | null): URLSearchParams {

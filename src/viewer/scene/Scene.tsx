@@ -1,66 +1,44 @@
 import { OrthographicCamera } from '@react-three/drei'
 import { useFrame, useThree } from '@react-three/fiber'
-import { useEffect, useLayoutEffect, useState, type RefObject } from 'react'
+import { useEffect } from 'react'
 import { Matrix4, Vector3, type OrthographicCamera as Camera } from 'three'
 import { basisOf, dot, scaleOf } from '../camera/view-state.ts'
 import type { ViewControl } from '../camera/view-control.ts'
 import type { OverlayLayer } from '../overlay/layer.ts'
-import { readPalette } from '../palette.ts'
 import type { Picker } from '../pick/picker.ts'
-import type { PartViewerProps } from '../types.ts'
 import type { MeshIndex } from './mesh-index.ts'
-import { PartScene } from './part-scene.ts'
+import type { PartScene } from './part-scene.ts'
 
-/** A mesh that ends this much above the bottom was cut short at its first event, mm. */
-const CUT_SHORT = 1e-6
 /** Room before and behind the part along the line of sight, as a share of its radius. */
 const DEPTH_ROOM = 1.1
 
-type Shown = Pick<PartViewerProps, 'tiltOf' | 'selection' | 'breaches' | 'theme' | 'thickness'>
-
-interface SceneProps extends Shown {
-  readonly index: MeshIndex | null
+interface SceneProps {
+  readonly part: PartScene
   readonly control: ViewControl
   readonly layer: OverlayLayer
   readonly picker: Picker
-  /** The element that bears the theme. */
-  readonly wrapper: RefObject<HTMLElement | null>
-  /** Gives the owner of pointer events the scene to outline in, and a way to ask for a frame. */
-  readonly onScene: (scene: PartScene | null, invalidate: () => void) => void
+  /** Gives the page a way to ask for a frame; one that does nothing when the canvas goes. */
+  readonly onCanvas: (invalidate: () => void) => void
   /** Each frame; whether it shows a part. */
   readonly onFrame: (ready: boolean) => void
 }
 
-/** The inside of the canvas: passes what React knows to the objects, and runs each frame. */
-export function Scene(props: SceneProps) {
-  const { index, control, layer, picker, wrapper, onScene, onFrame } = props
-  const { tiltOf, selection, breaches, theme, thickness } = props
+/** The inside of the canvas: the drawn part, and what is done in each frame. */
+export function Scene({ part, control, layer, picker, onCanvas, onFrame }: SceneProps) {
   const invalidate = useThree((state) => state.invalidate)
-  const [part] = useState(() => new PartScene())
 
   useEffect(() => {
     const ask = () => invalidate()
     const stop = control.askForFrames(ask)
-    onScene(part, ask)
+    onCanvas(ask)
+    ask()
     return () => {
       stop()
-      onScene(null, () => {})
+      onCanvas(() => {})
     }
-  }, [control, part, onScene, invalidate])
+  }, [control, onCanvas, invalidate])
 
   useEffect(() => () => part.dispose(), [part])
-
-  useLayoutEffect(() => {
-    if (!index) return
-    if (part.index !== index) {
-      part.shape(index)
-      picker.setIndex(index)
-    }
-    const palette = readPalette(wrapper.current!, theme)
-    const cutShort = index.mesh.depth < thickness - CUT_SHORT
-    part.dress({ palette, tiltOf, selection, breaches, cutShort })
-    invalidate()
-  }, [index, part, picker, wrapper, theme, thickness, tiltOf, selection, breaches, invalidate])
 
   useFrame(({ camera, gl }) => {
     const moving = control.step(performance.now())

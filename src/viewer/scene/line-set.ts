@@ -28,6 +28,11 @@ const DASH = { dash: 5, gap: 4 }
  */
 export const RULED_UP_TO = 6_000
 
+/** Lines at least this wide get ends that close their corners, px; on thinner ones nobody would see them. */
+const CAPPED_FROM = 2
+/** The two triangles between a segment's ends, of the six that the geometry has with its caps. */
+const BODY_ONLY = [2, 4, 3, 4, 5, 3]
+
 export interface LineStyle {
   /** Width where the line is in sight, px; 0 draws no such line. */
   readonly width: number
@@ -56,6 +61,7 @@ export class LineSet {
   #distances = new InstancedInterleavedBuffer(new Float32Array(0), 2, 1)
 
   constructor(style: LineStyle) {
+    if (style.width < CAPPED_FROM) this.#geometry.setIndex(BODY_ONLY)
     this.#reserve(1)
     this.#plainMaterial.opacity = style.opacity ?? 1
     this.plain = new LineSegments(this.#plainGeometry, this.#plainMaterial)

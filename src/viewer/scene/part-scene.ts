@@ -133,6 +133,9 @@ export class PartScene {
     const apart = (this.#index?.meanEdge ?? 0) * pixelsPerMm
     this.#lines.seam.omit(apart < CROWDED, apart < CROWDED_BEHIND)
     this.#lines.level.omit(apart < CROWDED)
+    // Nothing stands before the face that is turned to the eye, so its rim has no hidden part.
+    this.#lines.top.omit(false, toward[2] > 0)
+    this.#lines.bottom.omit(false, toward[2] < 0)
     this.#faces.setPixelRatio(pixelRatio)
     this.#discs.setPixelRatio(pixelRatio)
   }
