@@ -68,7 +68,7 @@ function useCutFacts(selection: readonly EdgeRef[]): Fact[] {
       </span>,
     ],
     [
-      'bottom edge outside the top edge',
+      'bottom edge outside the top',
       said(known.map(({ bottomOffset }) => formatLength(bottomOffset, unit, { sign: true }))),
     ],
     ['jet: wall less taper', said(tilts)],
