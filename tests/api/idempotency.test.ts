@@ -1,30 +1,18 @@
 import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Head } from '../../shared/api/heads.ts'
-import type { Part } from '../../shared/api/parts.ts'
 import type { Setup } from '../../shared/api/setups.ts'
-import {
-  type Agent,
-  expectStatus,
-  ifMatch,
-  makeHead,
-  makePart,
-  makeSetup,
-  startApp,
-  type TestApp,
-} from '../support/app.ts'
+import { expectStatus, ifMatch, makeSetup } from '../support/app.ts'
+import { startShop, type Shop } from '../support/shop.ts'
 
-let app: TestApp
-let engineer: Agent
-let programmer: Agent
-let head: Head
-let part: Part
+let app: Shop['app']
+let engineer: Shop['engineer']
+let programmer: Shop['programmer']
+let head: Shop['head']
+let part: Shop['part']
+
 beforeAll(async () => {
-  app = await startApp('idempotency')
-  engineer = await app.as('engineer')
-  programmer = await app.as('programmer')
-  head = await makeHead(app)
-  part = await makePart(app)
+  ;({ app, engineer, programmer, head, part } = await startShop('idempotency'))
 })
 afterAll(() => app.close())
 

@@ -2,22 +2,10 @@ import fc from 'fast-check'
 import { createHash } from 'node:crypto'
 import { setTimeout as wait } from 'node:timers/promises'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { Head } from '../../shared/api/heads.ts'
-import type { Part } from '../../shared/api/parts.ts'
 import type { Revision, Setup, SetupState } from '../../shared/api/setups.ts'
 import { firstBrokenEntry } from '../../server/features/record/audit.ts'
-import {
-  type Agent,
-  expectStatus,
-  ifMatch,
-  makeHead,
-  makePart,
-  makeSetup,
-  PASSWORD,
-  saveBody,
-  startApp,
-  type TestApp,
-} from '../support/app.ts'
+import { expectStatus, ifMatch, makeSetup, PASSWORD, saveBody } from '../support/app.ts'
+import { startShop, type Shop } from '../support/shop.ts'
 
 /** Two people at once, and any order of acts: the state machine holds, and nothing acknowledged is lost. */
 
@@ -25,18 +13,14 @@ const ROUNDS = 50
 /** ms by which one of two comes first; the largest is more than an approval takes. */
 const LEAD_STEP = 60
 
-let app: TestApp
-let part: Part
-let head: Head
-let programmer: Agent
-let engineer: Agent
+let app: Shop['app']
+let part: Shop['part']
+let head: Shop['head']
+let programmer: Shop['programmer']
+let engineer: Shop['engineer']
 
 beforeAll(async () => {
-  app = await startApp('races')
-  part = await makePart(app)
-  head = await makeHead(app)
-  programmer = await app.as('programmer')
-  engineer = await app.as('engineer')
+  ;({ app, part, head, programmer, engineer } = await startShop('races'))
 })
 afterAll(async () => {
   expect(await firstBrokenEntry(app.services.dataSource.manager)).toBeNull()

@@ -1,29 +1,15 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { Head } from '../../shared/api/heads.ts'
-import type { Part } from '../../shared/api/parts.ts'
 import type { Setup } from '../../shared/api/setups.ts'
-import {
-  type Agent,
-  expectStatus,
-  ifMatch,
-  makeHead,
-  makePart,
-  makeSetup,
-  saveBody,
-  startApp,
-  type TestApp,
-} from '../support/app.ts'
+import { expectStatus, ifMatch, makePart, makeSetup, saveBody } from '../support/app.ts'
+import { startShop, type Shop } from '../support/shop.ts'
 
-let app: TestApp
-let part: Part
-let head: Head
-let programmer: Agent
+let app: Shop['app']
+let part: Shop['part']
+let head: Shop['head']
+let programmer: Shop['programmer']
 
 beforeAll(async () => {
-  app = await startApp('setup_reading')
-  part = await makePart(app)
-  head = await makeHead(app)
-  programmer = await app.as('programmer')
+  ;({ app, part, head, programmer } = await startShop('setup_reading'))
 })
 afterAll(() => app.close())
 

@@ -1,33 +1,18 @@
 import { createHash } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { Head } from '../../shared/api/heads.ts'
 import type { Part } from '../../shared/api/parts.ts'
 import type { Revision, RevisionRow, Setup } from '../../shared/api/setups.ts'
-import {
-  type Agent,
-  expectStatus,
-  ifMatch,
-  makeHead,
-  makePart,
-  makeSetup,
-  PASSWORD,
-  saveBody,
-  startApp,
-  type TestApp,
-} from '../support/app.ts'
+import { expectStatus, ifMatch, makeHead, makeSetup, PASSWORD, saveBody } from '../support/app.ts'
+import { startShop, type Shop } from '../support/shop.ts'
 
-let app: TestApp
-let part: Part
-let head: Head
-let programmer: Agent
-let engineer: Agent
+let app: Shop['app']
+let part: Shop['part']
+let head: Shop['head']
+let programmer: Shop['programmer']
+let engineer: Shop['engineer']
 
 beforeAll(async () => {
-  app = await startApp('setups')
-  part = await makePart(app)
-  head = await makeHead(app)
-  programmer = await app.as('programmer')
-  engineer = await app.as('engineer')
+  ;({ app, part, head, programmer, engineer } = await startShop('setups'))
 })
 afterAll(() => app.close())
 

@@ -7,10 +7,10 @@ import { Page, PageBody, PageHead } from '../../app/Page.tsx'
 import { Choice } from '../../ui/Choice.tsx'
 import { DataTable } from '../../ui/DataTable.tsx'
 import { SearchField } from '../../ui/SearchField.tsx'
-import { useSetupColumns } from './columns.tsx'
+import { setupSorts, useSetupColumns } from '../../ui/setup-columns.tsx'
+import { partColumn } from './columns.tsx'
 import { WelderSetups } from './WelderSetups.tsx'
 
-const sorts = ['savedAt', '-savedAt', 'name', '-name'] as const
 const PAGE_SIZE = 50
 
 /** Every set-up; a welder gets the approved ones first, each with its joints to open. */
@@ -18,9 +18,9 @@ export default function SetupsPage() {
   const { role } = useCurrentUser()
   const list = useListParams(['q', 'state'])
   const state = oneOf(list.values.state, setupStates)
-  const sort = oneOf(list.sort, sorts) ?? '-savedAt'
+  const sort = oneOf(list.sort, setupSorts) ?? '-savedAt'
   const query = useQuery(setupsQuery({ q: list.values.q, state, sort, page: list.page, pageSize: PAGE_SIZE }))
-  const columns = useSetupColumns()
+  const columns = [partColumn, ...useSetupColumns()]
   const empty = <p>No set-up yet. A programmer starts one from a part.</p>
   return (
     <Page>

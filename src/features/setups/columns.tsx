@@ -1,51 +1,14 @@
-import { Link } from 'react-router-dom'
 import type { SetupRow } from '../../../shared/api/setups.ts'
-import { formatLength } from '../../../shared/units/format.ts'
-import { useUnit } from '../../app/preferences.ts'
 import type { Column } from '../../ui/DataTable.tsx'
-import { StateMark } from '../../ui/StateMark.tsx'
-import { formatInstant } from '../../ui/when.ts'
 
-export function useSetupColumns(): Column<SetupRow>[] {
-  const unit = useUnit()
-  return [
-    {
-      key: 'part',
-      head: 'Part',
-      lead: true,
-      cell: ({ partNumber, partName }) => (
-        <>
-          <span className="font-medium">{partNumber}</span> {partName}
-        </>
-      ),
-    },
-    {
-      key: 'name',
-      head: 'Set-up',
-      sort: 'name',
-      lead: true,
-      cell: ({ id, name }) => (
-        <Link to={`/setups/${id}`} className="row-link font-bold hover:underline">
-          {name}
-        </Link>
-      ),
-    },
-    { key: 'state', head: 'State', cell: (setup) => <StateMark {...setup} /> },
-    {
-      key: 'plate',
-      head: 'Plate',
-      cell: ({ material, thickness }) => `${material} · ${formatLength(thickness, unit)}`,
-    },
-    { key: 'head', head: 'Head', cell: ({ headName }) => headName },
-    {
-      key: 'savedAt',
-      head: 'Saved',
-      sort: 'savedAt',
-      cell: ({ savedAt, savedBy }) => (
-        <span className="text-muted">
-          {formatInstant(savedAt)}, {savedBy.name}
-        </span>
-      ),
-    },
-  ]
+/** Which part a set-up is of. */
+export const partColumn: Column<SetupRow> = {
+  key: 'part',
+  head: 'Part',
+  lead: true,
+  cell: ({ partNumber, partName }) => (
+    <>
+      <span className="font-medium">{partNumber}</span> {partName}
+    </>
+  ),
 }
