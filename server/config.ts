@@ -21,7 +21,7 @@ const environmentSchema = z.object({
   LOG_LEVEL: z.enum(['silent', 'fatal', 'error', 'warn', 'info', 'debug']).default('info'),
   TRUST_PROXY: whole(0, 10).default(0),
   WEB_DIR: z.string().optional(),
-  MIN_FREE_DISK_MB: whole(0, 10_000_000).default(500),
+  MIN_FREE_DISK_MB: whole(0, 10_000_000).default(200),
   FIRST_ADMIN_EMAIL: z.email().optional(),
   FIRST_ADMIN_PASSWORD: z.string().min(8).max(256).optional(),
 })

@@ -49,7 +49,7 @@ async function start() {
   say('migrating, seeding the demo, starting the server')
   server = spawn(process.execPath, ['--enable-source-maps', path.join(root, 'dist/server/server/main.js')], {
     cwd: root,
-    env: { DEMO: '1', ...process.env, PORT: String(port), DATABASE_URL: url },
+    env: { DEMO: '1', NODE_ENV: 'production', ...process.env, PORT: String(port), DATABASE_URL: url },
     stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
     detached: true, // Ctrl-C reaches this process alone, which stops the server in order
   })
