@@ -58,6 +58,20 @@ describe('margin notes', () => {
     expect(note!.places.slice(0, 2).map(({ name }) => name)).toEqual(['C1', 'C2'])
   })
 
+  it('adds the lengths in inches when inches are shown, from the exact numbers', () => {
+    const inches: NoteFormat = { ...format, unit: 'in', length: (mm) => `${(mm / 25.4).toFixed(4)} in` }
+    const event: Finding = {
+      code: 'walls-break-through',
+      severity: 'stop',
+      value: 17.1383,
+      limit: 25.4,
+      message: 'They meet at 17.14 mm; the plate is 25.4 mm thick.',
+    }
+    expect(notesOf([event], format)[0]!.message).toBe(event.message)
+    expect(notesOf([event], inches)[0]!.message).toBe(`${event.message} That is 0.6747 in against 1.0000 in.`)
+    expect(notesOf([edgeOver(1)], inches)[0]!.message).toBe('Edge e2 needs 57°.')
+  })
+
   it('says the range and the limit of gathered angles', () => {
     const [note] = notesOf(
       [56, 57, 58, 59].map((value, i) => edgeOver(i, value)),
