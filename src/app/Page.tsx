@@ -32,14 +32,14 @@ export function PageHead({ title, label = 'Sheet', cells = [], actions }: PageHe
   }, [title])
   return (
     <header className="flex flex-wrap gap-px bg-rule border-b border-rule print:hidden">
-      <div className="px-3 py-1.5 max-sm:grow bg-panel max-w-full sm:min-w-40">
+      <div className="px-3 py-1.5 max-xl:grow bg-panel max-w-full sm:min-w-40">
         <p className="text-label uppercase text-muted" aria-hidden="true">
           {label}
         </p>
         <h1 className="font-medium break-words">{title}</h1>
       </div>
       {cells.map((cell) => (
-        <div key={cell.label} className="px-3 py-1.5 bg-panel max-sm:grow min-w-0">
+        <div key={cell.label} className="px-3 py-1.5 bg-panel max-xl:grow min-w-0">
           <p className="text-label uppercase text-muted">{cell.label}</p>
           <div className={`font-medium ${tones[cell.tone ?? 'plain']}`}>{cell.value}</div>
         </div>
