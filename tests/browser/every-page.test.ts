@@ -61,9 +61,18 @@ async function pagesOf(person: DemoPerson, page: Page): Promise<string[]> {
     case 'welder':
       return ['/setups', `/setups/${approved.id}/joint/0-0`, `/setups/${approved.id}/sheet`]
     case 'admin':
-      return ['/people', '/heads', '/record']
+      return ['/people', '/heads']
   }
 }
+
+it('sees a serious fault where there is one', async () => {
+  const { context, page } = await visit(browser)
+  await page.setContent(
+    '<!doctype html><html lang="en"><title>x</title><main><button></button></main></html>',
+  )
+  expect(await seriousAxeFindings(page)).toEqual(['button-name: button'])
+  await context.close()
+})
 
 const themes = ['paper', 'tank'] as const
 const people: readonly DemoPerson[] = ['programmer', 'engineer', 'welder', 'admin']
@@ -88,18 +97,20 @@ describe.each(themes)('in the %s theme', (theme) => {
     await signIn(page, person)
     const seen: Record<string, string[]> = {}
     for (const path of await pagesOf(person, page)) {
-      await page.setViewportSize(sizes.desktop)
       await page.goto(path)
       await page.getByRole('main').waitFor()
       await page.waitForLoadState('networkidle')
       if ((await page.locator('[data-frames]').count()) > 0) await settledPart(page)
       const found = await seriousAxeFindings(page)
-      await page.setViewportSize(sizes.phone)
-      await page.waitForTimeout(200)
-      // Colours do not depend on the size: one theme is enough at the second size.
-      if (theme === 'tank') found.push(...(await seriousAxeFindings(page)).map((line) => `phone: ${line}`))
-      const spill = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
-      if (spill > 0) found.push(`phone: ${spill} px wider than the screen`)
+      // Colours do not depend on the size, nor widths on the theme: one theme is enough at the second size.
+      if (theme === 'tank') {
+        await page.setViewportSize(sizes.phone)
+        await page.waitForTimeout(200)
+        found.push(...(await seriousAxeFindings(page)).map((line) => `phone: ${line}`))
+        const spill = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
+        if (spill > 0) found.push(`phone: ${spill} px wider than the screen`)
+        await page.setViewportSize(sizes.desktop)
+      }
       if (found.length > 0) seen[path.replace(/[0-9a-f-]{36}/, ':id')] = found
     }
     expect(seen).toEqual({})
