@@ -1,4 +1,4 @@
-import { demoJet, edgeAt, jointOf, loopEdgesAt, wallsOf, type DemoPart } from './demo-part.ts'
+import { demoJet, jointOf, loopEdgesAt, wallsOf, type DemoPart } from './demo-part.ts'
 import { block, circle, dxfText, insert, text } from './dxf-text.ts'
 
 const [OUTER, INNER, BOLTS, THICKNESS] = [200, 130, 165, 20]
@@ -41,8 +41,8 @@ export const ringFlange: DemoPart = {
         ),
       ],
       joints: (loops) => [
-        jointOf(edgeAt(loops, { x: 0, y: OUTER }), 'J1', 2, 'square'),
-        jointOf(edgeAt(loops, { x: 0, y: INNER }), 'J2', 2, 'square'),
+        ...loopEdgesAt(loops, { x: 0, y: OUTER }).map((edge) => jointOf(edge, 'J1', 2, 'square')),
+        ...loopEdgesAt(loops, { x: 0, y: INNER }).map((edge) => jointOf(edge, 'J2', 2, 'square')),
       ],
       note: 'Bolt holes stay square.',
       state: 'approved',
