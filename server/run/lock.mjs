@@ -18,17 +18,27 @@ export function takeLock() {
   fs.writeFileSync(file, JSON.stringify({ pid: process.pid }))
 }
 
+/** Gives the lock back; one that another start holds is left alone. */
 export function releaseLock() {
-  fs.rmSync(file, { force: true })
+  if (readPid() === process.pid) fs.rmSync(file, { force: true })
+}
+
+/** @returns {number | null} */
+function readPid() {
+  try {
+    return JSON.parse(fs.readFileSync(file, 'utf8')).pid
+  } catch {
+    return null
+  }
 }
 
 /** @returns {{ pid: number } | null} the live holder */
 function readHolder() {
+  const pid = readPid()
+  if (pid === null || pid === process.pid || !isAlive(pid)) return null
   try {
-    const holder = JSON.parse(fs.readFileSync(file, 'utf8'))
-    if (holder.pid === process.pid || !isAlive(holder.pid)) return null
-    const command = fs.readFileSync(`/proc/${holder.pid}/cmdline`, 'utf8')
-    return command.includes('server/run/') ? holder : null
+    const command = fs.readFileSync(`/proc/${pid}/cmdline`, 'utf8')
+    return command.includes('server/run/') ? { pid } : null
   } catch {
     return null
   }
