@@ -5,8 +5,8 @@ import { changePasswordBody } from '../../../shared/api/people.ts'
 import { isCode } from '../../api/errors.ts'
 import { changePasswordMutation } from '../../api/session.ts'
 import { Button } from '../../ui/Button.tsx'
-import { controlClass, Field } from '../../ui/Field.tsx'
 import { ErrorNotice, Notice } from '../../ui/Notice.tsx'
+import { PasswordField } from '../../ui/PasswordField.tsx'
 
 export function PasswordForm() {
   const change = useMutation(changePasswordMutation(useQueryClient()))
@@ -23,35 +23,19 @@ export function PasswordForm() {
         <Notice tone="good">The password is changed. Your other sessions have ended.</Notice>
       )}
       {change.isError && !wrong && <ErrorNotice error={change.error} />}
-      <Field
+      <PasswordField
         label="Password now"
         error={wrong ? 'That is not your password. Type it again.' : errors.current && 'Type your password.'}
-      >
-        {(control) => (
-          <input
-            {...control}
-            {...form.register('current')}
-            type="password"
-            autoComplete="current-password"
-            className={controlClass}
-          />
-        )}
-      </Field>
-      <Field
+        kind="current"
+        registration={form.register('current')}
+      />
+      <PasswordField
         label="New password"
         hint="8 to 256 characters; several words are easier to remember than signs"
         error={errors.next && 'At least 8 and at most 256 characters.'}
-      >
-        {(control) => (
-          <input
-            {...control}
-            {...form.register('next')}
-            type="password"
-            autoComplete="new-password"
-            className={controlClass}
-          />
-        )}
-      </Field>
+        kind="new"
+        registration={form.register('next')}
+      />
       <Button type="submit" look="main" className="self-start" busy={change.isPending && 'Changing…'}>
         Change the password
       </Button>

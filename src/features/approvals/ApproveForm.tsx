@@ -9,6 +9,7 @@ import { Button } from '../../ui/Button.tsx'
 import { controlClass, Field } from '../../ui/Field.tsx'
 import { announce } from '../../ui/announce.ts'
 import { DecisionProblem } from './DecisionProblem.tsx'
+import { PasswordField } from '../../ui/PasswordField.tsx'
 
 const formSchema = approveBody.omit({ hash: true })
 
@@ -48,20 +49,12 @@ export function ApproveForm({ setup }: { setup: Setup }) {
           <textarea {...control} {...form.register('remark')} rows={2} className={controlClass} />
         )}
       </Field>
-      <Field
+      <PasswordField
         label="Your password, as your signature"
         error={wrong ? 'That is not your password. Type it again.' : errors.password && 'Type your password.'}
-      >
-        {(control) => (
-          <input
-            {...control}
-            {...form.register('password')}
-            type="password"
-            autoComplete="current-password"
-            className={controlClass}
-          />
-        )}
-      </Field>
+        kind="current"
+        registration={form.register('password')}
+      />
       <Button type="submit" look="main" size="glove" busy={approve.isPending && 'Approving…'}>
         Approve revision {revision.number}
       </Button>

@@ -11,6 +11,7 @@ import { controlClass, Field } from '../../ui/Field.tsx'
 import { ErrorNotice } from '../../ui/Notice.tsx'
 import { Select } from '../../ui/Select.tsx'
 import { roleWords } from './role-words.ts'
+import { PasswordField } from '../../ui/PasswordField.tsx'
 
 export function AddPersonDialog({ onClose }: { onClose: () => void }) {
   const create = useMutation(createPersonMutation(useQueryClient()))
@@ -58,21 +59,13 @@ export function AddPersonDialog({ onClose }: { onClose: () => void }) {
             />
           )}
         </Field>
-        <Field
+        <PasswordField
           label="First password"
           hint="8 to 256 characters. Give it to them in person; they change it under their account."
           error={errors.password && 'At least 8 and at most 256 characters.'}
-        >
-          {(control) => (
-            <input
-              {...control}
-              {...form.register('password')}
-              type="password"
-              autoComplete="new-password"
-              className={controlClass}
-            />
-          )}
-        </Field>
+          kind="new"
+          registration={form.register('password')}
+        />
         <div className="flex flex-wrap gap-2">
           <Button type="submit" look="main" busy={create.isPending && 'Adding…'}>
             Add

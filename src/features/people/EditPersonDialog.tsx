@@ -15,6 +15,7 @@ import { ErrorNotice, Notice } from '../../ui/Notice.tsx'
 import { Select } from '../../ui/Select.tsx'
 import { changesOf } from './changes.ts'
 import { roleWords } from './role-words.ts'
+import { PasswordField } from '../../ui/PasswordField.tsx'
 
 const formSchema = z.strictObject({
   name: createUserBody.shape.name,
@@ -81,21 +82,13 @@ export function EditPersonDialog({ person, onClose }: { person: User; onClose: (
           )}
         </Field>
         {person.id !== me.id && <Checkbox {...form.register('disabled')}>Disabled: may not sign in</Checkbox>}
-        <Field
+        <PasswordField
           label="New password"
           hint="Leave it empty to keep the old one"
           error={errors.password && 'At least 8 and at most 256 characters.'}
-        >
-          {(control) => (
-            <input
-              {...control}
-              {...form.register('password')}
-              type="password"
-              autoComplete="new-password"
-              className={controlClass}
-            />
-          )}
-        </Field>
+          kind="new"
+          registration={form.register('password')}
+        />
         <p className="text-small text-muted">
           A new role, a new password or disabling ends their sessions at once.
         </p>

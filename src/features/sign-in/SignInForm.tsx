@@ -7,6 +7,7 @@ import { aboutQuery, signInMutation } from '../../api/session.ts'
 import { Button } from '../../ui/Button.tsx'
 import { controlClass, Field } from '../../ui/Field.tsx'
 import { ErrorNotice, Notice } from '../../ui/Notice.tsx'
+import { PasswordField } from '../../ui/PasswordField.tsx'
 
 interface SignInFormProps {
   /** Filled in beforehand when someone signs in again. */
@@ -50,17 +51,12 @@ export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) 
           />
         )}
       </Field>
-      <Field label="Password" error={errors.password && 'Type your password.'}>
-        {(control) => (
-          <input
-            {...control}
-            {...form.register('password')}
-            type="password"
-            autoComplete="current-password"
-            className={controlClass}
-          />
-        )}
-      </Field>
+      <PasswordField
+        label="Password"
+        error={errors.password && 'Type your password.'}
+        kind="current"
+        registration={form.register('password')}
+      />
       <Button type="submit" look="main" size="glove" busy={signIn.isPending && 'Signing in…'}>
         Sign in
       </Button>
