@@ -1,18 +1,34 @@
 /** The arrows between folders. `tests/unit/architecture.test.ts` runs them; DEVELOPERS.md draws them. */
 
+/** The core: the stages of the pipeline in order. Each may look into those before it, never upward. */
+const stages = [
+  'units',
+  'geometry',
+  'walls',
+  'prep',
+  'contours',
+  'seams',
+  'events',
+  'solid',
+  'jet',
+  'passes',
+  'interference',
+  'head',
+  'way-out',
+  'process',
+  'accuracy',
+  'findings',
+  'evaluate',
+]
+
 /** Inside shared, each folder with the folders that it may look into. */
 const sharedArrows = {
-  units: [],
-  geometry: [],
+  ...Object.fromEntries(stages.map((stage, i) => [stage, stages.slice(0, i)])),
   drawing: ['geometry', 'units'],
-  body: ['geometry'],
-  jet: ['geometry', 'body', 'units'],
-  findings: ['geometry', 'body', 'jet', 'units'],
-  evaluate: ['geometry', 'body', 'jet', 'findings', 'units'],
-  setup: ['geometry', 'body', 'jet', 'findings', 'evaluate', 'units'],
-  joint: ['geometry', 'body', 'jet', 'evaluate', 'setup', 'units'],
-  files: ['geometry', 'body', 'jet', 'findings', 'evaluate', 'setup', 'joint', 'units'],
-  api: ['geometry', 'drawing', 'evaluate', 'findings', 'setup'],
+  setup: stages,
+  joint: [...stages, 'setup'],
+  files: [...stages, 'setup', 'joint'],
+  api: [...stages, 'drawing', 'setup'],
 }
 
 /** Inside src, the rooms below the screens; screens (`features`) may use them all. */

@@ -1,10 +1,11 @@
-import type { EdgeRef } from '../../shared/body/types.ts'
-import type { Datum } from '../../shared/body/types.ts'
-import type { JetSpec, WallSpec } from '../../shared/evaluate/schema.ts'
+import type { EdgeRef } from '../../shared/walls/types.ts'
+import type { Datum } from '../../shared/walls/types.ts'
+import type { JetSpec } from '../../shared/evaluate/schema.ts'
+import type { WallSpec } from '../../shared/walls/schema.ts'
 import { segmentFromVertices } from '../../shared/geometry/bulge.ts'
 import { pointAt } from '../../shared/geometry/segment.ts'
 import type { Point, VertexLoop } from '../../shared/geometry/types.ts'
-import { prepFacets, type Prep } from '../../shared/setup/preps.ts'
+import { prepFacets, type Prep } from '../../shared/prep/preps.ts'
 import type { JointSpec, SetupContent } from '../../shared/setup/schema.ts'
 
 /** Invented work for an invented shop: Saltmarsh Works cuts plate for a tidal footbridge. */

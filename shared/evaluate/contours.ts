@@ -1,7 +1,8 @@
-import { contourAt } from '../body/contour.ts'
-import { levelsOf } from '../body/levels.ts'
-import type { SoundRange } from '../body/range.ts'
-import type { Body, Contour, ContourSegment } from '../body/types.ts'
+import { contourAt } from '../contours/contour.ts'
+import { levelsOf } from '../walls/levels.ts'
+import type { SoundRange } from '../events/range.ts'
+import type { Body } from '../walls/types.ts'
+import type { Contour, ContourSegment } from '../contours/types.ts'
 import type { EvaluatedContour } from './schema.ts'
 
 /** Contours at the top, at every facet end and at the bottom, as far as they are sound. */

@@ -1,5 +1,5 @@
-import { cornersOf, seamTiltOf } from '../body/corners.ts'
-import type { Corner } from '../body/types.ts'
+import { cornersOf, seamTiltOf } from '../seams/corners.ts'
+import type { Corner } from '../seams/types.ts'
 import { cornerInDrawing } from '../geometry/orient.ts'
 import { degrees, radians } from '../units/angle.ts'
 import type { ReadRequest } from './read.ts'

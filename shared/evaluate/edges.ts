@@ -1,5 +1,5 @@
-import type { Contour } from '../body/types.ts'
-import { reachAt } from '../body/wall.ts'
+import type { Contour } from '../contours/types.ts'
+import { reachAt } from '../walls/wall.ts'
 import { edgeInDrawing } from '../geometry/orient.ts'
 import { segmentLength } from '../geometry/segment.ts'
 import { radians } from '../units/angle.ts'

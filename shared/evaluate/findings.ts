@@ -1,5 +1,6 @@
-import type { SoundRange } from '../body/range.ts'
-import type { Contour, EdgeRef } from '../body/types.ts'
+import type { SoundRange } from '../events/range.ts'
+import type { Contour } from '../contours/types.ts'
+import type { EdgeRef } from '../walls/types.ts'
 import { concaveFillets, cornerOverLimit, smoothStep } from '../findings/corner.ts'
 import { edgeOverLimit, facetsCutIn } from '../findings/edge.ts'
 import { narrowestWidth } from '../findings/hole-width.ts'

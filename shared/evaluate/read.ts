@@ -1,6 +1,6 @@
-import { edgeName } from '../body/names.ts'
-import type { Body, Wall } from '../body/types.ts'
-import { squareWall } from '../body/wall.ts'
+import { edgeName } from '../walls/names.ts'
+import type { Body, Wall } from '../walls/types.ts'
+import { squareWall } from '../walls/wall.ts'
 import type { FacetDegrees } from '../findings/place.ts'
 import { loopFromVertices } from '../geometry/bulge.ts'
 import { edgeInDrawing, orientLoops } from '../geometry/orient.ts'
@@ -8,7 +8,8 @@ import { profileProblems, type ProfileProblem } from '../geometry/problems.ts'
 import { radians } from '../units/angle.ts'
 import { formatNumber } from '../units/format.ts'
 import { EvaluationError, type EvaluationErrorCode } from './error.ts'
-import type { EvaluationRequest, WallSpec } from './schema.ts'
+import type { EvaluationRequest } from './schema.ts'
+import type { WallSpec } from '../walls/schema.ts'
 
 /**
  * A request made sound. The body runs each loop with the material on its left; where the caller's loop ran the

@@ -1,21 +1,9 @@
 import * as z from 'zod'
 import { findingSchema } from '../findings/schema.ts'
 import { vertexLoopsSchema } from '../geometry/schema.ts'
+import { datumSchema, wallSchema } from '../walls/schema.ts'
 
 /** The front door's request and answer: mm, degrees from vertical, positive outward. */
-
-export const datumSchema = z.enum(['top', 'bottom', 'root'])
-
-export const facetSchema = z.strictObject({
-  depth: z.number().positive().max(1_000).describe('depth at which the facet ends, mm'),
-  tilt: z.number().gt(-90).lt(90).describe('degrees from vertical, positive outward'),
-})
-
-export const wallSchema = z.strictObject({
-  loop: z.int().min(0).max(2_000),
-  edge: z.int().min(0).max(20_000).describe('edge i starts at vertex i'),
-  facets: z.array(facetSchema).min(1).max(3),
-})
 
 export const jetSchema = z.strictObject({
   kerf: z.number().positive().max(10).describe('width at the top face, mm'),
@@ -99,8 +87,6 @@ export const evaluationSchema = z.strictObject({
   findings: z.array(findingSchema),
 })
 
-export type WallSpec = z.infer<typeof wallSchema>
-export type FacetSpec = z.infer<typeof facetSchema>
 export type JetSpec = z.infer<typeof jetSchema>
 export type HeadLimits = z.infer<typeof headLimitsSchema>
 /** What a caller may write (datum may be left out). */

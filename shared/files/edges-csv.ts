@@ -1,5 +1,6 @@
-import { cornerName, edgeKey, edgeName } from '../body/names.ts'
-import type { EvaluatedCorner, Evaluation, FacetSpec } from '../evaluate/schema.ts'
+import { cornerName, edgeKey, edgeName } from '../walls/names.ts'
+import type { EvaluatedCorner, Evaluation } from '../evaluate/schema.ts'
+import type { FacetSpec } from '../walls/schema.ts'
 import { anglesThreeWays } from '../joint/angles.ts'
 import { rootFaceOf } from '../joint/section.ts'
 import { describeWall } from '../setup/describe.ts'

@@ -1,5 +1,5 @@
-import { cornerName, edgeName } from '../body/names.ts'
-import type { CornerRef } from '../body/types.ts'
+import { cornerName, edgeName } from '../walls/names.ts'
+import type { CornerRef } from '../walls/types.ts'
 import { degrees } from '../units/angle.ts'
 import { formatAngle, formatNumber } from '../units/format.ts'
 import { cureCorner, type CornerWalls } from './corner-cure.ts'

@@ -1,4 +1,4 @@
-import { edgeName } from '../body/names.ts'
+import { edgeName } from '../walls/names.ts'
 import { formatAngle } from '../units/format.ts'
 import {
   LIMIT_ROUNDING,

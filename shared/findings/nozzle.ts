@@ -1,5 +1,5 @@
-import { cornerName, edgeName } from '../body/names.ts'
-import type { CornerRef, EdgeRef } from '../body/types.ts'
+import { cornerName, edgeName } from '../walls/names.ts'
+import type { CornerRef, EdgeRef } from '../walls/types.ts'
 import { rimClearance, standoffFor, type Nozzle } from '../jet/nozzle.ts'
 import { radians } from '../units/angle.ts'
 import { formatAngle, formatNumber } from '../units/format.ts'

@@ -1,5 +1,6 @@
-import { edgeName } from '../body/names.ts'
-import type { BodyEvent, EdgeRef } from '../body/types.ts'
+import { edgeName } from '../walls/names.ts'
+import type { BodyEvent } from '../events/types.ts'
+import type { EdgeRef } from '../walls/types.ts'
 import { formatNumber } from '../units/format.ts'
 import type { Cure, Finding } from './schema.ts'
 

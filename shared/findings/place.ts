@@ -1,4 +1,4 @@
-import type { EdgeRef } from '../body/types.ts'
+import type { EdgeRef } from '../walls/types.ts'
 
 /** What the makers of findings are told. Degrees and mm, the caller's numbering. */
 

@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../evaluate/schema.ts'
+import type { FacetSpec } from '../walls/schema.ts'
 import type { Mate } from './section.ts'
 
 /** The trade's name for a joint's preparation. */

@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../evaluate/schema.ts'
+import type { FacetSpec } from '../walls/schema.ts'
 import { radians } from '../units/angle.ts'
 
 /**

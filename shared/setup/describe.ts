@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../evaluate/schema.ts'
+import type { FacetSpec } from '../walls/schema.ts'
 import { formatAngle, formatLength } from '../units/format.ts'
 import type { DisplayUnit } from '../units/length.ts'
 

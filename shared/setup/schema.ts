@@ -1,5 +1,6 @@
 import * as z from 'zod'
-import { datumSchema, jetSchema, wallSchema, type EvaluationRequest } from '../evaluate/schema.ts'
+import { datumSchema, wallSchema } from '../walls/schema.ts'
+import { jetSchema, type EvaluationRequest } from '../evaluate/schema.ts'
 import { vertexLoopsSchema } from '../geometry/schema.ts'
 
 /**

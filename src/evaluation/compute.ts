@@ -1,4 +1,4 @@
-import type { BodyMesh } from '../../shared/body/types.ts'
+import type { BodyMesh } from '../../shared/solid/types.ts'
 import { EvaluationError } from '../../shared/evaluate/error.ts'
 import { evaluateWithMesh } from '../../shared/evaluate/evaluate.ts'
 import type { Evaluation, EvaluationRequest } from '../../shared/evaluate/schema.ts'

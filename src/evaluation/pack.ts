@@ -1,4 +1,4 @@
-import type { BodyMesh } from '../../shared/body/types.ts'
+import type { BodyMesh } from '../../shared/solid/types.ts'
 
 /**
  * The mesh with all its line points in one buffer, and the buffers to hand over: a thousand small ones would

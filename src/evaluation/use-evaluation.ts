@@ -1,5 +1,5 @@
 import { useEffect, useRef, useState } from 'react'
-import type { BodyMesh } from '../../shared/body/types.ts'
+import type { BodyMesh } from '../../shared/solid/types.ts'
 import type { Evaluation, EvaluationRequest } from '../../shared/evaluate/schema.ts'
 import type { Evaluated } from './compute.ts'
 import { LatestQueue, type WorkerLike } from './queue.ts'

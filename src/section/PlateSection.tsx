@@ -1,5 +1,5 @@
 import { useMemo, type CSSProperties, type ReactNode } from 'react'
-import type { FacetSpec } from '../../shared/evaluate/schema.ts'
+import type { FacetSpec } from '../../shared/walls/schema.ts'
 import type { DisplayUnit } from '../../shared/units/length.ts'
 import type { Theme } from '../theme/tilt-colour.ts'
 import { describeSection } from './describe.ts'

@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../../shared/evaluate/schema.ts'
+import type { FacetSpec } from '../../shared/walls/schema.ts'
 import { jointSection, type SectionPoint } from '../../shared/joint/section.ts'
 import { formatAngle, formatLength } from '../../shared/units/format.ts'
 import type { DisplayUnit } from '../../shared/units/length.ts'

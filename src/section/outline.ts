@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../../shared/evaluate/schema.ts'
+import type { FacetSpec } from '../../shared/walls/schema.ts'
 import { jointSection, sectionOf, type SectionPoint } from '../../shared/joint/section.ts'
 import type { SectionSpec } from './types.ts'
 

@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../../shared/evaluate/schema.ts'
+import type { FacetSpec } from '../../shared/walls/schema.ts'
 import type { Mate, SectionPoint } from '../../shared/joint/section.ts'
 
 /**

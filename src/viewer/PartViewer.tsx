@@ -1,6 +1,6 @@
 import { Canvas } from '@react-three/fiber'
 import { memo, useCallback, useEffect, useId, useMemo, useRef, useState } from 'react'
-import { edgeKey } from '../../shared/body/names.ts'
+import { edgeKey } from '../../shared/walls/names.ts'
 import { standardView } from './camera/standard-views.ts'
 import { useGestures } from './camera/use-gestures.ts'
 import { useFirstView } from './camera/use-first-view.ts'

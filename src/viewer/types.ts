@@ -1,4 +1,5 @@
-import type { BodyMesh, CornerRef, EdgeRef } from '../../shared/body/types.ts'
+import type { BodyMesh } from '../../shared/solid/types.ts'
+import type { CornerRef, EdgeRef } from '../../shared/walls/types.ts'
 import type { Point } from '../../shared/geometry/types.ts'
 import type { Theme } from '../theme/tilt-colour.ts'
 

@@ -1,6 +1,6 @@
 import { loopFromVertices } from '../../shared/geometry/bulge.ts'
 import type { Vertex } from '../../shared/geometry/types.ts'
-import type { Body, Datum, Wall } from '../../shared/body/types.ts'
+import type { Body, Datum, Wall } from '../../shared/walls/types.ts'
 
 /** Plates for tests of the geometry; everything is seeded, nothing is random between runs. */
 

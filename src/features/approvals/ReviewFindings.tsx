@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { formatAngle } from '../../../shared/units/format.ts'
-import { cornerName, edgeName } from '../../../shared/body/names.ts'
+import { cornerName, edgeName } from '../../../shared/walls/names.ts'
 import type { Evaluation } from '../../../shared/evaluate/schema.ts'
 import type { Finding } from '../../../shared/findings/schema.ts'
 import { revisionEvaluationQuery } from '../../api/setups.ts'

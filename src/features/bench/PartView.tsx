@@ -1,5 +1,5 @@
 import { Suspense, useCallback, useMemo } from 'react'
-import { edgeName, parseEdgeKey } from '../../../shared/body/names.ts'
+import { edgeName, parseEdgeKey } from '../../../shared/walls/names.ts'
 import { pointAt } from '../../../shared/geometry/segment.ts'
 import { formatLength } from '../../../shared/units/format.ts'
 import { MM_PER_INCH } from '../../../shared/units/length.ts'

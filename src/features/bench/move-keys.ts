@@ -1,5 +1,5 @@
 import type { KeyboardEvent } from 'react'
-import type { EdgeRef } from '../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import type { Acts } from './model/store.ts'
 
 interface Moves {

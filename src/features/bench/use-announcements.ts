@@ -1,6 +1,6 @@
 import { useEffect, useRef } from 'react'
-import { edgeName } from '../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../shared/body/types.ts'
+import { edgeName } from '../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import { announce } from '../../ui/announce.ts'
 import type { MarginNote } from './model/notes.ts'
 import { facetsOf } from './model/walls.ts'

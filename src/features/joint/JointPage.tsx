@@ -1,5 +1,5 @@
 import { useParams } from 'react-router-dom'
-import { parseEdgeKey } from '../../../shared/body/names.ts'
+import { parseEdgeKey } from '../../../shared/walls/names.ts'
 import { formatLength } from '../../../shared/units/format.ts'
 import { Page, PageBody, PageHead } from '../../app/Page.tsx'
 import { useUnit } from '../../app/preferences.ts'

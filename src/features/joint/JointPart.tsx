@@ -1,5 +1,5 @@
 import { Suspense, useCallback, useMemo, useState } from 'react'
-import { edgeKey } from '../../../shared/body/names.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
 import { evaluationRequestOf, type SetupContent } from '../../../shared/setup/schema.ts'
 import { describeWall } from '../../../shared/setup/describe.ts'
 import type { DisplayUnit } from '../../../shared/units/length.ts'

@@ -1,4 +1,4 @@
-import { parseEdgeKey } from '../../../shared/body/names.ts'
+import { parseEdgeKey } from '../../../shared/walls/names.ts'
 import type { VertexLoop } from '../../../shared/geometry/types.ts'
 import { Notice } from '../../ui/Notice.tsx'
 

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { edgeKey, edgeName } from '../../../shared/body/names.ts'
+import { edgeKey, edgeName } from '../../../shared/walls/names.ts'
 import type { SetupRow } from '../../../shared/api/setups.ts'
 import { describeWall } from '../../../shared/setup/describe.ts'
 import { revisionQuery } from '../../api/setups.ts'

@@ -1,6 +1,6 @@
-import { edgeKey } from '../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../shared/body/types.ts'
-import type { FacetSpec } from '../../../shared/evaluate/schema.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
+import type { FacetSpec } from '../../../shared/walls/schema.ts'
 import type { SetupContent } from '../../../shared/setup/schema.ts'
 
 export interface JointEdge {

@@ -1,5 +1,5 @@
 import { useMemo } from 'react'
-import { edgeName } from '../../../shared/body/names.ts'
+import { edgeName } from '../../../shared/walls/names.ts'
 import type { Evaluation } from '../../../shared/evaluate/schema.ts'
 import { boundsOf } from '../../../shared/geometry/loop.ts'
 import { loopFromVertices } from '../../../shared/geometry/bulge.ts'

@@ -1,4 +1,4 @@
-import { cornerName, edgeName } from '../../../shared/body/names.ts'
+import { cornerName, edgeName } from '../../../shared/walls/names.ts'
 import type { Evaluation } from '../../../shared/evaluate/schema.ts'
 import type { SetupContent } from '../../../shared/setup/schema.ts'
 import { formatAngle, formatLength, formatVolume } from '../../../shared/units/format.ts'

@@ -1,4 +1,4 @@
-import { cornerName, edgeName } from '../../../shared/body/names.ts'
+import { cornerName, edgeName } from '../../../shared/walls/names.ts'
 import type { Finding } from '../../../shared/findings/schema.ts'
 
 const GRAVEST_FIRST = ['stop', 'warning', 'note'] as const

@@ -1,5 +1,5 @@
-import type { EdgeRef } from '../../../shared/body/types.ts'
-import { edgeName } from '../../../shared/body/names.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
+import { edgeName } from '../../../shared/walls/names.ts'
 import { loopFromVertices } from '../../../shared/geometry/bulge.ts'
 import { pointAt, segmentLength } from '../../../shared/geometry/segment.ts'
 import type { Point, Segment, VertexLoop } from '../../../shared/geometry/types.ts'

@@ -1,5 +1,5 @@
 import QRCode from 'qrcode'
-import { edgeKey } from '../../../shared/body/names.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
 import type { SheetRow } from './sheet-model.ts'
 
 /** What the code opens: the first joint of this revision, or its bench where there is none. */

@@ -1,6 +1,7 @@
-import { edgeKey, edgeName } from '../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../shared/body/types.ts'
-import type { Evaluation, FacetSpec } from '../../../shared/evaluate/schema.ts'
+import { edgeKey, edgeName } from '../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
+import type { Evaluation } from '../../../shared/evaluate/schema.ts'
+import type { FacetSpec } from '../../../shared/walls/schema.ts'
 import { anglesThreeWays, type AngleThreeWays } from '../../../shared/joint/angles.ts'
 import type { JointSpec, SetupContent } from '../../../shared/setup/schema.ts'
 

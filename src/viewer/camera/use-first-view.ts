@@ -1,6 +1,6 @@
 import { useEffect, useRef } from 'react'
-import { edgeKey } from '../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../shared/body/types.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import type { MeshIndex } from '../scene/mesh-index.ts'
 import { edgeView } from './edge-view.ts'
 import { standardView } from './standard-views.ts'

@@ -1,5 +1,5 @@
 import { useLayoutEffect, useMemo, useRef } from 'react'
-import { edgeKey } from '../../../shared/body/names.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
 import { cornerPoint, type MeshIndex } from '../scene/mesh-index.ts'
 import type { PartViewerProps } from '../types.ts'
 import { BALLOON_RADIUS } from './balloon.ts'

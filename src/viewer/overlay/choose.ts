@@ -1,5 +1,5 @@
-import { edgeKey } from '../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../shared/body/types.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import type { EdgeLabel } from '../types.ts'
 
 /** Texts that the picture can carry; more would be neither readable nor quick. */

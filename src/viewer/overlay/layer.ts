@@ -1,4 +1,4 @@
-import type { EdgeRef } from '../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import { basisOf, projector, scaleOf, type ScreenPoint, type Vec3 } from '../camera/view-state.ts'
 import type { ViewControl } from '../camera/view-control.ts'
 import type { Picker } from '../pick/picker.ts'

@@ -1,4 +1,4 @@
-import type { EdgeRef } from '../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import type { ScreenPoint, Vec3 } from '../camera/view-state.ts'
 import type { MeshIndex } from '../scene/mesh-index.ts'
 

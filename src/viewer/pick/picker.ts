@@ -1,6 +1,7 @@
 import { BufferAttribute, BufferGeometry, FrontSide, Ray, Vector3 } from 'three'
 import { MeshBVH } from 'three-mesh-bvh'
-import type { EdgeRef, MeshFace } from '../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
+import type { MeshFace } from '../../../shared/solid/types.ts'
 import {
   along,
   basisOf,

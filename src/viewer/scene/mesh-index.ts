@@ -1,5 +1,6 @@
-import { edgeKey } from '../../../shared/body/names.ts'
-import type { BodyMesh, CornerRef, EdgeRef } from '../../../shared/body/types.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
+import type { BodyMesh } from '../../../shared/solid/types.ts'
+import type { CornerRef, EdgeRef } from '../../../shared/walls/types.ts'
 import { boxOf } from './line-runs.ts'
 import { faceOfVertices } from './paint.ts'
 

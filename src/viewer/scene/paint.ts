@@ -1,5 +1,6 @@
-import { edgeKey } from '../../../shared/body/names.ts'
-import type { BodyMesh, EdgeRef, MeshFace } from '../../../shared/body/types.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
+import type { BodyMesh, MeshFace } from '../../../shared/solid/types.ts'
+import type { EdgeRef } from '../../../shared/walls/types.ts'
 import { mix, type Palette, type Rgb } from '../palette.ts'
 
 /** Share of the selection colour in a selected wall. */

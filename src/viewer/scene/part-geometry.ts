@@ -1,5 +1,5 @@
 import { BufferAttribute, BufferGeometry, DynamicDrawUsage } from 'three'
-import type { BodyMesh } from '../../../shared/body/types.ts'
+import type { BodyMesh } from '../../../shared/solid/types.ts'
 
 const HEADROOM = 1.25
 

@@ -1,6 +1,6 @@
 import { Group, Mesh } from 'three'
-import { edgeKey } from '../../../shared/body/names.ts'
-import type { CornerRef, EdgeRef } from '../../../shared/body/types.ts'
+import { edgeKey } from '../../../shared/walls/names.ts'
+import type { CornerRef, EdgeRef } from '../../../shared/walls/types.ts'
 import type { Basis } from '../camera/view-state.ts'
 import { mix, type Palette } from '../palette.ts'
 import { CornerDiscs } from './corner-discs.ts'

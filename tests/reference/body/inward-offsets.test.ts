@@ -1,8 +1,8 @@
 import { readFileSync } from 'node:fs'
 import { describe, expect, test } from 'vitest'
-import { contourArea, contourProblems } from '../../../shared/body/check.ts'
-import { contourAt } from '../../../shared/body/contour.ts'
-import { firstEvent } from '../../../shared/body/event.ts'
+import { contourArea, contourProblems } from '../../../shared/contours/check.ts'
+import { contourAt } from '../../../shared/contours/contour.ts'
+import { firstEvent } from '../../../shared/events/event.ts'
 import { plate } from '../../support/plates.ts'
 
 /** Source of the figures: CGAL 6.0.1, exact weighted straight skeleton; see ../figures/README.md. */

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest'
-import { cornersOf, largestCornerTilt, seamTiltOf } from '../../../shared/body/corners.ts'
+import { cornersOf, largestCornerTilt, seamTiltOf } from '../../../shared/seams/corners.ts'
 import { DEGREE, facets, plate, rectangle, regular } from '../../support/plates.ts'
 
 const degrees = (radians: number | null) => (radians === null ? NaN : radians / DEGREE)

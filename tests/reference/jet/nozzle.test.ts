@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { smallestInteriorAngle } from '../../../shared/jet/seam.ts'
+import { smallestInteriorAngle } from '../../../shared/seams/limits.ts'
 import { standoffFor } from '../../../shared/jet/nozzle.ts'
 import { degrees, radians } from '../../../shared/units/angle.ts'
 

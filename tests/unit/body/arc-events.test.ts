@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest'
-import { contourAt } from '../../../shared/body/contour.ts'
-import { firstEvent } from '../../../shared/body/event.ts'
-import type { Wall } from '../../../shared/body/types.ts'
+import { contourAt } from '../../../shared/contours/contour.ts'
+import { firstEvent } from '../../../shared/events/event.ts'
+import type { Wall } from '../../../shared/walls/types.ts'
 import { facets, plate, rectangle, reversed, circle, DEGREE } from '../../support/plates.ts'
 
 const t = 40

@@ -1,15 +1,15 @@
 import { describe, expect, test } from 'vitest'
-import { bodyProblems } from '../../../shared/body/check.ts'
-import { offsetAt } from '../../../shared/body/datum.ts'
-import { levelsOf } from '../../../shared/body/levels.ts'
-import type { Datum, Wall } from '../../../shared/body/types.ts'
+import { bodyProblems } from '../../../shared/walls/check.ts'
+import { offsetAt } from '../../../shared/walls/datum.ts'
+import { levelsOf } from '../../../shared/walls/levels.ts'
+import type { Datum, Wall } from '../../../shared/walls/types.ts'
 import {
   facetIndexAt,
   outermostReach,
   reachAt,
   tiltAt,
   tiltNeverIncreases,
-} from '../../../shared/body/wall.ts'
+} from '../../../shared/walls/wall.ts'
 import { DEGREE, facets, plate, rectangle, seeded } from '../../support/plates.ts'
 
 const tan = (degrees: number) => Math.tan(degrees * DEGREE)

@@ -1,4 +1,5 @@
-import type { EvaluationRequest, WallSpec } from '../../../shared/evaluate/schema.ts'
+import type { EvaluationRequest } from '../../../shared/evaluate/schema.ts'
+import type { WallSpec } from '../../../shared/walls/schema.ts'
 import type { Vertex } from '../../../shared/geometry/types.ts'
 
 /** Plain shapes and requests for the tests. mm and degrees. */

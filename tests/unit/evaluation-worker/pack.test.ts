@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest'
-import type { BodyMesh } from '../../../shared/body/types.ts'
+import type { BodyMesh } from '../../../shared/solid/types.ts'
 import { packMesh } from '../../../src/evaluation/pack.ts'
 
 const line = (...points: number[]): BodyMesh['lines'][number] => ({

@@ -1,9 +1,10 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { evaluate } from '../../../shared/evaluate/evaluate.ts'
-import type { Evaluation, EvaluationRequest, WallSpec } from '../../../shared/evaluate/schema.ts'
+import type { Evaluation, EvaluationRequest } from '../../../shared/evaluate/schema.ts'
+import type { WallSpec } from '../../../shared/walls/schema.ts'
 import type { Finding } from '../../../shared/findings/schema.ts'
-import { applyTilt } from '../../../shared/setup/preps.ts'
+import { applyTilt } from '../../../shared/prep/preps.ts'
 import { circle, plate, rectangle, tilted, wedge } from '../evaluate/shapes.ts'
 import { spread } from '../../support/spread.ts'
 

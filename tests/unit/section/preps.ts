@@ -1,4 +1,4 @@
-import type { FacetSpec } from '../../../shared/evaluate/schema.ts'
+import type { FacetSpec } from '../../../shared/walls/schema.ts'
 import type { SectionSpec } from '../../../src/section/types.ts'
 
 const facets = (...runs: [depth: number, tilt: number][]): FacetSpec[] =>

@@ -1,12 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { describeWall } from '../../../shared/setup/describe.ts'
-import {
-  applyPrep,
-  applyTilt,
-  prepFacets,
-  wallsForThickness,
-  type Prep,
-} from '../../../shared/setup/preps.ts'
+import { applyPrep, applyTilt, prepFacets, wallsForThickness, type Prep } from '../../../shared/prep/preps.ts'
 
 function facetsOf(prep: Prep, thickness = 20) {
   const made = prepFacets(prep, thickness)

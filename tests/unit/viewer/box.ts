@@ -1,4 +1,4 @@
-import type { BodyMesh, MeshFace, MeshLine } from '../../../shared/body/types.ts'
+import type { BodyMesh, MeshFace, MeshLine } from '../../../shared/solid/types.ts'
 
 /**
  * A plate 100 × 60 × 20 mm with square walls, made by hand: corners counter-clockwise from the origin,

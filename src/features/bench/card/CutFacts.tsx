@@ -1,5 +1,5 @@
-import type { EdgeRef } from '../../../../shared/body/types.ts'
-import { edgeKey } from '../../../../shared/body/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
+import { edgeKey } from '../../../../shared/walls/names.ts'
 import { anglesThreeWays } from '../../../../shared/joint/angles.ts'
 import { formatAngle, formatLength } from '../../../../shared/units/format.ts'
 import { Facts, type Fact } from '../../../ui/Facts.tsx'

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
-import { edgeName } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { edgeName } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import { Button } from '../../../ui/Button.tsx'
 import { sameEdge } from '../model/edges.ts'
 import { useActs, useBench, useContent } from '../model/store.ts'

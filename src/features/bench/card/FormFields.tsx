@@ -1,5 +1,5 @@
 import { useState } from 'react'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import { formatLength } from '../../../../shared/units/format.ts'
 import { Button } from '../../../ui/Button.tsx'
 import { Choice } from '../../../ui/Choice.tsx'

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom'
-import { edgeKey } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { edgeKey } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import type { JointSpec } from '../../../../shared/setup/schema.ts'
 import { Button } from '../../../ui/Button.tsx'
 import { Choice } from '../../../ui/Choice.tsx'

@@ -1,6 +1,6 @@
 import { useCallback } from 'react'
-import { edgeKey } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { edgeKey } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import { formatLength } from '../../../../shared/units/format.ts'
 import { PlateSection } from '../../../section/PlateSection.tsx'
 import type { SectionDimension } from '../../../section/types.ts'

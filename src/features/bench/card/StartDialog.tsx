@@ -1,4 +1,4 @@
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import {
   CHECK_EDITION,
   startingValuesFor,

@@ -1,6 +1,6 @@
 import { useEffect, useMemo, useRef, type KeyboardEvent, type MouseEvent } from 'react'
-import { edgeKey, edgeName } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { edgeKey, edgeName } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import { formatAngle, formatLength } from '../../../../shared/units/format.ts'
 import { allEdges, sameEdge } from '../model/edges.ts'
 import { useActs, useBench, useContent } from '../model/store.ts'

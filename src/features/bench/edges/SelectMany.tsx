@@ -1,4 +1,4 @@
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import type { Loop } from '../../../../shared/geometry/types.ts'
 import { Button } from '../../../ui/Button.tsx'
 import { allEdges, parallelTo, sameLength, sameLoop, smoothChain } from '../model/edges.ts'

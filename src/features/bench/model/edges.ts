@@ -1,4 +1,4 @@
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import { endTangent, segmentLength, startTangent } from '../../../../shared/geometry/segment.ts'
 import type { Loop, Point, Segment } from '../../../../shared/geometry/types.ts'
 

@@ -1,5 +1,5 @@
-import { edgeKey, parseEdgeKey } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { edgeKey, parseEdgeKey } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import type { Loop } from '../../../../shared/geometry/types.ts'
 
 /** What a link to the bench carries: `?rev=7&edges=0-1,0-3&view=…`. */

@@ -1,5 +1,5 @@
-import { cornerName, edgeKey, edgeName } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { cornerName, edgeKey, edgeName } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import type { DisplayUnit } from '../../../../shared/units/length.ts'
 import type { Cure, Finding, FindingCode, FindingSeverity } from '../../../../shared/findings/schema.ts'
 

@@ -1,4 +1,4 @@
-import { prepFacets, type Prep } from '../../../../shared/setup/preps.ts'
+import { prepFacets, type Prep } from '../../../../shared/prep/preps.ts'
 import { heightsOf, squareFacets, type Facets } from './walls.ts'
 
 /** The forms that the edge card offers, told by the face that the groove opens to; `own` is any other chain. */

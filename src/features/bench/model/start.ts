@@ -1,4 +1,4 @@
-import { prepFacets } from '../../../../shared/setup/preps.ts'
+import { prepFacets } from '../../../../shared/prep/preps.ts'
 import type { JointSpec } from '../../../../shared/setup/schema.ts'
 import type { Range, StartingValue } from '../../../../shared/joint/starting-values.ts'
 import { squareFacets, type Facets } from './walls.ts'

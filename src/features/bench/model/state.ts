@@ -1,5 +1,5 @@
 import type { SaveSetup, Setup } from '../../../../shared/api/setups.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import type { Loop } from '../../../../shared/geometry/types.ts'
 import { rangeBetween, sameEdge, toggleEdge } from './edges.ts'
 import { record, redo, settle, startHistory, undo, type History } from './history.ts'

@@ -1,7 +1,7 @@
 import type { SaveSetup } from '../../../../shared/api/setups.ts'
-import { edgeKey } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
-import type { FacetSpec, WallSpec } from '../../../../shared/evaluate/schema.ts'
+import { edgeKey } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
+import type { FacetSpec, WallSpec } from '../../../../shared/walls/schema.ts'
 import type { JointSpec } from '../../../../shared/setup/schema.ts'
 
 /** Reading and changing walls and joints in the content being edited. mm; degrees, positive outward. */

@@ -1,5 +1,5 @@
-import { edgeName } from '../../../../shared/body/names.ts'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import { edgeName } from '../../../../shared/walls/names.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import { describeWall } from '../../../../shared/setup/describe.ts'
 import { formatAngle } from '../../../../shared/units/format.ts'
 import type { DisplayUnit } from '../../../../shared/units/length.ts'

@@ -1,5 +1,5 @@
 import { useEffect, useState, type RefObject } from 'react'
-import { edgeName } from '../../../../shared/body/names.ts'
+import { edgeName } from '../../../../shared/walls/names.ts'
 import { formatAngle, formatLength } from '../../../../shared/units/format.ts'
 import { cellAt, tiltAt } from '../model/strip.ts'
 import { useScene } from '../scene.ts'

@@ -1,5 +1,5 @@
 import { useMemo } from 'react'
-import type { EdgeRef } from '../../../../shared/body/types.ts'
+import type { EdgeRef } from '../../../../shared/walls/types.ts'
 import type { MarginNote } from '../model/notes.ts'
 import { tiltAt } from '../model/strip.ts'
 import { useActs } from '../model/store.ts'

@@ -1,5 +1,5 @@
 import { memo, useCallback, useEffect, useMemo, useRef, type KeyboardEvent, type MouseEvent } from 'react'
-import { edgeKey, edgeName, parseEdgeKey } from '../../../../shared/body/names.ts'
+import { edgeKey, edgeName, parseEdgeKey } from '../../../../shared/walls/names.ts'
 import { tiltColour, type Theme } from '../../../theme/tilt-colour.ts'
 import { labelled, type DrawnCell } from '../model/strip.ts'
 import { useActs, useBench, useContent } from '../model/store.ts'

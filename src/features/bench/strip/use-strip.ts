@@ -1,5 +1,5 @@
 import { useMemo } from 'react'
-import { cornerName, edgeKey } from '../../../../shared/body/names.ts'
+import { cornerName, edgeKey } from '../../../../shared/walls/names.ts'
 import { segmentLength } from '../../../../shared/geometry/segment.ts'
 import {
   breachesOf,

@@ -1,5 +1,5 @@
 import { Link } from 'react-router-dom'
-import { edgeKey, edgeName } from '../../../../shared/body/names.ts'
+import { edgeKey, edgeName } from '../../../../shared/walls/names.ts'
 import { useMay } from '../../../app/current-user.tsx'
 import { contoursUrl, edgesUrl } from '../../../api/setups.ts'
 import { buttonClass } from '../../../ui/Button.tsx'

@@ -1,4 +1,4 @@
-import { cornerName, edgeName } from '../../../../shared/body/names.ts'
+import { cornerName, edgeName } from '../../../../shared/walls/names.ts'
 import { formatAngle, formatLength } from '../../../../shared/units/format.ts'
 import { PageHead, type Cell } from '../../../app/Page.tsx'
 import { formatInstant } from '../../../ui/when.ts'

@@ -1,5 +1,6 @@
 import { firstEvent } from './event.ts'
-import type { Body, BodyEvent } from './types.ts'
+import type { Body } from '../walls/types.ts'
+import type { BodyEvent } from './types.ts'
 
 /** The depths over which the plain contour is right. */
 export interface SoundRange {

@@ -1,12 +1,13 @@
 import { triangulate } from '../geometry/triangulate.ts'
 import type { Point } from '../geometry/types.ts'
-import { CornerMode, frameOf, type Frame } from './frame.ts'
+import { CornerMode, frameOf, type Frame } from '../contours/frame.ts'
 import { chordsPerEdge, meshLevels, type LevelRuns, type MeshLevel } from './mesh-levels.ts'
 import { meshLines } from './mesh-lines.ts'
-import { soundRange } from './range.ts'
+import { soundRange } from '../events/range.ts'
 import { MeshSink } from './mesh-sink.ts'
-import type { Body, BodyMesh } from './types.ts'
-import { facetIndexAt } from './wall.ts'
+import type { Body } from '../walls/types.ts'
+import type { BodyMesh } from './types.ts'
+import { facetIndexAt } from '../walls/wall.ts'
 
 /**
  * Triangles of the body over its sound range (`soundRange`); null when that has no depth. Arcs become chords

@@ -1,5 +1,5 @@
 import type { Point } from '../geometry/types.ts'
-import { CornerMode, type Frame } from './frame.ts'
+import { CornerMode, type Frame } from '../contours/frame.ts'
 import type { LevelRuns, MeshLevel } from './mesh-levels.ts'
 import type { MeshLine } from './types.ts'
 

@@ -1,5 +1,5 @@
 import { PieceKind, centreOf, pointStray, pointX, pointY, sweepOf, type March } from './chain.ts'
-import { CornerMode } from './frame.ts'
+import { CornerMode } from '../contours/frame.ts'
 import type { First } from './first.ts'
 import { firstZero } from './first-zero.ts'
 

@@ -1,6 +1,6 @@
-import type { FacetSpec, WallSpec } from '../evaluate/schema.ts'
-import type { EdgeRef } from '../body/types.ts'
-import { edgeKey } from '../body/names.ts'
+import type { FacetSpec, WallSpec } from '../walls/schema.ts'
+import type { EdgeRef } from '../walls/types.ts'
+import { edgeKey } from '../walls/names.ts'
 
 /**
  * Preps as joint forms of the trade, turned into the facets of one plate's wall. mm, degrees from vertical.

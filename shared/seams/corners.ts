@@ -1,6 +1,7 @@
-import { CornerMode, frameOf, type Frame } from './frame.ts'
-import type { Body, Corner, CornerKind, SeamBand, Wall } from './types.ts'
-import { tiltAt } from './wall.ts'
+import { CornerMode, frameOf, type Frame } from '../contours/frame.ts'
+import type { Body, Wall } from '../walls/types.ts'
+import type { Corner, CornerKind, SeamBand } from './types.ts'
+import { tiltAt } from '../walls/wall.ts'
 
 /** Largest tilt for two equal walls at an interior angle so that their seam keeps within a limit (derived), radians. */
 export function largestCornerTilt(limit: number, interiorAngle: number): number {

@@ -1,45 +1,6 @@
-import { signedArea } from '../geometry/loop.ts'
-import { profileProblems, type ProfileProblem } from '../geometry/problems.ts'
-import type { Body, BodyMesh, Contour } from './types.ts'
+import type { BodyMesh } from './types.ts'
 
-/** Checkers that go with the algorithms: they say whether a result is sound, not whether it is the right one. */
-
-/** What is wrong with a contour as an outline: open, crossing, turned over; empty when it is sound. */
-export function contourProblems(contour: Contour): ProfileProblem[] {
-  return profileProblems(contour.loops)
-}
-
-/** Area of a contour, holes taken off, mm². */
-export function contourArea(contour: Contour): number {
-  return contour.loops.reduce((sum, loop) => sum + signedArea(loop), 0)
-}
-
-export type BodyProblemCode =
-  'thickness' | 'walls-missing' | 'facets-not-rising' | 'facets-end-elsewhere' | 'tilt'
-
-/** What is wrong with the walls of a body; the profile has its own checker. */
-export interface BodyProblem {
-  readonly code: BodyProblemCode
-  readonly loop: number | null
-  readonly edge: number | null
-}
-
-export function bodyProblems({ thickness, loops, walls }: Body): BodyProblem[] {
-  const problems: BodyProblem[] = []
-  const add = (code: BodyProblemCode, loop: number | null, edge: number | null) =>
-    problems.push({ code, loop, edge })
-  if (!(thickness > 0 && thickness < Infinity)) add('thickness', null, null)
-  for (const [l, loop] of loops.entries()) {
-    if (walls[l]?.length !== loop.length) add('walls-missing', l, null)
-    for (const [e, { facets }] of (walls[l] ?? []).entries()) {
-      if (facets.some((f, i) => !(f.depth > (facets[i - 1]?.depth ?? 0)))) add('facets-not-rising', l, e)
-      if (facets.at(-1)?.depth !== thickness) add('facets-end-elsewhere', l, e)
-      if (facets.some((f) => !(Math.abs(f.tilt) < Math.PI / 2))) add('tilt', l, e)
-    }
-  }
-  return problems
-}
-
+/** The mesh's own checker. */
 export interface MeshCheck {
   /** Directed edges whose opposite does not occur as often, positions told apart bit by bit; 0 when watertight. */
   readonly unmatched: number

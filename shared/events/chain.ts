@@ -1,6 +1,6 @@
 import { startAngle } from '../geometry/segment.ts'
-import { branchPoint, branchRange, branchStray, type Branch, type BranchRange } from './branch.ts'
-import { CornerMode, makePlaces, place, radiusAt, sweepAt, type Frame } from './frame.ts'
+import { branchPoint, branchRange, branchStray, type Branch, type BranchRange } from '../contours/branch.ts'
+import { CornerMode, makePlaces, place, radiusAt, sweepAt, type Frame } from '../contours/frame.ts'
 
 /**
  * The contour as a closed chain of moving pieces: edges and the steps between them. Piece e runs from point e

@@ -1,9 +1,9 @@
 import { capFactor } from '../geometry/loop.ts'
-import { frameOf, makePlaces, place, radiusAt, sweepAt, type Frame, type Places } from './frame.ts'
-import { levelsOf } from './levels.ts'
-import { soundRange } from './range.ts'
-import type { Body } from './types.ts'
-import { fillOffsets } from './wall-table.ts'
+import { frameOf, makePlaces, place, radiusAt, sweepAt, type Frame, type Places } from '../contours/frame.ts'
+import { levelsOf } from '../walls/levels.ts'
+import { soundRange } from '../events/range.ts'
+import type { Body } from '../walls/types.ts'
+import { fillOffsets } from '../walls/wall-table.ts'
 
 /**
  * Relative error at which the integral over depth stops being refined, for bodies in which an arc meets a

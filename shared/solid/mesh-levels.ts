@@ -1,8 +1,16 @@
 import { chordCount } from '../geometry/sample.ts'
 import type { Point } from '../geometry/types.ts'
-import { CornerMode, makePlaces, place, radiusAt, sweepAt, type Frame, type Places } from './frame.ts'
-import { levelsOf } from './levels.ts'
-import { fillOffsets } from './wall-table.ts'
+import {
+  CornerMode,
+  makePlaces,
+  place,
+  radiusAt,
+  sweepAt,
+  type Frame,
+  type Places,
+} from '../contours/frame.ts'
+import { levelsOf } from '../walls/levels.ts'
+import { fillOffsets } from '../walls/wall-table.ts'
 
 /** The contour placed at one depth of the mesh. */
 export interface MeshLevel {

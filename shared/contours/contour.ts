@@ -9,8 +9,9 @@ import {
   type Frame,
   type Places,
 } from './frame.ts'
-import type { Body, Contour, ContourSegment } from './types.ts'
-import { fillOffsets } from './wall-table.ts'
+import type { Body } from '../walls/types.ts'
+import type { Contour, ContourSegment } from './types.ts'
+import { fillOffsets } from '../walls/wall-table.ts'
 
 /**
  * The body's outline at a depth: lines moved, arcs with their new radius, neighbours met again. Edge e of a

@@ -1,8 +1,8 @@
 import { endTangent, startTangent } from '../geometry/segment.ts'
 import type { Segment } from '../geometry/types.ts'
 import { branchOf, branchPoint, type Branch } from './branch.ts'
-import type { Body } from './types.ts'
-import { sameOffsets, wallTable, type WallTable } from './wall-table.ts'
+import type { Body } from '../walls/types.ts'
+import { sameOffsets, wallTable, type WallTable } from '../walls/wall-table.ts'
 
 /**
  * A body compiled into flat arrays: everything about edges and corners that does not depend on depth. Edges
