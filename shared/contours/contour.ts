@@ -11,7 +11,7 @@ import {
 } from './frame.ts'
 import type { Body } from '../walls/types.ts'
 import type { Contour, ContourSegment } from './types.ts'
-import { fillOffsets } from '../walls/wall-table.ts'
+import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 
 /**
  * The body's outline at a depth: lines moved, arcs with their new radius, neighbours met again. Edge e of a
@@ -20,14 +20,14 @@ import { fillOffsets } from '../walls/wall-table.ts'
  */
 export function contourAt(body: Body, depth: number): Contour {
   const frame = frameOf(body)
-  const offsets = new Float64Array(frame.count)
+  const offsets = makeEdgeEnds(frame.count)
   const places = makePlaces(frame.count)
   fillOffsets(frame.table, depth, offsets)
   place(frame, offsets, places)
   return { depth, loops: body.loops.map((_, l) => contourLoop(frame, l, offsets, places)) }
 }
 
-function contourLoop(frame: Frame, loop: number, offsets: Float64Array, places: Places): ContourSegment[] {
+function contourLoop(frame: Frame, loop: number, offsets: EdgeEnds, places: Places): ContourSegment[] {
   const first = frame.loopStart[loop]!
   const end = frame.loopStart[loop + 1]!
   const out: ContourSegment[] = []
@@ -35,15 +35,15 @@ function contourLoop(frame: Frame, loop: number, offsets: Float64Array, places: 
   let from = opening
   for (let g = first; g < end; g++) {
     const next = frame.next[g]!
-    const stepped = frame.mode[next] === CornerMode.step && offsets[g] !== offsets[next]
+    const stepped = frame.mode[next] === CornerMode.step && offsets.end[g] !== offsets.start[next]
     const to = !stepped && g === end - 1 ? opening : { x: places.ex[g]!, y: places.ey[g]! }
     const segment = frame.segments[g]!
     if (segment.kind === 'line') {
-      out.push({ kind: 'line', from, to, edge: g - first })
+      out.push({ kind: 'line', from, to, edge: frame.edgeOf[g]! })
     } else {
-      const radius = radiusAt(frame, g, offsets[g]!)
+      const radius = radiusAt(frame, g, offsets.start[g]!)
       const sweep = sweepAt(frame, g, places)
-      out.push({ kind: 'arc', from, to, centre: segment.centre, radius, sweep, edge: g - first })
+      out.push({ kind: 'arc', from, to, centre: segment.centre, radius, sweep, edge: frame.edgeOf[g]! })
     }
     from = to
     if (stepped) {

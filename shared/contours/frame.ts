@@ -2,7 +2,7 @@ import { endTangent, startTangent } from '../geometry/segment.ts'
 import type { Segment } from '../geometry/types.ts'
 import { branchOf, branchPoint, type Branch } from './branch.ts'
 import type { Body } from '../walls/types.ts'
-import { sameOffsets, wallTable, type WallTable } from '../walls/wall-table.ts'
+import { sameOffsets, wallTable, type EdgeEnds, type WallTable } from '../walls/wall-table.ts'
 
 /**
  * A body compiled into flat arrays: everything about edges and corners that does not depend on depth. Edges
@@ -15,9 +15,17 @@ export interface Frame {
   /** Loop l has the edges loopStart[l] up to loopStart[l + 1]. */
   readonly loopStart: Int32Array
   readonly loopOf: Int32Array
+  /** Number of each edge within its loop. */
+  readonly edgeOf: Int32Array
   readonly previous: Int32Array
   readonly next: Int32Array
   readonly segments: readonly Segment[]
+  /** 1 where the edge is an arc; its centre, radius and signed sweep (0 for lines). */
+  readonly arc: Uint8Array
+  readonly cx: Float64Array
+  readonly cy: Float64Array
+  readonly radius: Float64Array
+  readonly sweep: Float64Array
   readonly px: Float64Array
   readonly py: Float64Array
   /** Unit direction in which each edge starts. */
@@ -93,6 +101,7 @@ function compile(body: Body): Frame {
   const count = table.rowOfEdge.length
   const loopStart = new Int32Array(body.loops.length + 1)
   const loopOf = new Int32Array(count)
+  const edgeOf = new Int32Array(count)
   const previous = new Int32Array(count)
   const next = new Int32Array(count)
   const segments: Segment[] = []
@@ -101,6 +110,7 @@ function compile(body: Body): Frame {
     for (const segment of loop) {
       const g = segments.push(segment) - 1
       loopOf[g] = l
+      edgeOf[g] = g - start
       previous[g] = g - 1
       next[g] = g + 1
     }
@@ -113,6 +123,8 @@ function compile(body: Body): Frame {
   const numbers = () => new Float64Array(count)
   const [px, py, ux, uy, turn] = [numbers(), numbers(), numbers(), numbers(), numbers()]
   const [mx, my, kx, ky] = [numbers(), numbers(), numbers(), numbers()]
+  const arc = new Uint8Array(count)
+  const [cx, cy, radius, sweep] = [numbers(), numbers(), numbers(), numbers()]
   const mode = new Uint8Array(count)
   const branches = new Map<number, Branch>()
   let hasArcs = false
@@ -128,7 +140,14 @@ function compile(body: Body): Frame {
     const before = segments[p]!
     px[g] = after.from.x
     py[g] = after.from.y
-    if (after.kind === 'arc') hasArcs = true
+    if (after.kind === 'arc') {
+      hasArcs = true
+      arc[g] = 1
+      cx[g] = after.centre.x
+      cy[g] = after.centre.y
+      radius[g] = after.radius
+      sweep[g] = after.sweep
+    }
     const end = before.kind === 'arc' ? endTangent(before) : null
     const ax = end ? end.x : ux[p]!
     const ay = end ? end.y : uy[p]!
@@ -169,9 +188,15 @@ function compile(body: Body): Frame {
     count,
     loopStart,
     loopOf,
+    edgeOf,
     previous,
     next,
     segments,
+    arc,
+    cx,
+    cy,
+    radius,
+    sweep,
     px,
     py,
     ux,
@@ -214,14 +239,14 @@ export function makePlaces(count: number): Places {
   }
 }
 
-/** Places every corner for the given offset of each edge from the drawing. */
-export function place(frame: Frame, offsets: Float64Array, out: Places): void {
+/** Places every corner for the given offset of each edge from the drawing, at its two ends. */
+export function place(frame: Frame, offsets: EdgeEnds, out: Places): void {
   const { count, previous, px, py, mode, mx, my, kx, ky, branches } = frame
   const { sx, sy, ex, ey } = out
   for (let g = 0; g < count; g++) {
     const p = previous[g]!
-    const o1 = offsets[p]!
-    const o2 = offsets[g]!
+    const o1 = offsets.end[p]!
+    const o2 = offsets.start[g]!
     let x = px[g]!
     let y = py[g]!
     switch (mode[g]) {
@@ -253,8 +278,7 @@ export function place(frame: Frame, offsets: Float64Array, out: Places): void {
 
 /** Radius of an arc edge at an offset, mm; negative past its vanishing. */
 export function radiusAt(frame: Frame, g: number, offset: number): number {
-  const segment = frame.segments[g]!
-  return segment.kind === 'arc' ? segment.radius + Math.sign(segment.sweep) * offset : 0
+  return frame.arc[g] ? frame.radius[g]! + Math.sign(frame.sweep[g]!) * offset : 0
 }
 
 /**

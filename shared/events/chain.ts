@@ -1,3 +1,4 @@
+import type { EdgeEnds } from '../walls/wall-table.ts'
 import { startAngle } from '../geometry/segment.ts'
 import { branchPoint, branchRange, branchStray, type Branch, type BranchRange } from '../contours/branch.ts'
 import { CornerMode, makePlaces, place, radiusAt, sweepAt, type Frame } from '../contours/frame.ts'
@@ -49,9 +50,8 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
         uy[e] = frame.my[g]! / size
         e++
       }
-      const segment = frame.segments[g]!
       edge[e] = g
-      if (segment.kind === 'arc') {
+      if (frame.arc[g]) {
         kind[e] = PieceKind.arc
       } else {
         ux[e] = frame.ux[g]!
@@ -73,8 +73,8 @@ export interface March {
   readonly chain: Chain
   readonly length: number
   /** Per edge: offset at t = 0 and its change per unit of t. */
-  readonly offset: Float64Array
-  readonly rate: Float64Array
+  readonly offset: EdgeEnds
+  readonly rate: EdgeEnds
   /** Per piece: its first point at t = 0 and the point's velocity (bent points: the place only). */
   readonly x: Float64Array
   readonly y: Float64Array
@@ -86,7 +86,7 @@ export interface March {
   readonly sweep: Float64Array
 }
 
-export function marchOf(chain: Chain, offset: Float64Array, rate: Float64Array, length: number): March {
+export function marchOf(chain: Chain, offset: EdgeEnds, rate: EdgeEnds, length: number): March {
   const { frame, count, kind, edge } = chain
   const x = new Float64Array(count)
   const y = new Float64Array(count)
@@ -104,8 +104,8 @@ export function marchOf(chain: Chain, offset: Float64Array, rate: Float64Array, 
     const isStep = kind[e] === PieceKind.step
     x[e] = isStep ? places.ex[p]! : places.sx[g]!
     y[e] = isStep ? places.ey[p]! : places.sy[g]!
-    const w1 = rate[p]!
-    const w2 = rate[g]!
+    const w1 = rate.end[p]!
+    const w2 = rate.start[g]!
     const mode = frame.mode[g]
     if (mode === CornerMode.mitre) {
       vx[e] = w1 * frame.mx[g]! + (w2 - w1) * frame.kx[g]!
@@ -116,9 +116,8 @@ export function marchOf(chain: Chain, offset: Float64Array, rate: Float64Array, 
       vy[e] = w * frame.my[g]!
     }
     if (kind[e] === PieceKind.arc) {
-      const segment = frame.segments[g]!
-      radius[e] = radiusAt(frame, g, offset[g]!)
-      radiusRate[e] = segment.kind === 'arc' ? Math.sign(segment.sweep) * w2 : 0
+      radius[e] = radiusAt(frame, g, offset.start[g]!)
+      radiusRate[e] = Math.sign(frame.sweep[g]!) * w2
       sweep[e] = sweepAt(frame, g, places)
     }
   }
@@ -136,7 +135,7 @@ export function pointY(march: March, e: number, t: number): number {
 function bentPoint({ chain, offset, rate }: March, e: number, t: number) {
   const g = chain.edge[e]!
   const p = chain.frame.previous[g]!
-  return branchPoint(chain.bent[e]!, offset[p]! + t * rate[p]!, offset[g]! + t * rate[g]!)
+  return branchPoint(chain.bent[e]!, offset.end[p]! + t * rate.end[p]!, offset.start[g]! + t * rate.start[g]!)
 }
 
 /** How far point e can be, between two moments, from where it is half-way between them, mm. */
@@ -154,8 +153,8 @@ function offsetSpans({ chain, offset, rate }: March, e: number, from: number, to
   const g = chain.edge[e]!
   const p = chain.frame.previous[g]!
   return [
-    [offset[p]! + from * rate[p]!, offset[p]! + to * rate[p]!],
-    [offset[g]! + from * rate[g]!, offset[g]! + to * rate[g]!],
+    [offset.end[p]! + from * rate.end[p]!, offset.end[p]! + to * rate.end[p]!],
+    [offset.start[g]! + from * rate.start[g]!, offset.start[g]! + to * rate.start[g]!],
   ] as const
 }
 

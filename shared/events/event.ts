@@ -10,7 +10,7 @@ import { offerMeeting } from './meet.ts'
 import { fillMotionBoxes } from './motion-boxes.ts'
 import type { Body, EdgeRef } from '../walls/types.ts'
 import type { BodyEvent } from './types.ts'
-import { fillOffsets, fillRates } from '../walls/wall-table.ts'
+import { fillOffsets, fillRates, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 import { offerVanishings } from './vanish.ts'
 
 /**
@@ -32,8 +32,8 @@ const events = new WeakMap<Body, BodyEvent | null>()
 /** One even stretch of the way from the drawing. */
 interface Stretch {
   readonly length: number
-  readonly offset: Float64Array
-  readonly rate: Float64Array
+  readonly offset: EdgeEnds
+  readonly rate: EdgeEnds
   readonly depthAt: (t: number) => number
 }
 
@@ -59,7 +59,7 @@ function march(frame: Frame): BodyEvent | null {
 }
 
 function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: number) {
-  if (rate.every((w) => w === 0)) return null
+  if (rate.start.every((w) => w === 0) && rate.end.every((w) => w === 0)) return null
   const run = marchOf(chain, offset, rate, length)
   const first = new First(length)
   offerVanishings(run, first)
@@ -84,24 +84,29 @@ function* stretchesOf(frame: Frame): Generator<Stretch> {
   const levels = levelsOf(body)
   const upward = body.datum === 'bottom'
   if (body.datum === 'root') {
-    const rate = new Float64Array(count)
+    const rate = makeEdgeEnds(count)
     fillOffsets(table, 0, rate)
-    yield { length: 1, offset: new Float64Array(count), rate, depthAt: () => 0 }
+    yield { length: 1, offset: makeEdgeEnds(count), rate, depthAt: () => 0 }
   }
   for (let i = 1; i < levels.length; i++) {
     const [above, below] = upward
       ? [levels[levels.length - 1 - i]!, levels[levels.length - i]!]
       : [levels[i - 1]!, levels[i]!]
-    const offset = new Float64Array(count)
-    const rate = new Float64Array(count)
+    const offset = makeEdgeEnds(count)
+    const rate = makeEdgeEnds(count)
     fillOffsets(table, upward ? below : above, offset)
     fillRates(table, above, rate)
-    if (upward) for (let g = 0; g < count; g++) rate[g] = -rate[g]!
+    if (upward) turnRound(rate)
     yield { length: below - above, offset, rate, depthAt: (t) => (upward ? below - t : above + t) }
   }
 }
 
 function refOf(frame: Frame, g: number): EdgeRef {
   const loop = frame.loopOf[g]!
-  return { loop, edge: g - frame.loopStart[loop]! }
+  return { loop, edge: frame.edgeOf[g]! }
+}
+
+function turnRound({ start, end }: EdgeEnds): void {
+  for (let g = 0; g < start.length; g++) start[g] = -start[g]!
+  if (end !== start) for (let g = 0; g < end.length; g++) end[g] = -end[g]!
 }

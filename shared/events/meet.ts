@@ -64,7 +64,7 @@ function offerPoint(march: March, e: number, f: number, near: number, first: Fir
 
 /** How fast a line moves along its outward normal; a step slides along itself. */
 function lineRate(march: March, f: number): number {
-  return march.chain.kind[f] === PieceKind.step ? 0 : march.rate[march.chain.edge[f]!]!
+  return march.chain.kind[f] === PieceKind.step ? 0 : march.rate.start[march.chain.edge[f]!]!
 }
 
 function meetsOnlyAtEnds(between: number, piece: number): boolean {

@@ -62,7 +62,7 @@ function offerBentVanishing(march: March, e: number, first: First): void {
 function offerSpike(march: March, e: number, first: First): void {
   const g = march.chain.edge[e]!
   const p = march.chain.frame.previous[g]!
-  if (march.rate[p] !== 0 || march.rate[g] !== 0)
+  if (march.rate.end[p] !== 0 || march.rate.start[g] !== 0)
     first.offer(0, 'vanish', Math.min(p, g), -1, march.x[e]!, march.y[e]!)
 }
 
@@ -72,9 +72,11 @@ function offerParting(march: March, e: number, first: First): void {
   const branch = chain.bent[e]!
   const g = chain.edge[e]!
   const p = chain.frame.previous[g]!
-  const [mine, others] = branch.circleIsBefore ? [p, g] : [g, p]
-  const r = branch.radius + branch.grow * offset[mine]!
-  const rRate = branch.grow * rate[mine]!
+  const ends = [offset.end[p]!, offset.start[g]!] as const
+  const rates = [rate.end[p]!, rate.start[g]!] as const
+  const [mine, others] = branch.circleIsBefore ? ([0, 1] as const) : ([1, 0] as const)
+  const r = branch.radius + branch.grow * ends[mine]
+  const rRate = branch.grow * rates[mine]
   const offerMargin = (margin: number, marginRate: number) => {
     if (marginRate >= 0) return
     const t = Math.max(0, -margin / marginRate)
@@ -83,14 +85,14 @@ function offerParting(march: March, e: number, first: First): void {
   }
   if (branch.second) {
     const { apart, grow, radius } = branch.second
-    const s = radius + grow * offset[others]!
-    const sRate = grow * rate[others]!
+    const s = radius + grow * ends[others]
+    const sRate = grow * rates[others]
     offerMargin(r + s - apart, rRate + sRate)
     offerMargin(apart - r + s, sRate - rRate)
     offerMargin(apart + r - s, rRate - sRate)
   } else {
-    const h = branch.along + offset[others]!
-    offerMargin(r - h, rRate - rate[others]!)
-    offerMargin(r + h, rRate + rate[others]!)
+    const h = branch.along + ends[others]
+    offerMargin(r - h, rRate - rates[others])
+    offerMargin(r + h, rRate + rates[others])
   }
 }

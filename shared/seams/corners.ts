@@ -41,7 +41,7 @@ function cornerAt(frame: Frame, g: number): Corner {
   const after = table.walls[table.rowOfEdge[g]!]!
   return {
     loop,
-    vertex: g - frame.loopStart[loop]!,
+    vertex: frame.edgeOf[g]!,
     at: { x: frame.px[g]!, y: frame.py[g]! },
     kind,
     interiorAngle: Math.PI - turn,

@@ -10,14 +10,14 @@ import {
   type Places,
 } from '../contours/frame.ts'
 import { levelsOf } from '../walls/levels.ts'
-import { fillOffsets } from '../walls/wall-table.ts'
+import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 
 /** The contour placed at one depth of the mesh. */
 export interface MeshLevel {
   readonly depth: number
   /** Whether the set-up has it (a facet may end here), or it only follows a curved seam or a step that turns. */
   readonly given: boolean
-  readonly offsets: Float64Array
+  readonly offsets: EdgeEnds
   readonly places: Places
   /** Per edge, of arcs. */
   readonly sweep: Float64Array
@@ -65,14 +65,14 @@ export function chordsPerEdge(
       ? 1
       : Math.max(
           ...levels.map(({ offsets, sweep }) =>
-            chordCount(Math.max(0, radiusAt(frame, g, offsets[g]!)), sweep[g]!, chordTolerance),
+            chordCount(Math.max(0, radiusAt(frame, g, offsets.start[g]!)), sweep[g]!, chordTolerance),
           ),
         ),
   )
 }
 
 function levelAt(frame: Frame, depth: number, given: boolean): MeshLevel {
-  const offsets = new Float64Array(frame.count)
+  const offsets = makeEdgeEnds(frame.count)
   const places = makePlaces(frame.count)
   fillOffsets(frame.table, depth, offsets)
   place(frame, offsets, places)
@@ -86,8 +86,8 @@ function stepTurns(frame: Frame, above: MeshLevel, below: MeshLevel): number[] {
   for (let g = 0; g < frame.count; g++) {
     if (frame.mode[g] !== CornerMode.step) continue
     const p = frame.previous[g]!
-    const a = above.offsets[g]! - above.offsets[p]!
-    const b = below.offsets[g]! - below.offsets[p]!
+    const a = above.offsets.start[g]! - above.offsets.end[p]!
+    const b = below.offsets.start[g]! - below.offsets.end[p]!
     if (a * b < 0) turns.add(above.depth + (a / (a - b)) * (below.depth - above.depth))
   }
   return [...turns].filter((d) => d > above.depth && d < below.depth).sort((a, b) => a - b)

@@ -13,7 +13,7 @@ export function meshLines(
   const last = levels.length - 1
   for (let g = 0; g < frame.count; g++) {
     const loop = frame.loopOf[g]!
-    const edge = g - frame.loopStart[loop]!
+    const edge = frame.edgeOf[g]!
     const wall = frame.table.walls[frame.table.rowOfEdge[g]!]!
     for (const [i, level] of levels.entries()) {
       const kind = i === 0 ? 'top' : i === last ? 'bottom' : 'level'
@@ -25,7 +25,7 @@ export function meshLines(
   for (let g = 0; g < frame.count; g++) {
     if (frame.mode[g] === CornerMode.smooth) continue
     const loop = frame.loopOf[g]!
-    const vertex = g - frame.loopStart[loop]!
+    const vertex = frame.edgeOf[g]!
     const seam = (pick: (i: number) => Point): MeshLine => ({
       kind: 'seam',
       loop,

@@ -89,7 +89,7 @@ function addWall(
     const [above, below] = [levels[i - 1]!, levels[i]!]
     const facet = facetIndexAt(wall, above.depth)
     if (facet !== faceFacet) {
-      face = sink.face({ kind: 'wall', loop, edge: g - frame.loopStart[loop]!, facet })
+      face = sink.face({ kind: 'wall', loop, edge: frame.edgeOf[g]!, facet })
       faceFacet = facet
     }
     const tilt = wall.facets[facet]!.tilt
@@ -117,7 +117,7 @@ function addStep(sink: MeshSink, frame: Frame, g: number, levels: readonly MeshL
     const [top, bottom] = [ends(above), ends(below)]
     const wide = isSpot(top) ? bottom : top
     if (isSpot(wide)) continue
-    if (face < 0) face = sink.face({ kind: 'step', loop, vertex: g - frame.loopStart[loop]! })
+    if (face < 0) face = sink.face({ kind: 'step', loop, vertex: frame.edgeOf[g]! })
     const normal = outward(...wide)
     addStrip(sink, face, top, above.depth, bottom, below.depth, [normal, normal], 0)
   }

@@ -3,7 +3,7 @@ import { frameOf, makePlaces, place, radiusAt, sweepAt, type Frame, type Places 
 import { levelsOf } from '../walls/levels.ts'
 import { soundRange } from '../events/range.ts'
 import type { Body } from '../walls/types.ts'
-import { fillOffsets } from '../walls/wall-table.ts'
+import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 
 /**
  * Relative error at which the integral over depth stops being refined, for bodies in which an arc meets a
@@ -38,7 +38,7 @@ export function volumeOf(body: Body): number | null {
 /** Area of the contour as a function of depth, mm². */
 function areaByDepth(body: Body): (depth: number) => number {
   const frame = frameOf(body)
-  const offsets = new Float64Array(frame.count)
+  const offsets = makeEdgeEnds(frame.count)
   const places = makePlaces(frame.count)
   return (depth) => {
     fillOffsets(frame.table, depth, offsets)
@@ -48,7 +48,7 @@ function areaByDepth(body: Body): (depth: number) => number {
 }
 
 /** Chords about the first corner, steps between unlike neighbours, and the caps of arcs. */
-function areaOf(frame: Frame, offsets: Float64Array, places: Places): number {
+function areaOf(frame: Frame, offsets: EdgeEnds, places: Places): number {
   const { sx, sy, ex, ey } = places
   const ox = sx[0] ?? 0
   const oy = sy[0] ?? 0
@@ -61,8 +61,8 @@ function areaOf(frame: Frame, offsets: Float64Array, places: Places): number {
     const by = ey[g]! - oy
     twice += ax * by - ay * bx
     if (frame.hasSteps) twice += bx * (sy[n]! - oy) - by * (sx[n]! - ox)
-    if (frame.hasArcs && frame.segments[g]!.kind === 'arc') {
-      const radius = radiusAt(frame, g, offsets[g]!)
+    if (frame.hasArcs && frame.arc[g]) {
+      const radius = radiusAt(frame, g, offsets.start[g]!)
       twice += radius * radius * capFactor(sweepAt(frame, g, places))
     }
   }

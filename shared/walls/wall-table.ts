@@ -52,8 +52,19 @@ export function wallTable(body: Body): WallTable {
   return { walls, rowOfEdge, datum, firstFacet, facetEnd, facetTan }
 }
 
+/** A figure for every edge at its start and at its end; one array serves both where no wall changes along its edge. */
+export interface EdgeEnds {
+  readonly start: Float64Array
+  readonly end: Float64Array
+}
+
+export function makeEdgeEnds(count: number): EdgeEnds {
+  const both = new Float64Array(count)
+  return { start: both, end: both }
+}
+
 /** Fills `out` with the offset of every edge's contour at a depth from the drawing's outline, mm. */
-export function fillOffsets(table: WallTable, depth: number, out: Float64Array): void {
+export function fillOffsets(table: WallTable, depth: number, out: EdgeEnds): void {
   const perRow = table.walls.map((_, row) => {
     const last = table.firstFacet[row + 1]! - 1
     let reach = 0
@@ -66,13 +77,13 @@ export function fillOffsets(table: WallTable, depth: number, out: Float64Array):
     }
     return reach - table.datum[row]!
   })
-  spread(table, perRow, out)
+  spread(table, perRow, out.start)
 }
 
 /** Fills `out` with the tangent of the tilt just below a depth: how fast each contour moves outward with depth. */
-export function fillRates(table: WallTable, depth: number, out: Float64Array): void {
+export function fillRates(table: WallTable, depth: number, out: EdgeEnds): void {
   const perRow = table.walls.map((_, row) => table.facetTan[facetBelow(table, row, depth)]!)
-  spread(table, perRow, out)
+  spread(table, perRow, out.start)
 }
 
 /** Index into the table's facets of the one just below a depth. */
