@@ -2,6 +2,7 @@ import { formatAngle, formatLength } from './format.ts'
 import { MM_PER_INCH, type DisplayUnit } from './length.ts'
 import { readQuantity, tidy, type Quantity } from './quantity.ts'
 import { unread, type ParsedNumber, type ReadNumber } from './parsed.ts'
+import { readSum } from './sum.ts'
 
 /** Reading lengths and angles as people type them. */
 
@@ -20,14 +21,25 @@ const MM_PER_UNIT: Record<string, number> = {
 }
 
 /**
- * A length: `12,5`, `12.5`, `1 1/2 in`, `1-1/2"`, `3/8"`, `38.1mm`, `1' 6"`. Without a unit it is in the display
- * unit. `value` is in millimetres; `1,234` comes back as a question.
+ * A length: `12,5`, `12.5`, `1 1/2 in`, `1-1/2"`, `3/8"`, `38.1mm`, `1' 6"`, or a simple sum of such. Without a
+ * unit it is in the display unit. `value` is in millimetres; `1,234` comes back as a question.
  */
 export function parseLength(text: string, displayUnit: DisplayUnit): ParsedNumber {
   const typed = tidy(text)
   const checked = checkTyped(typed, displayUnit === 'mm' ? '12.5 or 1/2 in' : '0.5, 1/2 or 12.7 mm')
   if (checked) return checked
+  const one = readLength(typed, displayUnit)
+  if (one.kind !== 'error') return one
+  const sum = readSum(
+    typed,
+    (term, unit) =>
+      readLength(term === '' || /[a-z"']$/.test(term) ? term : `${term} ${unit}`.trim(), displayUnit),
+    (mm) => formatLength(mm, displayUnit, { decimals: 6 }),
+  )
+  return sum ?? one
+}
 
+function readLength(typed: string, displayUnit: DisplayUnit): ParsedNumber {
   const feet = /^(-?)([^'a-z"]+?) ?(?:'|ft|feet|foot) ?-? ?([\d][^'a-z]*?) ?(?:"|in|inch|inches)?$/.exec(
     typed,
   )
@@ -43,13 +55,19 @@ export function parseLength(text: string, displayUnit: DisplayUnit): ParsedNumbe
 }
 
 /**
- * An angle in degrees: `45`, `45°`, `22,5`, `22 1/2 deg`, `-30`, `45° 30'`. `value` is in degrees.
+ * An angle in degrees: `45`, `45°`, `22,5`, `22 1/2 deg`, `-30`, `45° 30'`, or a simple sum (`90 - 52.5`).
+ * `value` is in degrees.
  */
 export function parseAngle(text: string): ParsedNumber {
   const typed = tidy(text)
   const checked = checkTyped(typed, "30, 22.5 or 45° 30'")
   if (checked) return checked
+  const one = readAngle(typed)
+  if (one.kind !== 'error') return one
+  return readSum(typed, readAngle, (degrees) => formatAngle(degrees, { decimals: 6 })) ?? one
+}
 
+function readAngle(typed: string): ParsedNumber {
   const sixtieths = /^(-?)([\d.,]+) ?(?:°|deg) ?([\d.,]+) ?'(?: ?([\d.,]+) ?")?$/.exec(typed)
   if (sixtieths) return readSixtieths(sixtieths[1] === '-', sixtieths.slice(2))
 
