@@ -113,6 +113,8 @@ export default memo(function PartViewer(props: PartViewerProps) {
       clear: () => onSelect?.(null, 'replace'),
     }
   }, [control, index, selection, onSelect])
+  const { onContext } = props
+  useEffect(() => onContext?.(context), [onContext, context])
 
   const onKeyDown = (event: React.KeyboardEvent) => {
     if (event.target !== event.currentTarget) return

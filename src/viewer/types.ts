@@ -2,6 +2,7 @@ import type { BodyMesh } from '../../shared/solid/types.ts'
 import type { CornerRef, EdgeRef } from '../../shared/walls/types.ts'
 import type { Point } from '../../shared/geometry/types.ts'
 import type { Theme } from '../theme/tilt-colour.ts'
+import type { ActContext } from './controls/acts.ts'
 
 /** A text that stands beside an edge; the caller formats it. */
 export interface EdgeLabel {
@@ -66,6 +67,8 @@ export interface PartViewerProps {
   /** After a movement has come to rest. */
   readonly onViewChange?: (view: string) => void
   readonly insets?: Insets
+  /** What the acts of the camera need, for those that stand outside the picture. */
+  readonly onContext?: (context: ActContext) => void
   /** Accessible name; "Part in 3D" if absent. */
   readonly label?: string
   /** The picture in words for those who cannot see it. */

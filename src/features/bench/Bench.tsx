@@ -1,4 +1,4 @@
-import { memo, useCallback, useMemo, useState } from 'react'
+import { memo, useCallback, useMemo, useRef, useState } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import type { Head } from '../../../shared/api/heads.ts'
 import type { Setup } from '../../../shared/api/setups.ts'
@@ -9,6 +9,7 @@ import { useMay } from '../../app/current-user.tsx'
 import { Page } from '../../app/Page.tsx'
 import { useTheme, useUnit } from '../../app/preferences.ts'
 import { useEvaluation } from '../../evaluation/index.ts'
+import type { ViewContext } from '../../viewer/index.ts'
 import './bench.css'
 import { ActRow } from './title/ActRow.tsx'
 import { TitleBlock } from './title/TitleBlock.tsx'
@@ -90,6 +91,10 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
   const breaches = useMemo(() => breachesIn(evaluation?.findings ?? []), [evaluation])
   const chosenNote = chosen?.of === notes ? chosen.number : null
   const chooseNote = useCallback((number: number | null) => setChosen({ number, of: notes }), [notes])
+  const viewContextRef = useRef<ViewContext | null>(null)
+  const keepViewContext = useCallback((context: ViewContext) => {
+    viewContextRef.current = context
+  }, [])
   const { mesh, request: answered, error, pending } = result
   const scene = useMemo(
     (): Scene => ({
@@ -108,6 +113,8 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
       notes,
       chosenNote,
       chooseNote,
+      viewContextRef,
+      keepViewContext,
     }),
     [
       setup,
@@ -129,6 +136,7 @@ function OpenBench({ setup, newest, heads }: BenchProps) {
       notes,
       chosenNote,
       chooseNote,
+      keepViewContext,
     ],
   )
   return (

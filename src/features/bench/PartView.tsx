@@ -28,7 +28,7 @@ const eventWords = {
 
 /** The part in 3D with everything that the sheet knows about it. */
 export function PartView() {
-  const { result, theme, unit, notes, chosenNote, chooseNote, breaches } = useScene()
+  const { result, theme, unit, notes, chosenNote, chooseNote, breaches, keepViewContext } = useScene()
   const content = useContent()
   const loops = useBench((state) => state.loops)
   const selection = useBench((state) => state.selection)
@@ -120,6 +120,7 @@ export function PartView() {
         compact={layout === 'phone'}
         view={view}
         onViewChange={keepView}
+        onContext={keepViewContext}
         insets={layout === 'desk' ? insetsOnDesk : undefined}
         label="Part in 3D"
         description={`${loops[0]?.length ?? 0} outer edges, ${loops.length - 1} holes. ${findingWords(notes)}. Every number of the picture stands in the edge table.`}

@@ -1,4 +1,4 @@
-import { createContext, useContext } from 'react'
+import { createContext, useContext, type RefObject } from 'react'
 import type { Head } from '../../../shared/api/heads.ts'
 import type { Setup } from '../../../shared/api/setups.ts'
 import type { EvaluatedCorner, EvaluatedEdge } from '../../../shared/evaluate/schema.ts'
@@ -6,6 +6,7 @@ import type { HeadSnapshot, SetupContent } from '../../../shared/setup/schema.ts
 import type { DisplayUnit } from '../../../shared/units/length.ts'
 import type { EvaluationState } from '../../evaluation/index.ts'
 import type { Theme } from '../../theme/tilt-colour.ts'
+import type { ViewContext } from '../../viewer/index.ts'
 import type { MarginNote } from './model/notes.ts'
 
 /** What every part of the bench shows, beside the content and the selection that the store holds. */
@@ -28,6 +29,9 @@ export interface Scene {
   readonly notes: readonly MarginNote[]
   readonly chosenNote: number | null
   readonly chooseNote: (number: number | null) => void
+  /** The camera of the part in 3D; null until it is there. */
+  readonly viewContextRef: RefObject<ViewContext | null>
+  readonly keepViewContext: (context: ViewContext) => void
 }
 
 export const SceneContext = createContext<Scene | null>(null)

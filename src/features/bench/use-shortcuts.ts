@@ -11,6 +11,7 @@ export const shortcuts: readonly { readonly where: string; readonly keys: Keys }
       ['Ctrl+S', 'Save'],
       ['Ctrl+Z', 'Undo'],
       ['Ctrl+Shift+Z, Ctrl+Y', 'Redo'],
+      ['Ctrl+K', 'Every act by its name, every edge by its number'],
     ],
   },
   {
@@ -49,11 +50,12 @@ export const landingIds: Readonly<Record<string, string>> = {
 interface Shortcuts {
   readonly save: () => void
   readonly help: () => void
+  readonly commands: () => void
   /** A dialog is open: only what it handles itself. */
   readonly quiet: boolean
 }
 
-export function useShortcuts({ save, help, quiet }: Shortcuts): void {
+export function useShortcuts({ save, help, commands, quiet }: Shortcuts): void {
   const acts = useActs()
   useEffect(() => {
     function pressed(event: KeyboardEvent) {
@@ -67,6 +69,7 @@ export function useShortcuts({ save, help, quiet }: Shortcuts): void {
       if (event.altKey) return null
       const key = event.key.toLowerCase()
       if (key === 's') return save
+      if (key === 'k') return commands
       if (key === 'y' || (key === 'z' && event.shiftKey)) return acts.redo
       if (key === 'z') return acts.undo
       return null
@@ -81,7 +84,7 @@ export function useShortcuts({ save, help, quiet }: Shortcuts): void {
     }
     addEventListener('keydown', pressed)
     return () => removeEventListener('keydown', pressed)
-  }, [acts, save, help, quiet])
+  }, [acts, save, help, commands, quiet])
 }
 
 function isTyping(target: EventTarget | null): boolean {
@@ -94,7 +97,7 @@ function isTyping(target: EventTarget | null): boolean {
 /** What takes the focus in a region, by preference: its own choice, the item the arrow keys stand on, any control. */
 const LANDINGS = ['[data-landing]', '[tabindex="0"]', 'input', 'button', 'a[href]']
 
-function land(id: string): void {
+export function land(id: string): void {
   const region = document.getElementById(id)
   if (region === null) return
   const target = LANDINGS.flatMap((selector) => [...region.querySelectorAll<HTMLElement>(selector)]).find(

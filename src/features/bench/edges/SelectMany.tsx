@@ -1,17 +1,7 @@
-import type { EdgeRef } from '../../../../shared/walls/types.ts'
-import type { Loop } from '../../../../shared/geometry/types.ts'
 import { Button } from '../../../ui/Button.tsx'
-import { allEdges, parallelTo, sameLength, sameLoop, smoothChain } from '../model/edges.ts'
+import { allEdges } from '../model/edges.ts'
+import { picks } from '../model/picks.ts'
 import { useActs, useBench } from '../model/store.ts'
-
-type Pick = (loops: readonly Loop[], seeds: readonly EdgeRef[]) => EdgeRef[]
-
-const picks: readonly { readonly label: string; readonly pick: Pick }[] = [
-  { label: 'same loop', pick: sameLoop },
-  { label: 'same length', pick: sameLength },
-  { label: 'parallel', pick: parallelTo },
-  { label: 'smooth chain', pick: smoothChain },
-]
 
 /** From the selected edges to all that are like them. */
 export function SelectMany() {

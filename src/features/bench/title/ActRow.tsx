@@ -2,6 +2,8 @@ import { useState } from 'react'
 import { useMay } from '../../../app/current-user.tsx'
 import { Button } from '../../../ui/Button.tsx'
 import { ErrorNotice } from '../../../ui/Notice.tsx'
+import { CommandBox } from '../commands/CommandBox.tsx'
+import type { Command } from '../commands/commands.ts'
 import { useActs, useBench } from '../model/store.ts'
 import { ConflictDialog } from '../save/ConflictDialog.tsx'
 import { LeaveGuard } from '../save/LeaveGuard.tsx'
@@ -13,7 +15,7 @@ import { KeysDialog } from './KeysDialog.tsx'
 import { SetupDialog } from './SetupDialog.tsx'
 import { TakeAway } from './TakeAway.tsx'
 
-type Open = 'setup' | 'submit' | 'take-away' | 'keys' | null
+type Open = 'setup' | 'submit' | 'take-away' | 'keys' | 'commands' | null
 
 /** What can be done with the whole set-up. */
 export function ActRow() {
@@ -30,6 +32,7 @@ export function ActRow() {
   useShortcuts({
     save: () => void saving.save(),
     help: () => setOpen('keys'),
+    commands: () => setOpen('commands'),
     quiet: open !== null || saving.conflict !== null,
   })
 
@@ -65,6 +68,9 @@ export function ActRow() {
         )}
         <Button onClick={() => setOpen('setup')}>Plate, head, jet…</Button>
         <Button onClick={() => setOpen('take-away')}>Take away…</Button>
+        <Button onClick={() => setOpen('commands')} title="Ctrl+K">
+          Do…
+        </Button>
         <Button onClick={() => setOpen('keys')} aria-label="Keys and help">
           ?
         </Button>
@@ -88,9 +94,39 @@ export function ActRow() {
       {open === 'submit' && <SubmitDialog onClose={close} />}
       {open === 'take-away' && <TakeAway unsaved={saving.dirty} onClose={close} />}
       {open === 'keys' && <KeysDialog onClose={close} />}
+      {open === 'commands' && <CommandBox ofSetup={commands()} onClose={close} />}
       <LeaveGuard saving={saving} />
     </>
   )
+
+  function commands(): Command[] {
+    const readOnlyWord = readOnly ? 'to look at only' : null
+    const act = (name: string, run: () => void, more: Partial<Command> = {}): Command => ({
+      id: `setup-${name.replace(/[^a-z]+/gi, '-')}`,
+      group: 'set-up',
+      name,
+      run,
+      ...more,
+    })
+    return [
+      act('undo', acts.undo, { key: 'Ctrl+Z', off: back === 0 ? 'nothing to undo' : readOnlyWord }),
+      act('redo', acts.redo, { key: 'Ctrl+Shift+Z', off: forth === 0 ? 'nothing to redo' : readOnlyWord }),
+      act('save', () => void saving.save(), {
+        key: 'Ctrl+S',
+        off: readOnlyWord ?? saving.blocked ?? (saving.dirty ? null : 'nothing to save'),
+      }),
+      ...(maySubmit && mayBeSubmitted
+        ? [
+            act('submit for approval', () => void submitAfterSave().catch(() => undefined), {
+              off: saving.blocked,
+            }),
+          ]
+        : []),
+      act('plate, head, jet', () => setOpen('setup')),
+      act('take away: drawing, table, sheet', () => setOpen('take-away')),
+      act('keys and help', () => setOpen('keys'), { key: '?' }),
+    ]
+  }
 
   async function submitAfterSave() {
     if (!saving.dirty || (await saving.save()) !== null) setOpen('submit')
