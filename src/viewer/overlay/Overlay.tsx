@@ -28,6 +28,8 @@ const TONES: Record<ChosenLabel['tone'], string> = {
 /** Lines behind a text give way to it, as on a map. */
 const HALO = '[text-shadow:0_0_2px_var(--sheet),0_0_2px_var(--sheet)]'
 
+const AXES = ['X', 'Y', 'Z'] as const
+
 /** Balloons that are worth drawing at once; the list of findings has them all. */
 const BALLOON_CAP = 60
 
@@ -41,6 +43,7 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
   const bar = useRef<HTMLDivElement>(null)
   const barText = useRef<HTMLSpanElement>(null)
   const reading = useRef<HTMLDivElement>(null)
+  const axes = useRef<SVGGElement>(null)
 
   const chosen = useMemo(
     () =>
@@ -67,6 +70,7 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
       bar: bar.current,
       barText: barText.current,
       reading: reading.current,
+      axes: axes.current,
     })
     layer.setUnit(scaleBar ?? null)
     layer.setLabels(
@@ -159,7 +163,29 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
           <div ref={bar} className="h-1.5 border-x border-b border-muted" />
         </div>
       )}
-      <div ref={reading} className={`absolute right-3 bottom-1.5 text-muted ${HALO}`} aria-hidden="true" />
+      <div className="absolute right-3 bottom-1.5 flex items-end gap-2 text-muted" aria-hidden="true">
+        <div ref={reading} className={HALO} />
+        <svg width={52} height={52} viewBox="-26 -26 52 52" fill="none" stroke="currentColor">
+          <g ref={axes}>
+            {AXES.map((name) => (
+              <path key={name} data-arm={name} />
+            ))}
+            {AXES.map((name) => (
+              <text
+                key={name}
+                data-letter={name}
+                textAnchor="middle"
+                dominantBaseline="central"
+                fontSize={9}
+                stroke="none"
+                fill="currentColor"
+              >
+                {name}
+              </text>
+            ))}
+          </g>
+        </svg>
+      </div>
     </div>
   )
 }

@@ -3,6 +3,7 @@ import { basisOf, projector, scaleOf, type ScreenPoint, type Vec3 } from '../cam
 import type { ViewControl } from '../camera/view-control.ts'
 import type { Picker } from '../pick/picker.ts'
 import { DISC_RADIUS } from '../scene/corner-discs.ts'
+import { drawAxes } from './axes.ts'
 import {
   balloonLeader,
   balloonPlaces,
@@ -62,6 +63,7 @@ export interface Fixed {
   readonly bar: HTMLElement | null
   readonly barText: HTMLElement | null
   readonly reading: HTMLElement | null
+  readonly axes: SVGGElement | null
 }
 
 /** Moves the texts over the picture, once a frame, by writing to the elements that React made. */
@@ -70,7 +72,15 @@ export class OverlayLayer {
   #balloons: BalloonNode[] = []
   #eventSize = { width: 0, height: 0 }
   #eventPlace: number | null = null
-  #fixed: Fixed = { leaders: null, event: null, eventText: null, bar: null, barText: null, reading: null }
+  #fixed: Fixed = {
+    leaders: null,
+    event: null,
+    eventText: null,
+    bar: null,
+    barText: null,
+    reading: null,
+    axes: null,
+  }
   #event: Vec3 | null = null
   #corners: readonly Vec3[] = []
   #unit: { unit: number; text: (value: number) => string } | null = null
@@ -126,6 +136,7 @@ export class OverlayLayer {
     this.#fixed.leaders?.setAttribute('d', scene.leaders.join(''))
     this.#writeBar(scaleOf(view, frame))
     if (this.#fixed.reading) write(this.#fixed.reading, readingOf(view))
+    if (this.#fixed.axes) drawAxes(this.#fixed.axes, basisOf(view))
   }
 
   /** What stands where it stands: discs, the event's mark, the scale bar. */
