@@ -8,6 +8,9 @@ import { useSize } from './camera/use-size.ts'
 import { ViewControl } from './camera/view-control.ts'
 import { actOfKey, type ActContext } from './controls/acts.ts'
 import { ViewStrip } from './controls/ViewStrip.tsx'
+import { chosenCut, type CutChoice } from './cut/cut-choice.ts'
+import { CutBar } from './cut/CutBar.tsx'
+import { useCut } from './cut/use-cut.ts'
 import { LOST_WEBGL, NO_WEBGL, NoPicture, PictureBoundary } from './Fallback.tsx'
 import { OverlayLayer } from './overlay/layer.ts'
 import { Overlay } from './overlay/Overlay.tsx'
@@ -25,7 +28,7 @@ const REACH = { fine: 8, coarse: 20 }
 const FOLD_BELOW = 620
 const NO_INSETS: Insets = { top: 0, right: 0, bottom: 0, left: 0 }
 const KEYS =
-  'Arrows turn, shift and arrows move, plus and minus zoom, F fits, 1 to 7 look from a side, Escape clears.'
+  'Arrows turn, shift and arrows move, plus and minus zoom, F fits, 1 to 7 look from a side, X, Y, Z and C cut open, 0 makes whole, Escape clears.'
 
 /**
  * The bevelled part in 3D, drawn as a drawing is. Turning, moving and zooming never render React: the
@@ -70,7 +73,15 @@ export default memo(function PartViewer(props: PartViewerProps) {
     askForFrame.current = ask
   }, [])
   const { tiltOf, breaches, thickness } = props
+  const [choice, setChoice] = useState<CutChoice | null>(null)
+  const cutEdge = selection[0]
+  const cut = useMemo(
+    () => choice && index && chosenCut(choice, index, cutEdge && index.edges.get(edgeKey(cutEdge))),
+    [choice, index, cutEdge],
+  )
   useDress({ part, index, picker, wrapper, tiltOf, selection, breaches, theme, thickness, invalidate })
+
+  const area = useCut({ part, picker, index, plane: cut?.plane ?? null, invalidate })
 
   /** Counts frames where a test can read them, without a render. */
   const onFrame = useCallback((ready: boolean) => {
@@ -111,6 +122,7 @@ export default memo(function PartViewer(props: PartViewerProps) {
       fitAll: () => control.fit(all()),
       fitSelection: () => control.fit(chosen()),
       clear: () => onSelect?.(null, 'replace'),
+      cutOpen: (direction) => setChoice(direction && { direction, turned: false, at: null }),
     }
   }, [control, index, selection, onSelect])
   const { onContext } = props
@@ -134,7 +146,10 @@ export default memo(function PartViewer(props: PartViewerProps) {
         dpr={[1, 2]}
         events={noEvents}
         resize={{ scroll: false }}
-        onCreated={({ gl }) => watchContext(gl.domElement, setLost, invalidate)}
+        onCreated={({ gl }) => {
+          gl.localClippingEnabled = true
+          watchContext(gl.domElement, setLost, invalidate)
+        }}
         className="absolute! inset-0"
       >
         <Scene
@@ -194,6 +209,7 @@ export default memo(function PartViewer(props: PartViewerProps) {
           {description} {KEYS}
         </p>
       </div>
+      {drawable && choice && <CutBar choice={choice} cut={cut} area={area} onChange={setChoice} />}
       {drawable && (
         <ViewStrip context={context} hasSelection={selection.length > 0} folded={folded} compact={compact} />
       )}

@@ -11,7 +11,7 @@ interface ViewStripProps {
   readonly compact: boolean
 }
 
-const GROUPS: readonly ActGroup[] = ['look from', 'fit', 'zoom', 'turn', 'move']
+const GROUPS: readonly ActGroup[] = ['look from', 'fit', 'zoom', 'turn', 'move', 'cut open']
 const FIRST = ACTS.filter((act) => act.first)
 const MORE = 'more'
 

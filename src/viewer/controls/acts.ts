@@ -1,4 +1,5 @@
 import { STANDARD_VIEWS, type StandardViewName } from '../camera/standard-views.ts'
+import { cutDirections, type CutDirection } from '../cut/cut-choice.ts'
 import type { ViewControl } from '../camera/view-control.ts'
 
 /** One step of a button or key: radians, a zoom factor, pixels. */
@@ -13,10 +14,11 @@ export interface ActContext {
   readonly fitAll: () => void
   readonly fitSelection: () => void
   readonly clear: () => void
+  readonly cutOpen: (direction: CutDirection | null) => void
 }
 
 export type Heading = 'left' | 'right' | 'up' | 'down'
-export type ActGroup = 'look from' | 'fit' | 'zoom' | 'turn' | 'move'
+export type ActGroup = 'look from' | 'fit' | 'zoom' | 'turn' | 'move' | 'cut open'
 
 export interface Act {
   readonly group: ActGroup
@@ -43,6 +45,15 @@ const looks = STANDARD_VIEWS.map(({ name }, i): Act => ({
   key: String(i + 1),
   first: name === 'corner' || name === 'top',
   run: ({ lookFrom }) => lookFrom(name),
+}))
+
+const cuts = cutDirections.map((direction): Act => ({
+  group: 'cut open',
+  text: direction,
+  name: direction === 'edge' ? 'cut open across the selected edge' : `cut open square to ${direction}`,
+  key: direction === 'edge' ? 'C' : direction,
+  needsSelection: direction === 'edge',
+  run: ({ cutOpen }) => cutOpen(direction),
 }))
 
 /** Every act of the camera, each with a button of its own. The part turns and moves the way its word says. */
@@ -83,6 +94,8 @@ export const ACTS: readonly Act[] = [
   { group: 'move', text: 'right', arrow: 'right', name: 'move right', key: 'shift →', run: move(1, 0) },
   { group: 'move', text: 'up', arrow: 'up', name: 'move up', key: 'shift ↑', run: move(0, -1) },
   { group: 'move', text: 'down', arrow: 'down', name: 'move down', key: 'shift ↓', run: move(0, 1) },
+  ...cuts,
+  { group: 'cut open', text: 'whole', name: 'whole part', key: '0', run: ({ cutOpen }) => cutOpen(null) },
 ]
 
 const ARROWS: Record<string, string> = { ArrowLeft: '←', ArrowRight: '→', ArrowUp: '↑', ArrowDown: '↓' }

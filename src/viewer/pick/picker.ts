@@ -13,7 +13,10 @@ import {
 } from '../camera/view-state.ts'
 import type { MeshIndex } from '../scene/mesh-index.ts'
 import { shiftInto } from '../scene/part-geometry.ts'
+import type { CutPlane } from '../cut/slice.ts'
 import { nearestLine } from './nearest-line.ts'
+
+type Hit = ReturnType<MeshBVH['raycast']>[number]
 
 /** A face nearer than this before a point is the one the point lies on, as a share of the part's radius. */
 const CLEAR = 2e-3
@@ -22,10 +25,16 @@ const CLEAR = 2e-3
 export class Picker {
   #index: MeshIndex | null = null
   #tree: MeshBVH | null = null
+  #cut: CutPlane | null = null
 
   setIndex(index: MeshIndex): void {
     this.#index = index
     this.#tree = null
+  }
+
+  /** What lies beyond the plane is not there. */
+  setCut(plane: CutPlane | null): void {
+    this.#cut = plane
   }
 
   /** The face that is seen from `toward` at a point of the plate's frame, and how far before the point it is. */
@@ -34,12 +43,25 @@ export class Picker {
     if (!index || index.mesh.indices.length === 0) return null
     this.#tree ??= buildTree(index)
     const far = index.radius * 2 + distance(point, index.centre)
-    const start = along(point, toward, far).map((value, axis) => value - index.centre[axis]!)
+    const start = along(point, toward, far).map(
+      (value, axis) => value - index.centre[axis]!,
+    ) as unknown as Vec3
     const ray = new Ray(new Vector3(...start), new Vector3(...toward).negate())
-    const hit = this.#tree.raycastFirst(ray, FrontSide)
+    const hit = this.#cut
+      ? this.#tree
+          .raycast(ray, FrontSide)
+          .filter(({ distance: way }) => this.#stays(along(start, toward, -way), index.centre))
+          .reduce<Hit | null>((near, other) => (near && near.distance <= other.distance ? near : other), null)
+      : this.#tree.raycastFirst(ray, FrontSide)
     if (!hit || hit.faceIndex === null || hit.faceIndex === undefined) return null
     const face = index.mesh.faces[index.mesh.faceOfTriangle[hit.faceIndex]!]
     return face ? { face, before: far - hit.distance } : null
+  }
+
+  #stays(point: Vec3, centre: Vec3): boolean {
+    if (!this.#cut) return true
+    const { normal, at } = this.#cut
+    return normal.reduce((sum, value, axis) => sum + value * (point[axis]! + centre[axis]!), -at) <= 0
   }
 
   /** The edge meant by a pixel: the wall under it, else a rim within `reach` px. */

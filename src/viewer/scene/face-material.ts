@@ -7,16 +7,20 @@ import type { Palette, Rgb } from '../palette.ts'
  * and the breach hatch ruled over it in screen space, so that its lines keep their pitch at any zoom.
  */
 const vertexShader = /* glsl */ `
+#include <clipping_planes_pars_vertex>
 attribute vec4 paint;
 varying vec4 vPaint;
 varying vec3 vNormal;
 void main() {
   vPaint = paint;
   vNormal = normalMatrix * normal;
-  gl_Position = projectionMatrix * modelViewMatrix * vec4(position, 1.0);
+  vec4 mvPosition = modelViewMatrix * vec4(position, 1.0);
+  gl_Position = projectionMatrix * mvPosition;
+  #include <clipping_planes_vertex>
 }`
 
 const fragmentShader = /* glsl */ `
+#include <clipping_planes_pars_fragment>
 uniform vec3 hatch;
 uniform vec3 sheet;
 uniform float veil;
@@ -28,6 +32,7 @@ const vec3 light = normalize(vec3(-0.35, 0.75, 0.65));
 const float pitch = 9.0;
 const float halfWidth = 0.85;
 void main() {
+  #include <clipping_planes_fragment>
   float facing = dot(normalize(vNormal), light);
   vec3 colour = vPaint.rgb * (1.0 - shade * (0.5 - 0.5 * facing));
   if (vPaint.a > 0.5) {
@@ -51,6 +56,7 @@ export class FaceMaterial extends ShaderMaterial {
       vertexShader,
       fragmentShader,
       side: FrontSide,
+      clipping: true,
       uniforms: {
         hatch: { value: new Vector3() },
         sheet: { value: new Vector3() },

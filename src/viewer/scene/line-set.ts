@@ -9,6 +9,7 @@ import {
   LessEqualDepth,
   LineBasicMaterial,
   LineSegments,
+  type Plane,
 } from 'three'
 import { LineMaterial } from 'three/examples/jsm/lines/LineMaterial.js'
 import { LineSegments2 } from 'three/examples/jsm/lines/LineSegments2.js'
@@ -104,6 +105,12 @@ export class LineSet {
     const colour = new Color(`rgb(${r},${g},${b})`)
     this.#plainMaterial.color = colour
     for (const material of this.#materials) material.color = colour
+  }
+
+  /** Draws the lines only on the near side of these planes. */
+  clip(planes: Plane[]): void {
+    this.#plainMaterial.clippingPlanes = planes
+    for (const material of this.#materials) material.clippingPlanes = planes
   }
 
   /** Leaves the lines, or only their hidden part, out of the picture without forgetting them. */

@@ -2,6 +2,8 @@ import { Group, Mesh } from 'three'
 import { edgeKey } from '../../../shared/walls/names.ts'
 import type { CornerRef, EdgeRef } from '../../../shared/walls/types.ts'
 import type { Basis } from '../camera/view-state.ts'
+import { CutObject } from '../cut/cut-object.ts'
+import type { CutPlane, CutSurface } from '../cut/slice.ts'
 import { mix, type Palette } from '../palette.ts'
 import { CornerDiscs } from './corner-discs.ts'
 import { FaceMaterial } from './face-material.ts'
@@ -35,6 +37,7 @@ export class PartScene {
   readonly #part = new PartGeometry()
   readonly #faces = new FaceMaterial()
   readonly #discs = new CornerDiscs()
+  readonly #cut = new CutObject()
   readonly #lines = {
     level: new LineSet({ width: 0.9, opacity: 0.5, order: 2 }),
     seam: new LineSet({ width: 1.1, opacity: 0.85, hidden: { width: 0.9, opacity: 0.22 }, order: 3 }),
@@ -51,7 +54,7 @@ export class PartScene {
   constructor() {
     const faces = new Mesh(this.#part.geometry, this.#faces)
     faces.frustumCulled = false
-    this.group.add(faces, this.#discs.object)
+    this.group.add(faces, this.#discs.object, this.#cut.group)
     for (const set of Object.values(this.#lines)) {
       this.group.add(set.shown, set.plain)
       if (set.behind) this.group.add(set.behind)
@@ -91,6 +94,7 @@ export class PartScene {
     lines.thinSelect.colour(mix(palette.select, palette.ink, 0.15))
     lines.breach.colour(palette.breach)
     this.#discs.colour(palette.breach, palette.sheet)
+    this.#cut.dress(palette)
 
     const chosen = selection.flatMap((edge) => index.edges.get(edgeKey(edge)) ?? [])
     const broken = breaches.edges.flatMap((edge) => index.edges.get(edgeKey(edge)) ?? [])
@@ -112,6 +116,14 @@ export class PartScene {
     )
   }
 
+  /** Cuts the part open, or makes it whole again. */
+  cut(cut: { plane: CutPlane; surface: CutSurface } | null): void {
+    this.#cut.show(cut, this.#index?.centre ?? [0, 0, 0])
+    const planes = cut ? [this.#cut.plane] : []
+    this.#faces.clippingPlanes = planes
+    for (const set of Object.values(this.#lines)) set.clip(planes)
+  }
+
   /** Outlines the edge under the pointer; answers whether that is another one than before. */
   hover(edge: EdgeRef | null): boolean {
     const key = edge && edgeKey(edge)
@@ -130,6 +142,8 @@ export class PartScene {
       lift(set.plain, toward, LINE_LIFT / pixelsPerMm)
       if (set.behind) lift(set.behind, toward, HIDDEN_LIFT / pixelsPerMm)
     }
+    lift(this.#cut.lines.shown, toward, LINE_LIFT / pixelsPerMm)
+    lift(this.#cut.lines.plain, toward, LINE_LIFT / pixelsPerMm)
     const apart = (this.#index?.meanEdge ?? 0) * pixelsPerMm
     this.#lines.seam.omit(apart < CROWDED, apart < CROWDED_BEHIND)
     this.#lines.level.omit(apart < CROWDED)
@@ -144,6 +158,7 @@ export class PartScene {
     this.#part.dispose()
     this.#faces.dispose()
     this.#discs.dispose()
+    this.#cut.dispose()
     for (const set of Object.values(this.#lines)) set.dispose()
   }
 }
