@@ -1,5 +1,7 @@
 import { edgeName } from '../walls/names.ts'
-import { formatAngle } from '../units/format.ts'
+import { radians } from '../units/angle.ts'
+import { formatAngle, formatLength } from '../units/format.ts'
+import { firstRise, reachability } from '../walls/reachability.ts'
 import {
   LIMIT_ROUNDING,
   limitPassed,
@@ -58,12 +60,18 @@ function cureEdge(wall: EdgeWall, facet: number, taper: number, limit: number): 
   }
 }
 
-/** A wall whose tilt increases with depth: a straight jet from the top would cut into the part. */
+/** A wall whose tilt increases with depth: a straight jet would cut into the part. */
 export function facetsCutIn(wall: EdgeWall): Finding | null {
-  const index = wall.facets.findIndex(({ tilt }, i) => i > 0 && tilt > (wall.facets[i - 1]?.tilt ?? tilt))
-  const [above, below] = [wall.facets[index - 1], wall.facets[index]]
-  if (!above || !below) return null
+  if (firstRise(wall.facets) < 0) return null
+  const reach = reachability(wall.facets.map(({ depth, tilt }) => ({ depth, tilt: radians(tilt) })))
+  if (reach.kind === 'reachable') return null
+  const { facet } = reach
+  const above = wall.facets[facet - 1]!
+  const below = wall.facets[facet]!
   const name = edgeName(wall)
+  const overs = reach.turnedOverDoes
+    ? 'Turned over, the plate could be cut.'
+    : 'Turning the plate over does not help: the jet goes through the whole plate from either face.'
   return {
     code: 'facets-cut-into-part',
     severity: 'stop',
@@ -72,14 +80,29 @@ export function facetsCutIn(wall: EdgeWall): Finding | null {
     value: below.tilt,
     limit: above.tilt,
     message:
-      `Edge ${name} goes from ${formatAngle(above.tilt, { sign: true })} to ${formatAngle(below.tilt, { sign: true })} ` +
-      `at ${formatDepth(above.depth)}. A straight jet from the top would cut into the part.`,
-    cure: {
-      message: `Cut ${name} in a second set-up with the plate turned over, or let its tilt only decrease with depth.`,
-    },
+      `Facet ${facet + 1} of edge ${name} leans ${formatAngle(below.tilt, { sign: true })} under ` +
+      `${formatAngle(above.tilt, { sign: true })} at ${formatLength(above.depth, 'mm')}. Cutting either facet, a ` +
+      `straight jet would go up to ${formatLength(reach.intoPart, 'mm')} into the part. ${overs}`,
+    cure: cureFacet(wall, facet, above.tilt, reach.partDepth),
   }
 }
 
-function formatDepth(depth: number): string {
-  return `${Number(depth.toFixed(2))} mm`
+function cureFacet(
+  wall: EdgeWall,
+  facet: number,
+  tilt: number,
+  partDepth: { readonly fromTop: readonly number[]; readonly fromBottom: readonly number[] } | null,
+): Cure {
+  const name = edgeName(wall)
+  const list = (facets: readonly number[]) => facets.map((i) => i + 1).join(' and ')
+  const split = partDepth
+    ? ` Only cuts that stop inside the plate could keep the shape: facet ${list(partDepth.fromTop)} from the top, ` +
+      `${list(partDepth.fromBottom)} from the bottom.`
+    : ''
+  if (!withTilt(wall, facet, tilt))
+    return { message: `Let the tilt of ${name} only decrease with depth.${split}` }
+  return {
+    message: `Set facet ${facet + 1} of ${name} to ${formatAngle(tilt, { sign: true })} or less.${split}`,
+    set: { edges: [{ loop: wall.loop, edge: wall.edge }], facet, tilt },
+  }
 }

@@ -1,10 +1,6 @@
-/** Is a measured value inside its band? */
+import type { Band } from '../units/band.ts'
 
-/** How far over and under the nominal is allowed, both positive. */
-export interface Band {
-  readonly plus: number
-  readonly minus: number
-}
+/** Is a measured value inside its band? */
 
 export interface Judgement {
   readonly verdict: 'in' | 'over' | 'under'

@@ -11,15 +11,26 @@ export interface SectionPoint {
   readonly depth: number
 }
 
-/** Which other plate stands opposite: the same prep mirrored, or a square edge. */
-export type Mate = 'same' | 'square'
+/**
+ * Which other plate stands opposite: the same prep mirrored, a square edge, or facets of its own, told like this
+ * plate's (from the top face down, outward towards this plate positive).
+ */
+export type Mate = 'same' | 'square' | readonly FacetSpec[]
+
+/** The facets that stand opposite; none is square. */
+export function mateFacetsOf(facets: readonly FacetSpec[], mate: Mate): readonly FacetSpec[] {
+  return mate === 'same' ? facets : mate === 'square' ? [] : mate
+}
 
 export interface JointInput {
   /** From the top face down; the last ends at the thickness. */
   readonly facets: readonly FacetSpec[]
   readonly thickness: number
   readonly mate: Mate
-  /** Gap at the closest point. */
+  /**
+   * Gap between the outermost lines of both walls. That is the closest they come wherever these lines lie at one
+   * depth, as with every mirrored or square mate; otherwise see `narrowest`.
+   */
   readonly rootOpening: number
 }
 
@@ -44,29 +55,47 @@ export interface JointSection {
   /** Width of the groove at the top and at the bottom face. */
   readonly widthTop: number
   readonly widthBottom: number
+  /** Least width at any depth. */
+  readonly narrowest: number
   /** Area between the plates over the whole thickness, mm². */
   readonly area: number
 }
 
 export function jointSection({ facets, thickness, mate, rootOpening }: JointInput): JointSection {
-  const own = sectionOf(facets, thickness)
-  const other = mate === 'same' ? own : sectionOf([], thickness)
-  const left = own
-  const right = other.map(({ x, depth }) => ({ x: rootOpening - x, depth }))
-  const sides = mate === 'same' ? 2 : 1
-  const last = facets.at(-1)
+  const facing = mateFacetsOf(facets, mate)
+  const left = sectionOf(facets, thickness)
+  const other = sectionOf(facing, thickness)
   return {
     thickness,
     rootOpening,
     left,
-    right,
+    right: other.map(({ x, depth }) => ({ x: rootOpening - x, depth })),
     rootFace: rootFaceOf(facets, thickness),
-    grooveAngleTop: sides * Math.max(0, facets[0]?.tilt ?? 0),
-    grooveAngleBottom: sides * Math.max(0, -(last?.tilt ?? 0)),
-    widthTop: rootOpening - (own[0]?.x ?? 0) - (other[0]?.x ?? 0),
-    widthBottom: rootOpening - (own.at(-1)?.x ?? 0) - (other.at(-1)?.x ?? 0),
-    area: rootOpening * thickness + hollowBeside(own) + hollowBeside(other),
+    // A wall that leans over its mate's bevel takes from the angle between them.
+    grooveAngleTop: Math.max(0, (facets[0]?.tilt ?? 0) + (facing[0]?.tilt ?? 0)),
+    grooveAngleBottom: Math.max(0, -(facets.at(-1)?.tilt ?? 0) - (facing.at(-1)?.tilt ?? 0)),
+    widthTop: rootOpening - (left[0]?.x ?? 0) - (other[0]?.x ?? 0),
+    widthBottom: rootOpening - (left.at(-1)?.x ?? 0) - (other.at(-1)?.x ?? 0),
+    narrowest: rootOpening + least(left, other),
+    area: rootOpening * thickness + hollowBeside(left) + hollowBeside(other),
   }
+}
+
+/** Least of what both walls leave free beyond the gap: they are made of straight pieces, so at an end of one. */
+function least(left: readonly SectionPoint[], other: readonly SectionPoint[]): number {
+  const depths = [...left, ...other].map(({ depth }) => depth)
+  return Math.min(...depths.map((depth) => -xAt(left, depth) - xAt(other, depth)))
+}
+
+function xAt(wall: readonly SectionPoint[], depth: number): number {
+  const i = Math.max(
+    1,
+    wall.findIndex((point) => point.depth >= depth),
+  )
+  const [above, below] = [wall[i - 1], wall[i]]
+  if (!above || !below) throw new RangeError(`no wall at a depth of ${depth} mm`)
+  if (depth === below.depth) return below.x
+  return above.x + ((depth - above.depth) / (below.depth - above.depth)) * (below.x - above.x)
 }
 
 /** One wall's line: from the top face down, x = 0 at its outermost point and negative where it stands back. */

@@ -1,5 +1,5 @@
 import type { FacetSpec } from '../../shared/walls/schema.ts'
-import { jointSection, sectionOf, type SectionPoint } from '../../shared/joint/section.ts'
+import { jointSection, mateFacetsOf, sectionOf, type SectionPoint } from '../../shared/joint/section.ts'
 import type { SectionSpec } from './types.ts'
 
 export interface Outline {
@@ -22,5 +22,6 @@ export function outlineOf({ facets, thickness, joint }: SectionSpec): Outline {
 
 /** The other plate's own facets, outward positive. */
 export function mateFacets({ facets, thickness, joint }: SectionSpec): readonly FacetSpec[] {
-  return joint?.mate === 'same' ? facets : [{ depth: thickness, tilt: 0 }]
+  const facing = joint ? mateFacetsOf(facets, joint.mate) : []
+  return facing.length > 0 ? facing : [{ depth: thickness, tilt: 0 }]
 }

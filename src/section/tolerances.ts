@@ -1,4 +1,4 @@
-import type { Band } from '../../shared/joint/judge.ts'
+import type { Band } from '../../shared/units/band.ts'
 import type { JointSpec } from '../../shared/setup/schema.ts'
 import { formatAngle, formatLength } from '../../shared/units/format.ts'
 import type { DisplayUnit } from '../../shared/units/length.ts'

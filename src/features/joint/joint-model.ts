@@ -1,7 +1,8 @@
 import { edgeName } from '../../../shared/walls/names.ts'
 import type { EdgeRef } from '../../../shared/walls/types.ts'
 import type { FacetSpec } from '../../../shared/walls/schema.ts'
-import { judge, type Band } from '../../../shared/joint/judge.ts'
+import type { Band } from '../../../shared/units/band.ts'
+import { judge } from '../../../shared/joint/judge.ts'
 import type { JointSpec, SetupContent } from '../../../shared/setup/schema.ts'
 import { anglesThreeWays, type AngleThreeWays } from '../../../shared/joint/angles.ts'
 

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { angleTolerance, type AngleToleranceClass } from '../../../shared/joint/angle-tolerance.ts'
-import { startingValues, startingValuesFor } from '../../../shared/joint/starting-values.ts'
+import { startingValues, startingValuesFor } from '../../../shared/prep/starting-values.ts'
 
 /** ISO 13920, general tolerances for angles (seen): minutes for a shorter leg ≤ 400, ≤ 1000, > 1000 mm. */
 describe('ISO 13920 angle tolerances', () => {

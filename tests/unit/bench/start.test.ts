@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { startingValues, startingValuesFor } from '../../../shared/joint/starting-values.ts'
+import { startingValues, startingValuesFor } from '../../../shared/prep/starting-values.ts'
 import { startFrom } from '../../../src/features/bench/model/start.ts'
 
 const row = (detail: string) => startingValues.find((each) => each.detail === detail)!

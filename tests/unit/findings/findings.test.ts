@@ -15,7 +15,7 @@ const notch = [
 ]
 
 describe('findings about the part', () => {
-  it('a tilt that increases with depth asks for a second set-up', () => {
+  it('a tilt that increases with depth cannot be cut from either face', () => {
     const facets = [
       { depth: 4, tilt: -20 },
       { depth: 10, tilt: 10 },
@@ -27,10 +27,17 @@ describe('findings about the part', () => {
         severity: 'stop',
         edge: 2,
         message:
-          'Edge e3 goes from −20° to +10° at 4 mm. A straight jet from the top would cut into the part.',
+          'Facet 2 of edge e3 leans +10° under −20° at 4 mm. Cutting either facet, a straight jet would go up to ' +
+          '3.24 mm into the part. Turning the plate over does not help: the jet goes through the whole plate from ' +
+          'either face.',
       },
     ])
-    expect(answer.findings[0]?.cure?.message).toContain('second set-up')
+    expect(answer.findings[0]?.cure).toEqual({
+      message:
+        'Set facet 2 of e3 to −20° or less. Only cuts that stop inside the plate could keep the shape: facet 1 from ' +
+        'the top, 2 from the bottom.',
+      set: { edges: [{ loop: 0, edge: 2 }], facet: 1, tilt: -20 },
+    })
   })
 
   it('a concave corner keeps half the kerf as a fillet; a convex one does not', () => {

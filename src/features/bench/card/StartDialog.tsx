@@ -4,7 +4,7 @@ import {
   startingValuesFor,
   type Range,
   type StartingValue,
-} from '../../../../shared/joint/starting-values.ts'
+} from '../../../../shared/prep/starting-values.ts'
 import { formatAngle, formatLength } from '../../../../shared/units/format.ts'
 import type { DisplayUnit } from '../../../../shared/units/length.ts'
 import { Button } from '../../../ui/Button.tsx'
