@@ -2,13 +2,14 @@ import { Canvas } from '@react-three/fiber'
 import { memo, useCallback, useEffect, useId, useMemo, useRef, useState } from 'react'
 import { edgeKey } from '../../shared/walls/names.ts'
 import { standardView } from './camera/standard-views.ts'
+import { basisOf } from './camera/view-state.ts'
 import { useGestures } from './camera/use-gestures.ts'
 import { useFirstView } from './camera/use-first-view.ts'
 import { useSize } from './camera/use-size.ts'
 import { ViewControl } from './camera/view-control.ts'
 import { actOfKey, type ActContext } from './controls/acts.ts'
 import { ViewStrip } from './controls/ViewStrip.tsx'
-import { chosenCut, type CutChoice } from './cut/cut-choice.ts'
+import { chosenCut, firstCut, type CutChoice } from './cut/cut-choice.ts'
 import { CutBar } from './cut/CutBar.tsx'
 import { useCut } from './cut/use-cut.ts'
 import { LOST_WEBGL, NO_WEBGL, NoPicture, PictureBoundary } from './Fallback.tsx'
@@ -122,7 +123,10 @@ export default memo(function PartViewer(props: PartViewerProps) {
       fitAll: () => control.fit(all()),
       fitSelection: () => control.fit(chosen()),
       clear: () => onSelect?.(null, 'replace'),
-      cutOpen: (direction) => setChoice(direction && { direction, turned: false, at: null }),
+      cutOpen: (direction) => {
+        const edge = selection[0] && index?.edges.get(edgeKey(selection[0]))
+        setChoice(direction && firstCut(direction, basisOf(control.goal).toward, edge))
+      },
     }
   }, [control, index, selection, onSelect])
   const { onContext } = props

@@ -15,6 +15,13 @@ export interface CutChoice {
   readonly at: number | null
 }
 
+/** A first choice that takes away the half on the eye's side, so that the cut surface is seen. */
+export function firstCut(direction: CutDirection, toward: Vec3, edge: EdgeLines | undefined): CutChoice {
+  const normal = wayOf(direction, edge)?.normal ?? toward
+  const facing = normal.reduce((sum, value, axis) => sum + value * toward[axis]!, 0)
+  return { direction, turned: facing < 0, at: null }
+}
+
 /** The plane that a choice means for a part, and the ends of its way. */
 export interface ChosenCut {
   readonly plane: CutPlane

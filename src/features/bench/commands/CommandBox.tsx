@@ -1,4 +1,4 @@
-import { useId, useMemo, useState } from 'react'
+import { useEffect, useId, useMemo, useRef, useState } from 'react'
 import { controlClass } from '../../../ui/Field.tsx'
 import { Dialog } from '../../../ui/Dialog.tsx'
 import { useScene } from '../scene.ts'
@@ -20,6 +20,9 @@ export function CommandBox({ ofSetup, onClose }: CommandBoxProps) {
   const [typed, setTyped] = useState('')
   const [at, setAt] = useState(0)
   const list = useId()
+  const field = useRef<HTMLInputElement>(null)
+  // The dialog gives the focus to its first button; what is typed next belongs in the field.
+  useEffect(() => field.current?.focus(), [])
   const found = useMemo(() => matching(commands, typed).slice(0, MOST_SHOWN), [commands, typed])
   const active = found[Math.min(at, found.length - 1)]
   const idOf = (command: Command) => `${list}-${command.id}`
@@ -50,7 +53,7 @@ export function CommandBox({ ofSetup, onClose }: CommandBoxProps) {
         aria-activedescendant={active && idOf(active)}
         autoComplete="off"
         spellCheck={false}
-        autoFocus
+        ref={field}
         placeholder="undo, parallel, e12, look from the top …"
         value={typed}
         onChange={(event) => {
