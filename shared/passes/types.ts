@@ -56,7 +56,49 @@ export const CornerMove = {
   lean: 1,
   runOut: 2,
   pivot: 3,
+  /** A smooth corner of unlike walls: the jet goes over from one to the other along the end of the longer edge. */
+  step: 4,
 } as const
+export type CornerMove = (typeof CornerMove)[keyof typeof CornerMove]
+
+/** Why the jet cannot lean round a corner. */
+export const LeanRefusal = {
+  none: 0,
+  /** The seam asks for more tilt than the limit. */
+  overLimit: 1,
+  /** On an edge beside it the top or the bottom of the jet would have to go backward. */
+  edgeTooShort: 2,
+  /** The corner is sharper than twice the taper: no jet leaves both walls. */
+  noJet: 3,
+  /** There is no seam: smooth, or lines that double back. */
+  noSeam: 4,
+} as const
+export type LeanRefusal = (typeof LeanRefusal)[keyof typeof LeanRefusal]
+
+/** The jet as a coupon tells it: width at the top face, mm; taper per side, radians. */
+export interface Jet {
+  readonly kerf: number
+  readonly taper: number
+  /** Nozzle tip to plate along the axis, and the nozzle's outside, mm. */
+  readonly standoff?: number | undefined
+  readonly nozzleDiameter?: number | undefined
+}
+
+export interface PassLimits {
+  /** The strictest limit of the jet's whole tilt, radians; null where none is set. */
+  readonly tilt: number | null
+}
+
+/** What the user has settled; everything left out is chosen here. */
+export interface PassChoices {
+  /** By corner, numbered through all loops as the edge that starts there. */
+  readonly corners?: ReadonlyMap<number, CornerMove> | undefined
+  /** Wished length of the leads in and out, mm. */
+  readonly leadIn?: number | undefined
+  readonly leadOut?: number | undefined
+  /** How far a pass that closes in the middle of an edge runs past its start, mm. */
+  readonly overlap?: number | undefined
+}
 
 export const passReasons = [
   'holes-before-outside',
@@ -79,10 +121,43 @@ export interface Pass {
   readonly reasons: readonly PassReason[]
 }
 
+export const passProblemCodes = [
+  /** At this corner no way round works; the jet leans, past the limit. */
+  'no-corner-move',
+  /** The way round that was chosen does not work here; the default is taken. */
+  'choice-refused',
+  /** The loop has no place where the jet can pierce and lead in clear of every wall. */
+  'no-room-to-pierce',
+  /** The edge lies in a hollow into which the jet does not fit; `value`: how much it leaves there, mm. */
+  'detail-finer-than-jet',
+  /** The tilted jets of opposite walls cross within the plate; `value`: the smallest diameter that works, mm. */
+  'hole-too-small-for-tilt',
+  /** The seam beside an arc is bent, the jet straight; `value`: how far they part, mm. */
+  'bent-seam',
+] as const
+export type PassProblemCode = (typeof passProblemCodes)[number]
+
+/** What cannot be done as asked, and where. */
+export interface PassProblem {
+  readonly code: PassProblemCode
+  readonly loop: number
+  /** Edge or corner, numbered through all loops; −1 where the whole loop is meant. */
+  readonly at: number
+  readonly level: number
+  readonly value: number | null
+}
+
 /** Passes stand in the order in which they are cut. */
 export interface Passes {
   readonly path: JetPath
   readonly passes: readonly Pass[]
   /** Per corner g (where edge g starts) a `CornerMove`: how the level-0 pass goes round it. */
   readonly cornerMoves: Uint8Array
+  /** Per corner: bit 1 << move is set for every `CornerMove` that works there. */
+  readonly cornerOffers: Uint8Array
+  /** Per corner a `LeanRefusal`. Run out and pivot are refused where the corner is not convex. */
+  readonly leanRefusals: Uint8Array
+  /** Per edge: its first station in the level-0 pass; −1 where that pass leaves the edge out. */
+  readonly firstStation: Int32Array
+  readonly problems: readonly PassProblem[]
 }

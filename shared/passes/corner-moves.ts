@@ -1,0 +1,190 @@
+import { branchPoint } from '../contours/branch.ts'
+import { CornerMode } from '../contours/frame.ts'
+import { makeAxisEdge, readAxisEdge } from './axis-edges.ts'
+import { wallCorner, type Level } from './level.ts'
+import { CornerMove, LeanRefusal, type PassChoices, type PassLimits, type PassProblem } from './types.ts'
+
+/** How a level goes round each corner, what else would work, and why not. */
+export interface CornerMoves {
+  readonly move: Uint8Array
+  readonly offers: Uint8Array
+  readonly refusals: Uint8Array
+  readonly problems: readonly PassProblem[]
+}
+
+/**
+ * How far a seam may seem to pass a limit through rounding alone, radians: thousands of times what double
+ * precision loses, millions of times finer than a head can turn (as the findings have it).
+ */
+const LIMIT_ROUNDING = 1e-11
+
+/** Past this turn of an arc's prolongation a run out along it would come back to the part, radians: our choice. */
+const WIDEST_ARC_RUN_OUT = Math.PI / 4
+
+/**
+ * Chooses a move for every corner: the user's where it works, else the first that works of lean, run out and
+ * pivot. A lean beside an edge that is too short for it gives way, which can shorten no other edge's room.
+ */
+export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassChoices): CornerMoves {
+  const { frame, previous, gone } = level
+  const { count, mode, turn } = frame
+  const move = new Uint8Array(count)
+  const offers = new Uint8Array(count)
+  const refusals = new Uint8Array(count)
+  const problems: PassProblem[] = []
+  const steepest = limits.tilt === null ? Infinity : Math.tan(limits.tilt + LIMIT_ROUNDING) ** 2
+  for (let g = 0; g < count; g++) {
+    if (gone[g]) continue
+    if (mode[g] === CornerMode.smooth || mode[g] === CornerMode.step) {
+      move[g] = mode[g] === CornerMode.smooth ? CornerMove.none : CornerMove.step
+      offers[g] = 1 << move[g]!
+      refusals[g] = LeanRefusal.noSeam
+      continue
+    }
+    const steep = level.p[g]! * level.p[g]! + level.q[g]! * level.q[g]!
+    if (mode[g] === CornerMode.spike) refusals[g] = LeanRefusal.noSeam
+    else if (level.unfit[g]) refusals[g] = LeanRefusal.noJet
+    else if (steep > steepest) refusals[g] = LeanRefusal.overLimit
+    else offers[g] = 1 << CornerMove.lean
+    if (turn[g]! > 0 && previous[g] === frame.previous[g]) {
+      offers[g]! |= 1 << CornerMove.pivot
+      if (canRunOut(level, g)) offers[g]! |= 1 << CornerMove.runOut
+    }
+    move[g] = firstOffer(offers[g]!)
+  }
+  for (const [g, wished] of choices.corners ?? []) {
+    if (g >= 0 && g < count && !gone[g] && offers[g]! & (1 << wished)) move[g] = wished
+  }
+  yieldLeans(level, move, offers, refusals)
+  for (const [g, wished] of choices.corners ?? []) {
+    if (g >= 0 && g < count && !gone[g] && move[g] !== wished) {
+      problems.push(cornerProblem(level, 'choice-refused', g))
+    }
+  }
+  for (let g = 0; g < count; g++) {
+    if (!gone[g] && offers[g] === 0) problems.push(cornerProblem(level, 'no-corner-move', g))
+  }
+  return { move, offers, refusals, problems }
+}
+
+function cornerProblem(level: Level, code: PassProblem['code'], g: number): PassProblem {
+  return { code, loop: level.frame.loopOf[g]!, at: g, level: level.level, value: null }
+}
+
+/** The first that works; where none does the jet leans past its limit, so that a path stands to be looked at. */
+function firstOffer(offers: number): CornerMove {
+  if (offers & (1 << CornerMove.lean)) return CornerMove.lean
+  if (offers & (1 << CornerMove.runOut)) return CornerMove.runOut
+  if (offers & (1 << CornerMove.pivot)) return CornerMove.pivot
+  return CornerMove.lean
+}
+
+/**
+ * Takes back leans beside edges that are too short: where the other end is met square, the jet's bottom must
+ * still go forward. Giving one up can only bring the next edge's turn, so each corner changes once.
+ */
+function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals: Uint8Array): void {
+  const { frame, previous, next, gone } = level
+  const t = frame.body.thickness
+  const edge = makeAxisEdge()
+  const waiting: number[] = []
+  const look = (g: number) => {
+    const h = next[g]!
+    const leansAtStart = move[g] === CornerMove.lean
+    const leansAtEnd = move[h] === CornerMove.lean
+    if (leansAtStart === leansAtEnd) return
+    const { length, alongStart, alongEnd } = readAxisEdge(level, g, edge)
+    const left = leansAtStart ? length - t * alongStart : length + t * alongEnd
+    if (left > 0) return
+    const corner = leansAtStart ? g : h
+    if (refusals[corner] === LeanRefusal.none) refusals[corner] = LeanRefusal.edgeTooShort
+    offers[corner]! &= ~(1 << CornerMove.lean)
+    const instead = firstOffer(offers[corner]!)
+    if (instead === CornerMove.lean) return
+    move[corner] = instead
+    waiting.push(leansAtStart ? previous[g]! : h)
+  }
+  for (let g = 0; g < frame.count; g++) {
+    if (gone[g]) continue
+    look(g)
+    while (waiting.length > 0) look(waiting.pop()!)
+  }
+}
+
+/** How far the jet runs on past the axis' corner before its wall is finished at every depth, and how far it starts before the next. */
+export function runOutLengths(level: Level, g: number): { readonly before: number; readonly after: number } {
+  const { frame, axis, figure, previous, x, y, p, q } = level
+  const t = frame.body.thickness
+  const f1 = figure[previous[g]!]!
+  const f2 = figure[g]!
+  const top = wallCorner(level, g)
+  const bottom = wallCornerBelow(level, g)
+  const u1 = directionBefore(level, g)
+  const u2 = directionAfter(level, g)
+  let before = 0
+  let after = 0
+  for (const [dx, dy] of [
+    [top.x - x[g]!, top.y - y[g]!],
+    [bottom.x - x[g]!, bottom.y - y[g]!],
+    [t * p[g]!, t * q[g]!],
+  ] as const) {
+    before = Math.max(before, dx * u1.x + dy * u1.y)
+    after = Math.max(after, -dx * u2.x - dy * u2.y)
+  }
+  return {
+    before: before + halfWidth(level, axis.end.slope[f1]!),
+    after: after + halfWidth(level, axis.start.slope[f2]!),
+  }
+}
+
+/** Half the jet's width across a level plane along its lean, where it is widest within the plate, mm. */
+export function halfWidth({ jet, frame }: Level, slope: number): number {
+  const length = Math.sqrt(1 + slope * slope)
+  const widening = Math.max(0, -Math.tan(jet.taper)) * frame.body.thickness * length
+  return (jet.kerf / 2 + widening) * length
+}
+
+function wallCornerBelow(level: Level, g: number): { readonly x: number; readonly y: number } {
+  const { frame, axis, figure, previous } = level
+  const t = frame.body.thickness
+  const f1 = figure[previous[g]!]!
+  const f2 = figure[g]!
+  const o1 = axis.end.wall[f1]! + t * axis.end.tan[f1]!
+  const o2 = axis.start.wall[f2]! + t * axis.start.tan[f2]!
+  const branch = frame.branches.get(g)
+  if (branch) return branchPoint(branch, o1, o2)
+  const o = frame.mode[g] === CornerMode.mitre ? o2 - o1 : 0
+  return {
+    x: frame.px[g]! + o1 * frame.mx[g]! + o * frame.kx[g]!,
+    y: frame.py[g]! + o1 * frame.my[g]! + o * frame.ky[g]!,
+  }
+}
+
+/** Directions of travel at the axis' corner g, along the edge before it and along its own. */
+export function directionBefore(level: Level, g: number): { readonly x: number; readonly y: number } {
+  return directionAt(level, level.previous[g]!, g)
+}
+
+export function directionAfter(level: Level, g: number): { readonly x: number; readonly y: number } {
+  return directionAt(level, g, g)
+}
+
+function directionAt({ frame, x, y }: Level, edge: number, g: number) {
+  if (!frame.arc[edge]) return { x: frame.ux[edge]!, y: frame.uy[edge]! }
+  const dx = x[g]! - frame.cx[edge]!
+  const dy = y[g]! - frame.cy[edge]!
+  const scale = Math.sign(frame.sweep[edge]!) / Math.hypot(dx, dy)
+  return { x: -dy * scale, y: dx * scale }
+}
+
+/** A run out along an arc's circle must end before it turns back to the part. */
+function canRunOut(level: Level, g: number): boolean {
+  const { frame, previous, x, y } = level
+  const p = previous[g]!
+  if (!frame.arc[p] && !frame.arc[g]) return true
+  const { before, after } = runOutLengths(level, g)
+  const widest = Math.min(frame.turn[g]!, WIDEST_ARC_RUN_OUT)
+  const fits = (edge: number, length: number) =>
+    !frame.arc[edge] || length <= widest * Math.hypot(x[g]! - frame.cx[edge]!, y[g]! - frame.cy[edge]!)
+  return fits(p, before) && fits(g, after)
+}
