@@ -163,29 +163,35 @@ export function Overlay({ layer, index, onChange, ...shown }: OverlayProps) {
           <div ref={bar} className="h-1.5 border-x border-b border-muted" />
         </div>
       )}
-      <div className="absolute right-3 bottom-1.5 flex items-end gap-2 text-muted" aria-hidden="true">
-        <div ref={reading} className={HALO} />
-        <svg width={52} height={52} viewBox="-26 -26 52 52" fill="none" stroke="currentColor">
-          <g ref={axes}>
-            {AXES.map((name) => (
-              <path key={name} data-arm={name} />
-            ))}
-            {AXES.map((name) => (
-              <text
-                key={name}
-                data-letter={name}
-                textAnchor="middle"
-                dominantBaseline="central"
-                fontSize={9}
-                stroke="none"
-                fill="currentColor"
-              >
-                {name}
-              </text>
-            ))}
-          </g>
-        </svg>
-      </div>
+      <div ref={reading} className={`absolute right-3 bottom-1.5 text-muted ${HALO}`} aria-hidden="true" />
+      <svg
+        width={52}
+        height={52}
+        viewBox="-26 -26 52 52"
+        fill="none"
+        stroke="currentColor"
+        aria-hidden="true"
+        className="absolute bottom-9 left-1 text-muted"
+      >
+        <g ref={axes}>
+          {AXES.map((name) => (
+            <path key={name} data-arm={name} />
+          ))}
+          {AXES.map((name) => (
+            <text
+              key={name}
+              data-letter={name}
+              textAnchor="middle"
+              dominantBaseline="central"
+              fontSize={9}
+              stroke="none"
+              fill="currentColor"
+            >
+              {name}
+            </text>
+          ))}
+        </g>
+      </svg>
     </div>
   )
 }
