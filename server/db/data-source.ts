@@ -4,6 +4,7 @@ import { ConfigError } from '../config.ts'
 import { readConnectionUrl } from './connection-url.ts'
 import { entities } from './entities/index.ts'
 import { Ground1764547200000 } from './migrations/1764547200000-ground.ts'
+import { Drafts1764633600000 } from './migrations/1764633600000-drafts.ts'
 
 /**
  * Every connection sees a consistent snapshot and is told when a row it read has moved on (error 1020, then
@@ -34,7 +35,7 @@ export function createDataSource(databaseUrl: string, poolSize = 20): DataSource
     driver,
     ...readConnectionUrl(databaseUrl),
     entities,
-    migrations: [Ground1764547200000],
+    migrations: [Ground1764547200000, Drafts1764633600000],
     synchronize: false,
     logging: false,
     charset: 'utf8mb4_unicode_ci',

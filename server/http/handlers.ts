@@ -7,6 +7,7 @@ import { peopleHandlers } from '../features/people/handlers.ts'
 import { recordHandlers } from '../features/record/handlers.ts'
 import { sessionHandlers } from '../features/session/handlers.ts'
 import { decisionHandlers } from '../features/setups/decide.ts'
+import { draftHandlers } from '../features/setups/drafts.ts'
 import { readingHandlers } from '../features/setups/read.ts'
 import { savingHandlers } from '../features/setups/save.ts'
 import type { Handlers } from './call.ts'
@@ -22,6 +23,7 @@ export const handlers: Handlers = {
   ...savingHandlers,
   ...decisionHandlers,
   ...readingHandlers,
+  ...draftHandlers,
   ...evaluationHandlers,
   ...recordHandlers,
 }

@@ -49,6 +49,10 @@ export const policy: Readonly<Record<RouteName, Access>> = {
   revisionContours: ['programmer', 'engineer', 'administrator'],
   revisionEdges: ['programmer', 'engineer', 'administrator'],
 
+  getDraft: ['programmer', 'engineer'],
+  keepDraft: ['programmer', 'engineer'],
+  dropDraft: ['programmer', 'engineer'],
+
   evaluate: 'signed-in',
 
   listAudit: ['engineer', 'administrator'],

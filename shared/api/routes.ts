@@ -1,5 +1,6 @@
 import * as z from 'zod'
 import { evaluationRequestSchema, evaluationSchema } from '../evaluate/schema.ts'
+import { draftRoutes } from './drafts.ts'
 import { headRoutes } from './heads.ts'
 import { partRoutes } from './parts.ts'
 import { peopleRoutes } from './people.ts'
@@ -50,6 +51,7 @@ export const routes = {
   ...headRoutes,
   ...partRoutes,
   ...setupRoutes,
+  ...draftRoutes,
   ...recordRoutes,
 } as const satisfies Record<string, Route>
 

@@ -6,6 +6,7 @@ import { IdempotencyKey } from './idempotency-key.ts'
 import { Part } from './part.ts'
 import { Session } from './session.ts'
 import { Setup } from './setup.ts'
+import { SetupDraft } from './setup-draft.ts'
 import { SetupRevision } from './setup-revision.ts'
 import { SignInAttempt } from './sign-in-attempt.ts'
 import { User } from './user.ts'
@@ -19,6 +20,7 @@ export const entities = [
   Part,
   Setup,
   SetupRevision,
+  SetupDraft,
   Decision,
   AuditEntry,
   AuditChain,
