@@ -112,7 +112,7 @@ export function visitMeetingPairs(
 }
 
 /** Whether two moving boxes overlap at some moment in [0, until]: four linear gaps must be closed at once. */
-function boxesMeet(p: Float64Array, i: number, q: Float64Array, j: number, until: number): boolean {
+export function boxesMeet(p: Float64Array, i: number, q: Float64Array, j: number, until: number): boolean {
   const left = p[i]! - q[j + 2]!
   const right = q[j]! - p[i + 2]!
   const below = p[i + 1]! - q[j + 3]!
