@@ -68,7 +68,7 @@ export function writeClosedPass(
 }
 
 /** A station off the wall by `out`, its jet parallel to the one on the wall, so that it is clear of it at every depth. */
-function putOutside(
+export function putOutside(
   w: PathWriter,
   level: Level,
   plan: ReturnType<typeof makeEdgePlan>,
@@ -93,7 +93,13 @@ function putOutside(
 }
 
 /** The first station of a pass that starts at a corner moves back along the prolongation, by the lead's length. */
-function lengthenRunIn(w: PathWriter, level: Level, move: Uint8Array, first: number, leadIn: number): void {
+export function lengthenRunIn(
+  w: PathWriter,
+  level: Level,
+  move: Uint8Array,
+  first: number,
+  leadIn: number,
+): void {
   const plan = planEdge(level, move, w.edge[first]!, makeEdgePlan())
   const end = w.at
   w.at = first

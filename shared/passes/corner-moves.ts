@@ -26,7 +26,7 @@ const WIDEST_ARC_RUN_OUT = Math.PI / 4
  * pivot. A lean beside an edge that is too short for it gives way, which can shorten no other edge's room.
  */
 export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassChoices): CornerMoves {
-  const { frame, previous, gone } = level
+  const { frame, previous, gone, member } = level
   const { count, mode, turn } = frame
   const move = new Uint8Array(count)
   const offers = new Uint8Array(count)
@@ -34,7 +34,7 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
   const problems: PassProblem[] = []
   const steepest = limits.tilt === null ? Infinity : Math.tan(limits.tilt + LIMIT_ROUNDING) ** 2
   for (let g = 0; g < count; g++) {
-    if (gone[g]) continue
+    if (gone[g] || !(member[g] || member[previous[g]!])) continue
     if (mode[g] === CornerMode.smooth || mode[g] === CornerMode.step) {
       move[g] = mode[g] === CornerMode.smooth ? CornerMove.none : CornerMove.step
       offers[g] = 1 << move[g]!
@@ -50,19 +50,21 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
       offers[g]! |= 1 << CornerMove.pivot
       if (canRunOut(level, g)) offers[g]! |= 1 << CornerMove.runOut
     }
-    move[g] = firstOffer(offers[g]!)
+    const endsRun = member[g] !== member[previous[g]!]
+    move[g] = endsRun && turn[g]! > 0 ? CornerMove.runOut : firstOffer(offers[g]!)
   }
   for (const [g, wished] of choices.corners ?? []) {
     if (g >= 0 && g < count && !gone[g] && offers[g]! & (1 << wished)) move[g] = wished
   }
   yieldLeans(level, move, offers, refusals)
   for (const [g, wished] of choices.corners ?? []) {
-    if (g >= 0 && g < count && !gone[g] && move[g] !== wished) {
+    if (level.level === 0 && g >= 0 && g < count && !gone[g] && move[g] !== wished) {
       problems.push(cornerProblem(level, 'choice-refused', g))
     }
   }
   for (let g = 0; g < count; g++) {
-    if (!gone[g] && offers[g] === 0) problems.push(cornerProblem(level, 'no-corner-move', g))
+    const cut = member[g] || member[previous[g]!]
+    if (!gone[g] && cut && offers[g] === 0) problems.push(cornerProblem(level, 'no-corner-move', g))
   }
   return { move, offers, refusals, problems }
 }
@@ -84,11 +86,12 @@ function firstOffer(offers: number): CornerMove {
  * still go forward. Giving one up can only bring the next edge's turn, so each corner changes once.
  */
 function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals: Uint8Array): void {
-  const { frame, previous, next, gone } = level
+  const { frame, previous, next, gone, member } = level
   const t = frame.body.thickness
   const edge = makeAxisEdge()
   const waiting: number[] = []
   const look = (g: number) => {
+    if (!member[g]) return
     const h = next[g]!
     const leansAtStart = move[g] === CornerMove.lean
     const leansAtEnd = move[h] === CornerMove.lean
@@ -105,7 +108,7 @@ function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals
     waiting.push(leansAtStart ? previous[g]! : h)
   }
   for (let g = 0; g < frame.count; g++) {
-    if (gone[g]) continue
+    if (gone[g] || !member[g]) continue
     look(g)
     while (waiting.length > 0) look(waiting.pop()!)
   }

@@ -124,7 +124,8 @@ function stepIsBefore(level: Level, corner: number): boolean {
   return edgeLength(level, level.previous[corner]!) >= edgeLength(level, corner)
 }
 
-function edgeLength({ frame }: Level, g: number): number {
+/** Length of an edge in the drawing, mm. */
+export function edgeLength({ frame }: Level, g: number): number {
   if (frame.arc[g]) return frame.radius[g]! * Math.abs(frame.sweep[g]!)
   const h = frame.next[g]!
   return Math.hypot(frame.px[h]! - frame.px[g]!, frame.py[h]! - frame.py[g]!)

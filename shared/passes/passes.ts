@@ -3,54 +3,104 @@ import { nearbyOrder } from '../geometry/order.ts'
 import type { Body } from '../walls/types.ts'
 import { axisTable } from './axis-table.ts'
 import { writeClosedPass } from './closed-pass.ts'
-import { cornerMovesOf } from './corner-moves.ts'
-import { makeLevel } from './level.ts'
-import { startsOf } from './starts.ts'
-import type { Jet, Pass, PassChoices, Passes, PassLimits, PassProblem } from './types.ts'
+import { cornerMovesOf, type CornerMoves } from './corner-moves.ts'
+import { chooseRunLeads, chooseStart } from './leads.ts'
+import { makeLevel, type Level } from './level.ts'
+import { writeOpenPass } from './open-pass.ts'
+import { roomOf } from './room.ts'
+import { levelsOffRoot, runsOf, type Run } from './runs.ts'
+import type {
+  Jet,
+  Pass,
+  PassChoices,
+  Passes,
+  PassLimits,
+  PassProblem,
+  PassProblemCode,
+  PassReason,
+} from './types.ts'
 import { makeWriter, pathOf } from './writer.ts'
 
 /** Stations per edge to begin with: square and lean at both ends. */
 const STATIONS_PER_EDGE = 4
 
+interface Layer {
+  readonly level: Level
+  readonly moves: CornerMoves
+}
+
 /**
  * All passes of a body, in the order in which they are cut: holes first, each near the one before; in a loop
- * the facets off the root while it is held, the pass that frees it last.
+ * the facets off the root while it is held, the pass that frees it last. Expects a sound body; `limits.tilt` is
+ * asked of seams only (a wall past the limit is a matter of the wall).
  */
 export function passesOf(body: Body, jet: Jet, limits: PassLimits, choices: PassChoices = {}): Passes {
   const frame = frameOf(body)
   const axis = axisTable(body, frame.table, jet)
-  const level = makeLevel(frame, axis, jet, 0)
-  const moves = cornerMovesOf(level, limits, choices)
-  const problems: PassProblem[] = [...moves.problems]
+  const room = roomOf(frame)
+  const layers = [...levelsOffRoot(axis), 0].map((number): Layer => {
+    const level = makeLevel(frame, axis, jet, number)
+    return { level, moves: cornerMovesOf(level, limits, choices) }
+  })
+  const ground = layers.at(-1)!
+  const problems = layers.flatMap(({ moves }) => [...moves.problems])
   const w = makeWriter(STATIONS_PER_EDGE * frame.count + 16)
   const firstStation = new Int32Array(frame.count).fill(-1)
   const passes: Pass[] = []
+
   for (const loop of cuttingOrder(body)) {
-    const first = w.at
-    const start = startsOf(level, moves, loop, choices).next().value
-    if (!start) {
-      problems.push({ code: 'no-room-to-pierce', loop, at: -1, level: 0, value: null })
-      continue
+    const ordered = runsInOrder(layers, loop)
+    const freeing = ordered.findIndex(({ run }) => run.closed)
+    for (const [i, { layer, run }] of ordered.entries()) {
+      const reasons: PassReason[] = loop > 0 ? ['holes-before-outside'] : []
+      if (i < freeing || (loop > 0 && i < ordered.length - 1)) reasons.push('bevel-while-held')
+      if (i === freeing) reasons.push('frees-its-loop')
+      // What falls out of a hole is waste; what comes loose from the outside is the part.
+      if (i > freeing && freeing >= 0 && loop === 0) reasons.push('loose-when-cut')
+      writeRun(layer, run, reasons)
     }
-    writeClosedPass(w, level, moves.move, start, firstStation)
-    const reasons =
-      loop > 0 ? (['holes-before-outside', 'frees-its-loop'] as const) : (['frees-its-loop'] as const)
-    passes.push({ loop, first, last: w.at - 1, closed: true, level: 0, reasons })
   }
   return {
     path: pathOf(w),
     passes,
-    cornerMoves: moves.move,
-    cornerOffers: moves.offers,
-    leanRefusals: moves.refusals,
+    cornerMoves: ground.moves.move,
+    cornerOffers: ground.moves.offers,
+    leanRefusals: ground.moves.refusals,
     firstStation,
     problems,
   }
+
+  function writeRun({ level, moves }: Layer, run: Run, reasons: readonly PassReason[]): void {
+    const { loop, closed } = run
+    const first = w.at
+    if (closed) {
+      const chosen = chooseStart(level, moves, loop, choices, room)
+      if (!chosen?.clear) problem('no-room-to-pierce', level, loop)
+      if (!chosen) return
+      writeClosedPass(w, level, moves.move, chosen.start, level.level === 0 ? firstStation : null)
+    } else {
+      const { leadIn, leadOut, clear } = chooseRunLeads(level, moves, run, choices, room)
+      if (!clear) problem('no-room-to-pierce', level, loop)
+      writeOpenPass(w, level, moves.move, moves.offers, run, leadIn, leadOut)
+    }
+    passes.push({ loop, first, last: w.at - 1, closed, level: level.level, reasons })
+  }
+
+  function problem(code: PassProblemCode, level: Level, loop: number): void {
+    const found: PassProblem = { code, loop, at: -1, level: level.level, value: null }
+    problems.push(found)
+  }
+}
+
+/** Open runs first, then those that go all the way round, then the freeing pass along the roots. */
+function runsInOrder(layers: readonly Layer[], loop: number): { readonly layer: Layer; readonly run: Run }[] {
+  const all = layers.flatMap((layer) => runsOf(layer.level, loop).map((run) => ({ layer, run })))
+  const rank = ({ layer, run }: (typeof all)[number]) => (layer.level.level === 0 ? 2 : run.closed ? 1 : 0)
+  return all.sort((a, b) => rank(a) - rank(b))
 }
 
 /** Holes in a near order, the outer loop last. */
 function cuttingOrder(body: Body): number[] {
-  const holes = body.loops.map((loop) => loop[0]?.from ?? { x: 0, y: 0 }).slice(1)
-  const order = [...nearbyOrder(holes)].map((hole) => hole + 1)
-  return body.loops.length > 0 ? [...order, 0] : []
+  const holes = body.loops.slice(1).map((loop) => loop[0]?.from ?? { x: 0, y: 0 })
+  return body.loops.length > 0 ? [...nearbyOrder(holes).map((hole) => hole + 1), 0] : []
 }

@@ -1,10 +1,10 @@
 import { CornerMode } from '../contours/frame.ts'
-import { makeEdgePlan, planEdge } from './edge-plan.ts'
+import { edgeLength, makeEdgePlan, planEdge } from './edge-plan.ts'
 import type { CornerMoves } from './corner-moves.ts'
 import type { Level } from './level.ts'
 import { CornerMove, type PassChoices } from './types.ts'
 
-/** Where a closed pass begins and ends. */
+/** Where a closed pass begins and ends. Lengths in mm. */
 export type Start =
   /** At a convex corner: in along its edge's prolongation, out along that of the edge before. No mark is left on a wall. */
   | { readonly kind: 'corner'; readonly g: number; readonly leadIn: number }
@@ -31,7 +31,7 @@ const LEAST_KERFS = 1.5
 const FLATTEST_START = Math.PI / 6
 
 /** Corners and edges looked at, the best first. */
-const MOST_CANDIDATES = 12
+const MOST_CANDIDATES = 8
 
 /** Lengths to try, from wished to least, mm. */
 export function leadLengths(kerf: number, wished: number | undefined): readonly number[] {
@@ -40,30 +40,28 @@ export function leadLengths(kerf: number, wished: number | undefined): readonly 
   return [0, 1, 2, 3].map((i) => most + (i / 3) * (least - most))
 }
 
-/** Possible starts of a closed pass of a loop, the best first. */
+/** Possible starts of a closed pass of a loop, the best first; `lengths` are those that a lead in may have. */
 export function* startsOf(
   level: Level,
   moves: CornerMoves,
   loop: number,
   choices: PassChoices,
+  lengths: readonly number[],
 ): Generator<Start> {
-  const { frame, gone } = level
+  const { turn, mode } = level.frame
   const { kerf } = level.jet
-  const edges: number[] = []
-  for (let g = frame.loopStart[loop]!; g < frame.loopStart[loop + 1]!; g++) if (!gone[g]) edges.push(g)
-  const lengths = leadLengths(kerf, choices.leadIn)
-  const plan = makeEdgePlan()
-  const corners = sharpest(level, moves, edges, choices)
-  for (const leadIn of lengths) {
-    for (const g of corners) {
-      if (!choices.corners?.has(g) || choices.corners.get(g) === CornerMove.runOut) {
-        yield { kind: 'corner', g, leadIn }
-      }
-    }
-  }
+  const corners = bestOf(level, loop, (g) =>
+    mode[g] !== CornerMode.spike &&
+    moves.offers[g]! & (1 << CornerMove.runOut) &&
+    (choices.corners?.get(g) ?? CornerMove.runOut) === CornerMove.runOut
+      ? turn[g]! - FLATTEST_START
+      : 0,
+  )
+  for (const leadIn of lengths) for (const g of corners) yield { kind: 'corner', g, leadIn }
   const leadOut = choices.leadOut ?? kerf
   const overlap = choices.overlap ?? kerf
-  const longest = longestCuts(level, moves, edges)
+  const longest = bestOf(level, loop, (g) => edgeLength(level, g))
+  const plan = makeEdgePlan()
   for (const leadIn of lengths) {
     for (const g of longest) {
       planEdge(level, moves.move, g, plan)
@@ -75,39 +73,28 @@ export function* startsOf(
   }
   for (const leadIn of lengths) {
     for (const g of longest) {
-      if (moves.move[g] === CornerMove.lean) {
-        yield { kind: 'seam', g, leadIn, leadOut: Math.min(leadOut, leadIn) }
-      }
+      if (moves.move[g] !== CornerMove.lean) continue
+      yield { kind: 'seam', g, leadIn, leadOut: Math.min(leadOut, leadIn) }
     }
   }
 }
 
-function sharpest(
-  level: Level,
-  moves: CornerMoves,
-  edges: readonly number[],
-  choices: PassChoices,
-): number[] {
-  const { turn, mode } = level.frame
-  return edges
-    .filter(
-      (g) =>
-        mode[g] !== CornerMode.spike &&
-        turn[g]! > FLATTEST_START &&
-        moves.offers[g]! & (1 << CornerMove.runOut) &&
-        (choices.corners?.get(g) ?? CornerMove.runOut) === CornerMove.runOut,
-    )
-    .sort((a, b) => turn[b]! - turn[a]! || a - b)
-    .slice(0, MOST_CANDIDATES)
-}
-
-function longestCuts(level: Level, moves: CornerMoves, edges: readonly number[]): number[] {
-  const plan = makeEdgePlan()
-  const cut = new Map(
-    edges.map((g) => {
-      planEdge(level, moves.move, g, plan)
-      return [g, plan.to - plan.leanTo - plan.from - plan.leanFrom] as const
-    }),
-  )
-  return [...edges].sort((a, b) => cut.get(b)! - cut.get(a)! || a - b).slice(0, MOST_CANDIDATES)
+/** The few edges (or corners) of a loop with the highest positive scores, the best first; of equals the first. */
+function bestOf({ frame, gone }: Level, loop: number, score: (g: number) => number): number[] {
+  const best: number[] = []
+  const scores: number[] = []
+  for (let g = frame.loopStart[loop]!; g < frame.loopStart[loop + 1]!; g++) {
+    if (gone[g]) continue
+    const own = score(g)
+    if (!(own > (scores[MOST_CANDIDATES - 1] ?? 0))) continue
+    let place = scores.length
+    while (place > 0 && scores[place - 1]! < own) place--
+    best.splice(place, 0, g)
+    scores.splice(place, 0, own)
+    if (best.length > MOST_CANDIDATES) {
+      best.pop()
+      scores.pop()
+    }
+  }
+  return best
 }
