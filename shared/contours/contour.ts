@@ -20,7 +20,7 @@ import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts
  */
 export function contourAt(body: Body, depth: number): Contour {
   const frame = frameOf(body)
-  const offsets = makeEdgeEnds(frame.count)
+  const offsets = makeEdgeEnds(frame.table)
   const places = makePlaces(frame.count)
   fillOffsets(frame.table, depth, offsets)
   place(frame, offsets, places)

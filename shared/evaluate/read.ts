@@ -1,6 +1,6 @@
 import { edgeName } from '../walls/names.ts'
 import type { Body, Wall } from '../walls/types.ts'
-import { squareWall } from '../walls/wall.ts'
+import { reversedWall, squareWall } from '../walls/wall.ts'
 import type { FacetDegrees } from '../findings/place.ts'
 import { loopFromVertices } from '../geometry/bulge.ts'
 import { edgeInDrawing, orientLoops } from '../geometry/orient.ts'
@@ -44,7 +44,7 @@ export function readRequest(request: EvaluationRequest): ReadRequest {
       thickness,
       datum: request.datum ?? 'top',
       loops,
-      walls: radianWalls(facets, thickness).map((walls, l) => (reversed[l] ? walls.reverse() : walls)),
+      walls: radianWalls(facets, thickness).map((walls, l) => (reversed[l] ? turnedRound(walls) : walls)),
     },
     reversed,
     facets,
@@ -128,6 +128,7 @@ export function sameFacets(a: readonly FacetDegrees[], b: readonly FacetDegrees[
   if (a.length !== b.length) return false
   for (let i = 0; i < a.length; i++) {
     if (a[i]?.depth !== b[i]?.depth || a[i]?.tilt !== b[i]?.tilt) return false
+    if ((a[i]?.endTilt ?? a[i]?.tilt) !== (b[i]?.endTilt ?? b[i]?.tilt)) return false
   }
   return true
 }
@@ -139,14 +140,27 @@ function radianWalls(facets: readonly (readonly (readonly FacetDegrees[])[])[], 
   const wallOf = (list: readonly FacetDegrees[]): Wall => {
     const known = made.get(list)
     if (known) return known
-    const vertical = list.every(({ tilt }) => tilt === 0)
+    const vertical = list.every(({ tilt, endTilt }) => tilt === 0 && (endTilt ?? 0) === 0)
     const wall = vertical
       ? square
-      : { facets: list.map(({ depth, tilt }) => ({ depth, tilt: radians(tilt) })) }
+      : {
+          facets: list.map(({ depth, tilt, endTilt }) =>
+            endTilt === undefined
+              ? { depth, tilt: radians(tilt) }
+              : { depth, tilt: radians(tilt), endTilt: radians(endTilt) },
+          ),
+        }
     made.set(list, wall)
     return wall
   }
   return facets.map((ofLoop) => ofLoop.map(wallOf))
+}
+
+/** The walls of a loop travelled the other way; edges that share a wall still do. */
+function turnedRound(walls: readonly Wall[]): Wall[] {
+  const turned = new Map<Wall, Wall>()
+  for (const wall of walls) if (!turned.has(wall)) turned.set(wall, reversedWall(wall))
+  return walls.map((wall) => turned.get(wall) ?? wall).reverse()
 }
 
 function renumbered(

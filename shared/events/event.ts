@@ -80,20 +80,20 @@ function offerMeetings(march: March, near: number, first: First): void {
 }
 
 function* stretchesOf(frame: Frame): Generator<Stretch> {
-  const { body, table, count } = frame
+  const { body, table } = frame
   const levels = levelsOf(body)
   const upward = body.datum === 'bottom'
   if (body.datum === 'root') {
-    const rate = makeEdgeEnds(count)
+    const rate = makeEdgeEnds(table)
     fillOffsets(table, 0, rate)
-    yield { length: 1, offset: makeEdgeEnds(count), rate, depthAt: () => 0 }
+    yield { length: 1, offset: makeEdgeEnds(table), rate, depthAt: () => 0 }
   }
   for (let i = 1; i < levels.length; i++) {
     const [above, below] = upward
       ? [levels[levels.length - 1 - i]!, levels[levels.length - i]!]
       : [levels[i - 1]!, levels[i]!]
-    const offset = makeEdgeEnds(count)
-    const rate = makeEdgeEnds(count)
+    const offset = makeEdgeEnds(table)
+    const rate = makeEdgeEnds(table)
     fillOffsets(table, upward ? below : above, offset)
     fillRates(table, above, rate)
     if (upward) turnRound(rate)

@@ -5,6 +5,8 @@ import type { EdgeRef } from '../walls/types.ts'
 export interface FacetDegrees {
   readonly depth: number
   readonly tilt: number
+  /** At the edge's end, where the wall blends. */
+  readonly endTilt?: number | undefined
 }
 
 /** An edge and its wall, from the top face down. */

@@ -17,7 +17,7 @@ export interface WallBand {
 
 export function wallBand(frame: Frame, top: number, bottom: number): WallBand {
   const at = (depth: number) => {
-    const offsets = makeEdgeEnds(frame.count)
+    const offsets = makeEdgeEnds(frame.table)
     fillOffsets(frame.table, depth, offsets)
     const places = makePlaces(frame.count)
     place(frame, offsets, places)

@@ -21,7 +21,7 @@ export const RUN = 32
 export function roomOf(frame: Frame): Room {
   const depths = depthsOf(frame)
   const offsets = depths.map((depth) => {
-    const out = makeEdgeEnds(frame.count)
+    const out = makeEdgeEnds(frame.table)
     fillOffsets(frame.table, depth, out)
     return out
   })

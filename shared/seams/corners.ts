@@ -61,7 +61,7 @@ function bandsOf(before: Wall, after: Wall, thickness: number, kind: CornerKind,
   let fromDepth = 0
   while (fromDepth < thickness) {
     const toDepth = Math.min(nextEnd(before, fromDepth), nextEnd(after, fromDepth), thickness)
-    const tilts = [tiltAt(before, fromDepth), tiltAt(after, fromDepth)] as const
+    const tilts = [tiltAt(before, fromDepth, 'end'), tiltAt(after, fromDepth, 'start')] as const
     const stepped = kind === 'smooth' && tilts[0] !== tilts[1]
     bands.push({ fromDepth, toDepth, tilts, seamTilt: stepped ? null : seamTiltOf(tilts[0], tilts[1], turn) })
     fromDepth = toDepth

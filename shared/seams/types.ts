@@ -7,7 +7,7 @@ export type CornerKind = 'convex' | 'concave' | 'smooth'
 export interface SeamBand {
   readonly fromDepth: number
   readonly toDepth: number
-  /** Tilts of the wall before and the wall after the corner. */
+  /** Tilts, at the corner, of the wall before and the wall after it. */
   readonly tilts: readonly [number, number]
   /** Angle of the seam from vertical; null where no single seam exists (a step at a smooth corner). */
   readonly seamTilt: number | null

@@ -72,7 +72,7 @@ export function chordsPerEdge(
 }
 
 function levelAt(frame: Frame, depth: number, given: boolean): MeshLevel {
-  const offsets = makeEdgeEnds(frame.count)
+  const offsets = makeEdgeEnds(frame.table)
   const places = makePlaces(frame.count)
   fillOffsets(frame.table, depth, offsets)
   place(frame, offsets, places)

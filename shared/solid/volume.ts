@@ -38,7 +38,7 @@ export function volumeOf(body: Body): number | null {
 /** Area of the contour as a function of depth, mm². */
 function areaByDepth(body: Body): (depth: number) => number {
   const frame = frameOf(body)
-  const offsets = makeEdgeEnds(frame.count)
+  const offsets = makeEdgeEnds(frame.table)
   const places = makePlaces(frame.count)
   return (depth) => {
     fillOffsets(frame.table, depth, offsets)

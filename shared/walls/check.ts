@@ -20,8 +20,12 @@ export function bodyProblems({ thickness, loops, walls }: Body): BodyProblem[] {
     for (const [e, { facets }] of (walls[l] ?? []).entries()) {
       if (facets.some((f, i) => !(f.depth > (facets[i - 1]?.depth ?? 0)))) add('facets-not-rising', l, e)
       if (facets.at(-1)?.depth !== thickness) add('facets-end-elsewhere', l, e)
-      if (facets.some((f) => !(Math.abs(f.tilt) < Math.PI / 2))) add('tilt', l, e)
+      if (facets.some((f) => !isTilt(f.tilt) || !isTilt(f.endTilt ?? f.tilt))) add('tilt', l, e)
     }
   }
   return problems
+}
+
+function isTilt(angle: number): boolean {
+  return Math.abs(angle) < Math.PI / 2
 }

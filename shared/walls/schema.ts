@@ -7,6 +7,7 @@ export const datumSchema = z.enum(['top', 'bottom', 'root'])
 export const facetSchema = z.strictObject({
   depth: z.number().positive().max(1_000).describe('depth at which the facet ends, mm'),
   tilt: z.number().gt(-90).lt(90).describe('degrees from vertical, positive outward'),
+  endTilt: z.number().gt(-90).lt(90).optional().describe("tilt at the edge's end, where the wall blends"),
 })
 
 export const wallSchema = z.strictObject({

@@ -5,13 +5,22 @@ import type { Loop } from '../geometry/types.ts'
  * down from the top face (0) to the thickness.
  */
 
-/** One flat (or, on an arc, conical) piece of a wall. */
+/**
+ * One piece of a wall: flat, on an arc conical; twisted where it blends from one tilt into another. Along a blend the
+ * wall's reach (not its tilt) goes evenly from the edge's start to its end, so that the contour of a line is at every
+ * depth the straight line between its two corners.
+ */
 export interface Facet {
-  /** Depth at which the facet ends. */
+  /** Depth at which the facet ends, the same all along the edge. */
   readonly depth: number
-  /** Angle from vertical, positive when the wall moves outward with depth. */
+  /** Angle from vertical, positive when the wall moves outward with depth; of a blend, the one at the edge's start. */
   readonly tilt: number
+  /** Of a blend: the angle at the edge's end. */
+  readonly endTilt?: number | undefined
 }
+
+/** The two ends of an edge, in the direction of travel. */
+export type EdgeEnd = 'start' | 'end'
 
 /** The cut surface of one edge: facets from the top face down; the last ends at the thickness. */
 export interface Wall {

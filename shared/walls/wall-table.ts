@@ -1,5 +1,6 @@
-import type { Body, Wall } from './types.ts'
+import type { Body, EdgeEnd, Wall } from './types.ts'
 import { datumReach } from './datum.ts'
+import { blends, facetTilt } from './wall.ts'
 
 /**
  * The distinct walls of a body with their tangents worked out, so that a whole plate is placed at a depth
@@ -9,11 +10,22 @@ export interface WallTable {
   readonly walls: readonly Wall[]
   /** Row of each edge, edges numbered through all loops. */
   readonly rowOfEdge: Int32Array
-  /** Per row: what is taken from its reach so that it is 0 at the datum, mm. */
-  readonly datum: Float64Array
+  /** Whether any wall changes its tilt along its edge; otherwise `start` and `end` are the same columns. */
+  readonly blends: boolean
+  /** Per row: 1 where the wall blends. */
+  readonly blended: Uint8Array
   /** Rows' facets are firstFacet[row] up to firstFacet[row + 1]. */
   readonly firstFacet: Int32Array
   readonly facetEnd: Float64Array
+  /** What holds at the edge's start and at its end. */
+  readonly start: WallColumns
+  readonly end: WallColumns
+}
+
+export interface WallColumns {
+  /** Per row: what is taken from its reach so that it is 0 at the datum, mm. */
+  readonly datum: Float64Array
+  /** Per facet: the tangent of its tilt. */
   readonly facetTan: Float64Array
 }
 
@@ -36,20 +48,24 @@ export function wallTable(body: Body): WallTable {
     }
   }
   const facetCount = walls.reduce((sum, wall) => sum + wall.facets.length, 0)
-  const datum = new Float64Array(walls.length)
   const firstFacet = new Int32Array(walls.length + 1)
   const facetEnd = new Float64Array(facetCount)
-  const facetTan = new Float64Array(facetCount)
   let f = 0
   for (const [row, wall] of walls.entries()) {
-    for (const facet of wall.facets) {
-      facetEnd[f] = facet.depth
-      facetTan[f++] = Math.tan(facet.tilt)
-    }
+    for (const facet of wall.facets) facetEnd[f++] = facet.depth
     firstFacet[row + 1] = f
-    datum[row] = datumReach(wall, body.datum, body.thickness)
   }
-  return { walls, rowOfEdge, datum, firstFacet, facetEnd, facetTan }
+  const blended = Uint8Array.from(walls, (wall) => (blends(wall) ? 1 : 0))
+  const anyBlends = blended.includes(1)
+  const columns = (end: EdgeEnd): WallColumns => ({
+    datum: Float64Array.from(walls, (wall) => datumReach(wall, body.datum, body.thickness, end)),
+    facetTan: Float64Array.from(
+      walls.flatMap(({ facets }) => facets.map((facet) => Math.tan(facetTilt(facet, end)))),
+    ),
+  })
+  const start = columns('start')
+  const end = anyBlends ? columns('end') : start
+  return { walls, rowOfEdge, blends: anyBlends, blended, firstFacet, facetEnd, start, end }
 }
 
 /** A figure for every edge at its start and at its end; one array serves both where no wall changes along its edge. */
@@ -58,32 +74,44 @@ export interface EdgeEnds {
   readonly end: Float64Array
 }
 
-export function makeEdgeEnds(count: number): EdgeEnds {
-  const both = new Float64Array(count)
-  return { start: both, end: both }
+/** Columns for the edges of a table. */
+export function makeEdgeEnds({ rowOfEdge, blends: unlike }: WallTable): EdgeEnds {
+  const start = new Float64Array(rowOfEdge.length)
+  return { start, end: unlike ? new Float64Array(rowOfEdge.length) : start }
 }
 
 /** Fills `out` with the offset of every edge's contour at a depth from the drawing's outline, mm. */
 export function fillOffsets(table: WallTable, depth: number, out: EdgeEnds): void {
-  const perRow = table.walls.map((_, row) => {
+  fillEnds(table, out, (columns) => offsetsOfRows(table, columns, depth))
+}
+
+function offsetsOfRows(table: WallTable, columns: WallColumns, depth: number): number[] {
+  return table.walls.map((_, row) => {
     const last = table.firstFacet[row + 1]! - 1
     let reach = 0
     let top = 0
     for (let f = table.firstFacet[row]!; f <= last; f++) {
       const end = f === last ? depth : Math.min(depth, table.facetEnd[f]!)
-      reach += (end - top) * table.facetTan[f]!
+      reach += (end - top) * columns.facetTan[f]!
       top = table.facetEnd[f]!
       if (depth <= top) break
     }
-    return reach - table.datum[row]!
+    return reach - columns.datum[row]!
   })
-  spread(table, perRow, out.start)
 }
 
 /** Fills `out` with the tangent of the tilt just below a depth: how fast each contour moves outward with depth. */
 export function fillRates(table: WallTable, depth: number, out: EdgeEnds): void {
-  const perRow = table.walls.map((_, row) => table.facetTan[facetBelow(table, row, depth)]!)
-  spread(table, perRow, out.start)
+  fillEnds(table, out, ({ facetTan }) =>
+    table.walls.map((_, row) => facetTan[facetBelow(table, row, depth)]!),
+  )
+}
+
+function fillEnds(table: WallTable, out: EdgeEnds, perRow: (columns: WallColumns) => number[]): void {
+  spread(table, perRow(table.start), out.start)
+  if (!table.blends) return
+  if (out.end === out.start) throw new Error('walls that blend need a column for each end')
+  spread(table, perRow(table.end), out.end)
 }
 
 /** Index into the table's facets of the one just below a depth. */
@@ -94,16 +122,17 @@ function facetBelow(table: WallTable, row: number, depth: number): number {
   return f
 }
 
-/** Whether two rows stand at the same offset at every depth. */
+/** Whether the wall of row `a` stands, at its edge's end, at the same offset as that of row `b` at its start, at every depth. */
 export function sameOffsets(table: WallTable, a: number, b: number): boolean {
-  if (a === b) return true
-  if (table.datum[a] !== table.datum[b]) return false
+  if (a === b && !table.blended[a]) return true
+  const { start, end } = table
+  if (end.datum[a] !== start.datum[b]) return false
   let fa = table.firstFacet[a]!
   let fb = table.firstFacet[b]!
   const lastA = table.firstFacet[a + 1]! - 1
   const lastB = table.firstFacet[b + 1]! - 1
   for (;;) {
-    if (table.facetTan[fa] !== table.facetTan[fb]) return false
+    if (end.facetTan[fa] !== start.facetTan[fb]) return false
     const endA = fa < lastA ? table.facetEnd[fa]! : Infinity
     const endB = fb < lastB ? table.facetEnd[fb]! : Infinity
     if (endA === Infinity && endB === Infinity) return true
