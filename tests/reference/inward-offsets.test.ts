@@ -1,11 +1,14 @@
 import { readFileSync } from 'node:fs'
 import { describe, expect, test } from 'vitest'
-import { contourArea, contourProblems } from '../../../shared/contours/check.ts'
-import { contourAt } from '../../../shared/contours/contour.ts'
-import { firstEvent } from '../../../shared/events/event.ts'
-import { plate } from '../../support/plates.ts'
+import { contourArea, contourProblems } from '../../shared/contours/check.ts'
+import { contourAt } from '../../shared/contours/contour.ts'
+import { firstEvent } from '../../shared/events/event.ts'
+import { plate } from '../support/plates.ts'
 
-/** Source of the figures: CGAL 6.0.1, exact weighted straight skeleton; see ../figures/README.md. */
+/**
+ * Source: CGAL 6.0.1, exact weighted straight skeleton of 160 plates whose every edge moves inward at its own speed;
+ * see figures/README.md. First events and areas above them.
+ */
 interface Row {
   readonly id: string
   readonly loops: readonly { readonly points: [number, number][]; readonly speeds: number[] }[]
@@ -13,7 +16,7 @@ interface Row {
   readonly areas: readonly { readonly depth: number; readonly area: number; readonly beforeEvent: boolean }[]
 }
 
-const figures = new URL('../figures/inward-offsets.jsonl', import.meta.url)
+const figures = new URL('./figures/inward-offsets.jsonl', import.meta.url)
 const rows = readFileSync(figures, 'utf8')
   .trim()
   .split('\n')

@@ -3,13 +3,13 @@ import GeometryFactory from 'jsts/org/locationtech/jts/geom/GeometryFactory.js'
 import BufferOp from 'jsts/org/locationtech/jts/operation/buffer/BufferOp.js'
 import BufferParameters from 'jsts/org/locationtech/jts/operation/buffer/BufferParameters.js'
 import { expect, test } from 'vitest'
-import { contourArea } from '../../../shared/contours/check.ts'
-import { contourAt } from '../../../shared/contours/contour.ts'
-import { soundRange } from '../../../shared/events/range.ts'
-import type { Point } from '../../../shared/geometry/types.ts'
-import { DEGREE, facets, plate, reversed, seeded, star } from '../../support/plates.ts'
+import { contourArea } from '../../shared/contours/check.ts'
+import { contourAt } from '../../shared/contours/contour.ts'
+import { soundRange } from '../../shared/events/range.ts'
+import type { Point } from '../../shared/geometry/types.ts'
+import { DEGREE, facets, plate, reversed, seeded, star } from '../support/plates.ts'
 
-/** Equal tilts are one uniform offset: areas against jsts 2.12 (buffer with mitred joins), before the first event. */
+/** Source: jsts 2.12 (buffer with mitred joins). Equal tilts are one uniform offset: areas before the first event. */
 function bufferedArea(loops: Point[][], distance: number): number {
   const factory = new GeometryFactory()
   const ring = (points: Point[]) =>
