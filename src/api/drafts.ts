@@ -6,8 +6,9 @@ export const draftQuery = (id: string) =>
   queryOptions({
     queryKey: ['draft', id],
     queryFn: ({ signal }) => call('getDraft', { params: { id }, signal }),
+    // Asked for anew by each opened bench, and only then.
     gcTime: 0,
-    staleTime: 0,
+    staleTime: Infinity,
   })
 
 export const keepDraftOnServer = (id: string, body: Body<'keepDraft'>, signal: AbortSignal) =>

@@ -26,7 +26,7 @@ export function CutBar({ choice, cut, area, onChange }: CutBarProps) {
   return (
     <div
       role="group"
-      aria-label="Cut open"
+      aria-label="Place of the cut"
       className="flex flex-wrap items-end gap-3 border-t border-rule bg-panel px-3 py-1.5"
     >
       {cut === null ? (

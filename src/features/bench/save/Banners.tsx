@@ -86,7 +86,8 @@ function DraftOffer() {
         </>
       }
     >
-      Unsaved changes from {dayAndClock(found.keptAt)} were kept in this browser.
+      Unsaved changes from {dayAndClock(found.keptAt)} were kept{' '}
+      {found.place === 'browser' ? 'in this browser' : 'on the server'}.
       {found.version !== base.version &&
         ` The set-up has moved on since: they began on revision ${found.revision}. Saving will show both sides.`}
     </Banner>
