@@ -65,7 +65,7 @@ export function readAxisEdge(level: Level, g: number, out: AxisEdge): AxisEdge {
   out.uy = frame.uy[g]!
   let sx = x[g]!
   let sy = y[g]!
-  if (frame.mode[g] === CornerMode.step) {
+  if (level.mode[g] === CornerMode.step) {
     const o = axis.start.axis[f]!
     sx = frame.px[g]! + o * frame.mx[g]!
     sy = frame.py[g]! + o * frame.my[g]!
@@ -88,6 +88,7 @@ export function readAxisEdge(level: Level, g: number, out: AxisEdge): AxisEdge {
 function readArc(level: Level, g: number, h: number, sx: number, sy: number, out: AxisEdge): void {
   const { frame, axis, figure, x, y, p, q } = level
   const f = figure[g]!
+  const e = frame.next[g]!
   const cx = frame.cx[g]!
   const cy = frame.cy[g]!
   const way = Math.sign(frame.sweep[g]!)
@@ -101,7 +102,7 @@ function readArc(level: Level, g: number, h: number, sx: number, sy: number, out
   out.sweep =
     frame.sweep[g]! -
     turnAbout(frame.px[g]! - cx, frame.py[g]! - cy, sx - cx, sy - cy) +
-    turnAbout(frame.px[h]! - cx, frame.py[h]! - cy, x[h]! - cx, y[h]! - cy)
+    turnAbout(frame.px[e]! - cx, frame.py[e]! - cy, x[h]! - cx, y[h]! - cy)
   out.length = out.radius * out.sweep * way
   const end = out.heading + out.sweep
   out.alongStart = way * (q[g]! * Math.cos(out.heading) - p[g]! * Math.sin(out.heading))

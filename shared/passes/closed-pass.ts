@@ -111,8 +111,8 @@ export function lengthenRunIn(
 
 /** Unit direction into the waste half way between the outward normals at a corner. */
 export function outwardBetween(level: Level, g: number): { readonly x: number; readonly y: number } {
-  const { frame } = level
-  const half = frame.turn[g]! / 2
+  const { frame, turn } = level
+  const half = turn[g]! / 2
   // The edge's own outward normal, turned back by half the corner's turn.
   const [nx, ny] = [frame.uy[g]!, -frame.ux[g]!]
   const [c, s] = [Math.cos(half), Math.sin(half)]

@@ -1,4 +1,4 @@
-import { branchPoint } from '../contours/branch.ts'
+import { branchPoint, type Branch } from '../contours/branch.ts'
 import { CornerMode } from '../contours/frame.ts'
 import { makeAxisEdge, readAxisEdge } from './axis-edges.ts'
 import { wallCorner, type Level } from './level.ts'
@@ -18,6 +18,9 @@ export interface CornerMoves {
  */
 const LIMIT_ROUNDING = 1e-11
 
+/** A bend of less than this is not worth a word, mm: as with fillets (common practice, no source). */
+const BEND_WORTH_SAYING = 0.01
+
 /** Past this turn of an arc's prolongation a run out along it would come back to the part, radians: our choice. */
 const WIDEST_ARC_RUN_OUT = Math.PI / 4
 
@@ -26,8 +29,8 @@ const WIDEST_ARC_RUN_OUT = Math.PI / 4
  * pivot. A lean beside an edge that is too short for it gives way, which can shorten no other edge's room.
  */
 export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassChoices): CornerMoves {
-  const { frame, previous, gone, member } = level
-  const { count, mode, turn } = frame
+  const { frame, previous, gone, member, mode, turn } = level
+  const { count } = frame
   const move = new Uint8Array(count)
   const offers = new Uint8Array(count)
   const refusals = new Uint8Array(count)
@@ -61,6 +64,11 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
     if (level.level === 0 && g >= 0 && g < count && !gone[g] && move[g] !== wished) {
       problems.push(cornerProblem(level, 'choice-refused', g))
     }
+  }
+  for (const [g, branch] of frame.branches) {
+    if (move[g] !== CornerMove.lean || gone[g] || level.mode[g] !== CornerMode.branch) continue
+    const value = seamBend(level, g, branch)
+    if (value > BEND_WORTH_SAYING) problems.push({ ...cornerProblem(level, 'bent-seam', g), value })
   }
   for (let g = 0; g < count; g++) {
     const cut = member[g] || member[previous[g]!]
@@ -114,6 +122,18 @@ function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals
   }
 }
 
+/** How far the straight jet at a corner beside an arc stands off the bent seam of the axes, half way down, mm. */
+function seamBend({ frame, axis, figure, previous, x, y, p, q }: Level, g: number, branch: Branch): number {
+  const t = frame.body.thickness / 2
+  const [before, after] = [figure[previous[g]!]!, figure[g]!]
+  const seam = branchPoint(
+    branch,
+    axis.end.axis[before]! + t * axis.end.slope[before]!,
+    axis.start.axis[after]! + t * axis.start.slope[after]!,
+  )
+  return Math.hypot(seam.x - x[g]! - t * p[g]!, seam.y - y[g]! - t * q[g]!)
+}
+
 /** How far the jet runs on past the axis' corner before its wall is finished at every depth, and how far it starts before the next. */
 export function runOutLengths(level: Level, g: number): { readonly before: number; readonly after: number } {
   const { frame, axis, figure, previous, x, y, p, q } = level
@@ -156,7 +176,7 @@ function wallCornerBelow(level: Level, g: number): { readonly x: number; readonl
   const o2 = axis.start.wall[f2]! + t * axis.start.tan[f2]!
   const branch = frame.branches.get(g)
   if (branch) return branchPoint(branch, o1, o2)
-  const o = frame.mode[g] === CornerMode.mitre ? o2 - o1 : 0
+  const o = level.mode[g] === CornerMode.mitre ? o2 - o1 : 0
   return {
     x: frame.px[g]! + o1 * frame.mx[g]! + o * frame.kx[g]!,
     y: frame.py[g]! + o1 * frame.my[g]! + o * frame.ky[g]!,
@@ -186,7 +206,7 @@ function canRunOut(level: Level, g: number): boolean {
   const p = previous[g]!
   if (!frame.arc[p] && !frame.arc[g]) return true
   const { before, after } = runOutLengths(level, g)
-  const widest = Math.min(frame.turn[g]!, WIDEST_ARC_RUN_OUT)
+  const widest = Math.min(level.turn[g]!, WIDEST_ARC_RUN_OUT)
   const fits = (edge: number, length: number) =>
     !frame.arc[edge] || length <= widest * Math.hypot(x[g]! - frame.cx[edge]!, y[g]! - frame.cy[edge]!)
   return fits(p, before) && fits(g, after)

@@ -22,6 +22,9 @@ export interface Level {
   readonly previous: Int32Array
   readonly next: Int32Array
   readonly gone: Uint8Array
+  /** Turn and kind of every corner: the frame's, but where edges are gone. */
+  readonly turn: Float64Array
+  readonly mode: Uint8Array
   /** The jet along the seam at corner g, in the columns of a jet path; at a step, the jet of the edge before. */
   readonly x: Float64Array
   readonly y: Float64Array
@@ -57,6 +60,8 @@ export function makeLevel(frame: Frame, axis: AxisTable, jet: Jet, level: number
     previous: frame.previous,
     next: frame.next,
     gone: new Uint8Array(count),
+    turn: frame.turn,
+    mode: frame.mode,
     x: numbers(),
     y: numbers(),
     p: numbers(),
@@ -69,8 +74,8 @@ export function makeLevel(frame: Frame, axis: AxisTable, jet: Jet, level: number
 
 /** Works out the seam jets of corners from ≤ g < to, in place. */
 export function fillCornerJets(level: Level, from: number, to: number): void {
-  const { frame, axis, figure, previous, x, y, p, q, unfit } = level
-  const { px, py, mx, my, kx, ky, mode } = frame
+  const { frame, axis, figure, previous, mode, x, y, p, q, unfit } = level
+  const { px, py, mx, my, kx, ky } = frame
   const sin = Math.sin(level.jet.taper)
   const { start, end } = axis
   for (let g = from; g < to; g++) {
@@ -150,7 +155,7 @@ export function wallCorner(level: Level, g: number): { readonly x: number; reado
   const o2 = axis.start.wall[figure[g]!]!
   const branch = frame.branches.get(g)
   if (branch) return branchPoint(branch, o1, o2)
-  const o = frame.mode[g] === CornerMode.mitre ? o2 - o1 : 0
+  const o = level.mode[g] === CornerMode.mitre ? o2 - o1 : 0
   return {
     x: frame.px[g]! + o1 * frame.mx[g]! + o * frame.kx[g]!,
     y: frame.py[g]! + o1 * frame.my[g]! + o * frame.ky[g]!,

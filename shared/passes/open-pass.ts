@@ -17,7 +17,7 @@ export const RunEnd = {
 } as const
 
 export function runEnd(level: Level, offers: Uint8Array, corner: number): number {
-  const { turn } = level.frame
+  const { turn } = level
   if (offers[corner]! & (1 << CornerMove.step)) return RunEnd.off
   return turn[corner]! > 0 ? RunEnd.runOut : RunEnd.seam
 }

@@ -8,6 +8,7 @@ import { chooseRunLeads, chooseStart } from './leads.ts'
 import { makeLevel, type Level } from './level.ts'
 import { writeOpenPass } from './open-pass.ts'
 import { roomOf } from './room.ts'
+import { followable } from './details.ts'
 import { levelsOffRoot, runsOf, type Run } from './runs.ts'
 import type {
   Jet,
@@ -27,6 +28,8 @@ const STATIONS_PER_EDGE = 4
 interface Layer {
   readonly level: Level
   readonly moves: CornerMoves
+  readonly problems: readonly PassProblem[]
+  readonly lost: readonly number[]
 }
 
 /**
@@ -39,11 +42,12 @@ export function passesOf(body: Body, jet: Jet, limits: PassLimits, choices: Pass
   const axis = axisTable(body, frame.table, jet)
   const room = roomOf(frame)
   const layers = [...levelsOffRoot(axis), 0].map((number): Layer => {
-    const level = makeLevel(frame, axis, jet, number)
-    return { level, moves: cornerMovesOf(level, limits, choices) }
+    const { level, problems, lost } = followable(makeLevel(frame, axis, jet, number))
+    const moves = cornerMovesOf(level, limits, choices)
+    return { level, moves, lost, problems: [...problems, ...moves.problems] }
   })
   const ground = layers.at(-1)!
-  const problems = layers.flatMap(({ moves }) => [...moves.problems])
+  const problems = layers.flatMap((layer) => layer.problems)
   const w = makeWriter(STATIONS_PER_EDGE * frame.count + 16)
   const firstStation = new Int32Array(frame.count).fill(-1)
   const passes: Pass[] = []
@@ -94,7 +98,9 @@ export function passesOf(body: Body, jet: Jet, limits: PassLimits, choices: Pass
 
 /** Open runs first, then those that go all the way round, then the freeing pass along the roots. */
 function runsInOrder(layers: readonly Layer[], loop: number): { readonly layer: Layer; readonly run: Run }[] {
-  const all = layers.flatMap((layer) => runsOf(layer.level, loop).map((run) => ({ layer, run })))
+  const all = layers
+    .filter(({ lost }) => !lost.includes(loop))
+    .flatMap((layer) => runsOf(layer.level, loop).map((run) => ({ layer, run })))
   const rank = ({ layer, run }: (typeof all)[number]) => (layer.level.level === 0 ? 2 : run.closed ? 1 : 0)
   return all.sort((a, b) => rank(a) - rank(b))
 }

@@ -48,7 +48,7 @@ export function* startsOf(
   choices: PassChoices,
   lengths: readonly number[],
 ): Generator<Start> {
-  const { turn, mode } = level.frame
+  const { turn, mode } = level
   const { kerf } = level.jet
   const corners = bestOf(level, loop, (g) =>
     mode[g] !== CornerMode.spike &&

@@ -62,7 +62,7 @@ export function writeEnd(w: PathWriter, level: Level, plan: EdgePlan): void {
   } else if (endMove === CornerMove.pivot) {
     putSquare(w, level, plan, to, MoveKind.pivot)
     const wall = wallCorner(level, end)
-    bend(w, level.frame.turn[end]!, wall.x, wall.y)
+    bend(w, level.turn[end]!, wall.x, wall.y)
   }
 }
 
