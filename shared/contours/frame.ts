@@ -1,6 +1,8 @@
-import { endTangent, startTangent } from '../geometry/segment.ts'
+import { outlineBounds, outlineOfLoops, segmentAt, type Outline } from '../geometry/outline.ts'
+import { roundingOf } from '../geometry/rounding.ts'
 import type { Segment } from '../geometry/types.ts'
 import { branchOf, branchPoint, type Branch } from './branch.ts'
+import { levelsOfWalls } from '../walls/levels.ts'
 import type { Body } from '../walls/types.ts'
 import { sameOffsets, wallTable, type EdgeEnds, type WallTable } from '../walls/wall-table.ts'
 
@@ -10,7 +12,12 @@ import { sameOffsets, wallTable, type EdgeEnds, type WallTable } from '../walls/
  */
 export interface Frame {
   readonly body: Body
+  readonly outline: Outline
   readonly table: WallTable
+  /** The depths between which no wall changes tilt: 0, every facet end within the plate, the thickness; rising. */
+  readonly levels: readonly number[]
+  /** What arithmetic may have done to a coordinate, mm: pieces nearer than this touch (see `roundingOf`). */
+  readonly near: number
   readonly count: number
   /** Loop l has the edges loopStart[l] up to loopStart[l + 1]. */
   readonly loopStart: Int32Array
@@ -19,6 +26,7 @@ export interface Frame {
   readonly edgeOf: Int32Array
   readonly previous: Int32Array
   readonly next: Int32Array
+  /** Made when first asked for. */
   readonly segments: readonly Segment[]
   /** 1 where the edge is an arc; its centre, radius and signed sweep (0 for lines). */
   readonly arc: Uint8Array
@@ -31,7 +39,12 @@ export interface Frame {
   /** Unit direction in which each edge starts. */
   readonly ux: Float64Array
   readonly uy: Float64Array
-  /** Signed turn of the tangent at each corner, (−π, π], left positive. */
+  /** Length of each edge in the drawing. */
+  readonly length: Float64Array
+  /** Sine and cosine of the tangent's turn at each corner, left positive. */
+  readonly turnSin: Float64Array
+  readonly turnCos: Float64Array
+  /** The turn itself, (−π, π]; made when first asked for. */
   readonly turn: Float64Array
   readonly mode: Uint8Array
   /** The corner's displacement per unit of offset (mitre vector), and per unit of unlike offset (mitres only). */
@@ -63,6 +76,7 @@ export const CornerMode = {
  * 1e-4 mm says about an edge of 1 mm. Anything more is taken as meant, however far its seam then leans.
  */
 export const STRAIGHT_TURN = 1e-4
+const STRAIGHT_SIN = Math.sin(STRAIGHT_TURN)
 
 /**
  * Neighbours of which one is an arc are tangent below this turn, radians: 10′, the tightest angle class of
@@ -82,116 +96,78 @@ const TANGENT_SHIFT = 0.01
 const SMALL_ARC_TURN = Math.PI / 180
 
 /** Lines within this of doubling back form a spike, radians: their mitre would lie a million offsets away. */
-const SPIKE_TURN = Math.PI - 1e-6
+const SPIKE_SIN = Math.sin(1e-6)
 
 const frames = new WeakMap<Body, Frame>()
 
 /** The compiled body; bodies never change, so each is compiled once. */
 export function frameOf(body: Body): Frame {
-  let frame = frames.get(body)
-  if (!frame) {
-    frame = compile(body)
-    frames.set(body, frame)
-  }
+  return frames.get(body) ?? frameFrom(body, outlineOfLoops(body.loops), wallTable(body))
+}
+
+/** Compiles a body whose outline and walls are at hand in columns already. */
+export function frameFrom(body: Body, outline: Outline, table: WallTable): Frame {
+  const frame = compile(body, outline, table)
+  frames.set(body, frame)
   return frame
 }
 
-function compile(body: Body): Frame {
-  const table = wallTable(body)
-  const count = table.rowOfEdge.length
-  const loopStart = new Int32Array(body.loops.length + 1)
+function compile(body: Body, outline: Outline, table: WallTable): Frame {
+  const { count, loopStart, next, x: px, y: py, arc, cx, cy, radius, sweep, hasArcs } = outline
+  const numbers = () => new Float64Array(count)
+  const corners: Corners = {
+    ux: numbers(),
+    uy: numbers(),
+    length: numbers(),
+    turnSin: numbers(),
+    turnCos: numbers(),
+    mode: new Uint8Array(count),
+    mx: numbers(),
+    my: numbers(),
+    kx: numbers(),
+    ky: numbers(),
+  }
   const loopOf = new Int32Array(count)
   const edgeOf = new Int32Array(count)
   const previous = new Int32Array(count)
-  const next = new Int32Array(count)
-  const segments: Segment[] = []
-  for (const [l, loop] of body.loops.entries()) {
-    const start = segments.length
-    for (const segment of loop) {
-      const g = segments.push(segment) - 1
+  for (let l = 0; l + 1 < loopStart.length; l++) {
+    const first = loopStart[l]!
+    const end = loopStart[l + 1]!
+    for (let g = first; g < end; g++) {
       loopOf[g] = l
-      edgeOf[g] = g - start
+      edgeOf[g] = g - first
       previous[g] = g - 1
-      next[g] = g + 1
     }
-    if (loop.length > 0) {
-      previous[start] = segments.length - 1
-      next[segments.length - 1] = start
-    }
-    loopStart[l + 1] = segments.length
+    if (first < end) previous[first] = end - 1
   }
-  const numbers = () => new Float64Array(count)
-  const [px, py, ux, uy, turn] = [numbers(), numbers(), numbers(), numbers(), numbers()]
-  const [mx, my, kx, ky] = [numbers(), numbers(), numbers(), numbers()]
-  const arc = new Uint8Array(count)
-  const [cx, cy, radius, sweep] = [numbers(), numbers(), numbers(), numbers()]
-  const mode = new Uint8Array(count)
+  for (let g = 0; g < count; g++) direct(outline, g, corners)
+  let segments: readonly Segment[] | null = null
+  const allSegments = () => (segments ??= Array.from({ length: count }, (_, g) => segmentAt(outline, g)))
   const branches = new Map<number, Branch>()
-  let hasArcs = false
   let hasSteps = false
   for (let g = 0; g < count; g++) {
-    const direction = startTangent(segments[g]!)
-    ux[g] = direction.x
-    uy[g] = direction.y
-  }
-  for (let g = 0; g < count; g++) {
     const p = previous[g]!
-    const after = segments[g]!
-    const before = segments[p]!
-    px[g] = after.from.x
-    py[g] = after.from.y
-    if (after.kind === 'arc') {
-      hasArcs = true
-      arc[g] = 1
-      cx[g] = after.centre.x
-      cy[g] = after.centre.y
-      radius[g] = after.radius
-      sweep[g] = after.sweep
-    }
-    const end = before.kind === 'arc' ? endTangent(before) : null
-    const ax = end ? end.x : ux[p]!
-    const ay = end ? end.y : uy[p]!
-    const bx = ux[g]!
-    const by = uy[g]!
-    const sin = ax * by - ay * bx
-    const cos = ax * bx + ay * by
-    const phi = Math.atan2(sin, cos)
-    turn[g] = phi
-    const lines = before.kind === 'line' && after.kind === 'line'
-    const smooth = Math.abs(phi) <= (lines ? STRAIGHT_TURN : tangentTurn(before, after))
-    if (!smooth && !lines) {
-      mode[g] = CornerMode.branch
-      branches.set(g, branchOf(before, after))
-      continue
-    }
-    if (Math.abs(phi) >= SPIKE_TURN) {
-      mode[g] = CornerMode.spike
-      continue
-    }
-    // m·n₁ = m·n₂ = 1: the sum of both normals over 1 + cos(turn), steady down to no turn at all.
-    mx[g] = (ay + by) / (1 + cos)
-    my[g] = -(ax + bx) / (1 + cos)
-    if (!smooth) {
-      mode[g] = CornerMode.mitre
-      kx[g] = ax / sin
-      ky[g] = ay / sin
-    } else if (sameOffsets(table, table.rowOfEdge[p]!, table.rowOfEdge[g]!)) {
-      mode[g] = CornerMode.smooth
-    } else {
-      mode[g] = CornerMode.step
-      hasSteps = true
-    }
+    const mode = turnCorner(outline, table, p, g, corners)
+    corners.mode[g] = mode
+    if (mode === CornerMode.branch) branches.set(g, branchOf(allSegments()[p]!, allSegments()[g]!))
+    else if (mode === CornerMode.step) hasSteps = true
   }
+  let turn: Float64Array | null = null
   return {
     body,
+    outline,
     table,
+    levels: levelsOfWalls(table.walls, body.thickness),
+    near: roundingOf(outlineBounds(outline)),
     count,
     loopStart,
     loopOf,
     edgeOf,
     previous,
     next,
-    segments,
+    get segments() {
+      return allSegments()
+    },
     arc,
     cx,
     cy,
@@ -199,27 +175,79 @@ function compile(body: Body): Frame {
     sweep,
     px,
     py,
-    ux,
-    uy,
-    turn,
-    mode,
-    mx,
-    my,
-    kx,
-    ky,
+    ...corners,
+    get turn() {
+      return (turn ??= corners.turnSin.map((sin, g) => Math.atan2(sin, corners.turnCos[g]!)))
+    },
     branches,
     hasArcs,
     hasSteps,
   }
 }
 
+type Corners = {
+  readonly [
+    column in 'ux' | 'uy' | 'length' | 'turnSin' | 'turnCos' | 'mx' | 'my' | 'kx' | 'ky'
+  ]: Float64Array
+} & { readonly mode: Uint8Array }
+
+/** Direction in which an edge starts, and its length. */
+function direct(outline: Outline, g: number, { ux, uy, length }: Corners): void {
+  const { next, x, y, arc, cx, cy, radius, sweep } = outline
+  const n = next[g]!
+  if (arc[g]) {
+    const way = Math.sign(sweep[g]!)
+    const far = Math.hypot(x[g]! - cx[g]!, y[g]! - cy[g]!)
+    ux[g] = (-way * (y[g]! - cy[g]!)) / far
+    uy[g] = (way * (x[g]! - cx[g]!)) / far
+    length[g] = radius[g]! * Math.abs(sweep[g]!)
+    return
+  }
+  const dx = x[n]! - x[g]!
+  const dy = y[n]! - y[g]!
+  const chord = Math.sqrt(dx * dx + dy * dy)
+  length[g] = chord
+  ux[g] = chord === 0 ? dx : dx / chord
+  uy[g] = chord === 0 ? dy : dy / chord
+}
+
+/** The turn from edge p to edge g, how the corner between them moves, and of what mode it is. */
+function turnCorner(outline: Outline, table: WallTable, p: number, g: number, out: Corners): number {
+  const { x, y, arc, cx, cy, sweep } = outline
+  const { ux, uy, mx, my } = out
+  let ax = ux[p]!
+  let ay = uy[p]!
+  if (arc[p]) {
+    const way = Math.sign(sweep[p]!)
+    const far = Math.hypot(x[g]! - cx[p]!, y[g]! - cy[p]!)
+    ax = (-way * (y[g]! - cy[p]!)) / far
+    ay = (way * (x[g]! - cx[p]!)) / far
+  }
+  const bx = ux[g]!
+  const by = uy[g]!
+  const sin = ax * by - ay * bx
+  const cos = ax * bx + ay * by
+  out.turnSin[g] = sin
+  out.turnCos[g] = cos
+  const lines = !arc[p] && !arc[g]
+  const smooth = cos > 0 && Math.abs(sin) <= (lines ? STRAIGHT_SIN : Math.sin(tangentTurn(outline, p, g)))
+  if (!smooth && !lines) return CornerMode.branch
+  if (cos < 0 && Math.abs(sin) <= SPIKE_SIN) return CornerMode.spike
+  // m·n₁ = m·n₂ = 1: the sum of both normals over 1 + cos(turn), steady down to no turn at all.
+  mx[g] = (ay + by) / (1 + cos)
+  my[g] = -(ax + bx) / (1 + cos)
+  if (!smooth) {
+    out.kx[g] = ax / sin
+    out.ky[g] = ay / sin
+    return CornerMode.mitre
+  }
+  return sameOffsets(table, table.rowOfEdge[p]!, table.rowOfEdge[g]!) ? CornerMode.smooth : CornerMode.step
+}
+
 /** Turn below which neighbours, at least one of them an arc, count as tangent. */
-function tangentTurn(before: Segment, after: Segment): number {
-  const radius = Math.min(
-    before.kind === 'arc' ? before.radius : Infinity,
-    after.kind === 'arc' ? after.radius : Infinity,
-  )
-  return Math.max(TANGENT_TURN, Math.min(SMALL_ARC_TURN, TANGENT_SHIFT / radius))
+function tangentTurn({ arc, radius }: Outline, p: number, g: number): number {
+  const narrowest = Math.min(arc[p] ? radius[p]! : Infinity, arc[g] ? radius[g]! : Infinity)
+  return Math.max(TANGENT_TURN, Math.min(SMALL_ARC_TURN, TANGENT_SHIFT / narrowest))
 }
 
 /** Ends of every edge at some offsets: edge g runs from (sx, sy)[g] to (ex, ey)[g]. */
@@ -276,6 +304,11 @@ export function place(frame: Frame, offsets: EdgeEnds, out: Places): void {
   }
 }
 
+/** Whether the wall of an edge changes its tilt along it. */
+export function blendsAt({ table }: Frame, g: number): boolean {
+  return table.blends && table.blended[table.rowOfEdge[g]!] === 1
+}
+
 /** Radius of an arc edge at an offset, mm; negative past its vanishing. */
 export function radiusAt(frame: Frame, g: number, offset: number): number {
   return frame.arc[g] ? frame.radius[g]! + Math.sign(frame.sweep[g]!) * offset : 0
@@ -286,20 +319,17 @@ export function radiusAt(frame: Frame, g: number, offset: number): number {
  * turned by less than half a turn about the centre (a corner never crosses its axis).
  */
 export function sweepAt(frame: Frame, g: number, places: Places): number {
-  const segment = frame.segments[g]!
-  if (segment.kind === 'line') return 0
-  const { from, to, centre } = segment
-  let sweep = segment.sweep
-  if (frame.mode[g] === CornerMode.branch) {
-    sweep -= turnAbout(
-      from.x - centre.x,
-      from.y - centre.y,
-      places.sx[g]! - centre.x,
-      places.sy[g]! - centre.y,
-    )
+  if (!frame.arc[g]) return 0
+  const { px, py, mode, next } = frame
+  const cx = frame.cx[g]!
+  const cy = frame.cy[g]!
+  const n = next[g]!
+  let sweep = frame.sweep[g]!
+  if (mode[g] === CornerMode.branch) {
+    sweep -= turnAbout(px[g]! - cx, py[g]! - cy, places.sx[g]! - cx, places.sy[g]! - cy)
   }
-  if (frame.mode[frame.next[g]!] === CornerMode.branch) {
-    sweep += turnAbout(to.x - centre.x, to.y - centre.y, places.ex[g]! - centre.x, places.ey[g]! - centre.y)
+  if (mode[n] === CornerMode.branch) {
+    sweep += turnAbout(px[n]! - cx, py[n]! - cy, places.ex[g]! - cx, places.ey[g]! - cy)
   }
   return sweep
 }
