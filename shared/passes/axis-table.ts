@@ -43,13 +43,18 @@ export function axisTable(body: Body, table: WallTable, jet: Jet): AxisTable {
 /** The root facet stands nearest to vertical; of two alike the lower one, so that what lies above it goes first. */
 export function rootFacet({ facets }: Wall): number {
   let root = 0
-  facets.forEach(({ tilt }, k) => {
-    if (Math.abs(tilt) <= Math.abs(facets[root]!.tilt)) root = k
+  facets.forEach((facet, k) => {
+    if (steepest(facet) <= steepest(facets[root]!)) root = k
   })
   return root
 }
 
-function endTilt(facet: Facet & { readonly endTilt?: number }): number {
+/** A blend counts by its steeper end. */
+function steepest(facet: Facet): number {
+  return Math.max(Math.abs(facet.tilt), Math.abs(endTilt(facet)))
+}
+
+function endTilt(facet: Facet): number {
   return facet.endTilt ?? facet.tilt
 }
 

@@ -1,6 +1,7 @@
-import { sweepAt } from '../contours/frame.ts'
+import { radiusAt } from '../contours/frame.ts'
+import type { Point } from '../geometry/types.ts'
 import type { JetLine } from './jet-at.ts'
-import { visitEdgesNear, type Room } from './room.ts'
+import { edgeAt, visitEdgesNear, type Room } from './room.ts'
 import type { Jet } from './types.ts'
 
 /**
@@ -24,7 +25,7 @@ export function moveIsClear(
   room: Room,
   jet: Jet,
   from: JetLine,
-  to: { readonly x: number; readonly y: number },
+  to: Point,
   margin: number,
   own: readonly number[],
 ): boolean {
@@ -44,13 +45,13 @@ export function moveIsClear(
 }
 
 /** Pieces into which a band is cut where the jet narrows, so that each asks for little more than it needs. */
-const TAPER_PIECES = 6
+const TAPER_PIECES = 12
 
 function wallIsClear(
   room: Room,
   g: number,
   from: JetLine,
-  to: { readonly x: number; readonly y: number },
+  to: Point,
   half: (depth: number) => number,
   margin: number,
 ): boolean {
@@ -58,13 +59,12 @@ function wallIsClear(
   const chords = frame.arc[g] ? Math.ceil(Math.abs(frame.sweep[g]!) / ARC_PIECE) + 1 : 1
   for (let k = 1; k < depths.length; k++) {
     const [above, below] = [depths[k - 1]!, depths[k]!]
-    const radius = frame.arc[g]
-      ? Math.max(
-          frame.radius[g]! + Math.sign(frame.sweep[g]!) * offsets[k - 1]!.start[g]!,
-          frame.radius[g]! + Math.sign(frame.sweep[g]!) * offsets[k]!.start[g]!,
-        )
-      : 0
-    const pad = radius * (1 - Math.cos(ARC_PIECE / 2))
+    const wall = bandOf(room, g, k)
+    const widest = Math.max(
+      radiusAt(frame, g, offsets[k - 1]!.start[g]!),
+      radiusAt(frame, g, offsets[k]!.start[g]!),
+    )
+    const pad = widest * (1 - Math.cos(ARC_PIECE / 2))
     const slices = half(above) === half(below) ? 1 : TAPER_PIECES
     for (let s = 0; s < slices; s++) {
       const [a, b] = [s / slices, (s + 1) / slices]
@@ -72,68 +72,74 @@ function wallIsClear(
       const deepB = above + b * (below - above)
       const need = Math.min(half(deepA), half(deepB)) * (1 - TOUCH) + margin + pad
       for (let c = 0; c < chords; c++) {
-        const quad = patch(room, g, k, a, b, c / chords, (c + 1) / chords, from, deepA, deepB)
-        if (distanceToPatch(from.x, from.y, to.x, to.y, quad) < need) return false
+        pointOnWall(wall, a, c / chords, from, deepA, 0)
+        pointOnWall(wall, a, (c + 1) / chords, from, deepA, 2)
+        pointOnWall(wall, b, (c + 1) / chords, from, deepB, 4)
+        pointOnWall(wall, b, c / chords, from, deepB, 6)
+        if (distanceToPatch(from.x, from.y, to.x, to.y, patch) < need) return false
       }
     }
   }
   return true
 }
 
-const quadOut = new Float64Array(8)
-
-/** The patch that a chord of wall g sweeps in a slice of a band, seen along the jet: start and end above, then end and start below. */
-function patch(
-  room: Room,
-  g: number,
-  band: number,
-  a: number,
-  b: number,
-  chordFrom: number,
-  chordTo: number,
-  { p, q }: JetLine,
-  deepA: number,
-  deepB: number,
-): Float64Array {
-  pointOnWall(room, g, band, a, chordFrom, 0, p, q, deepA)
-  pointOnWall(room, g, band, a, chordTo, 2, p, q, deepA)
-  pointOnWall(room, g, band, b, chordTo, 4, p, q, deepB)
-  pointOnWall(room, g, band, b, chordFrom, 6, p, q, deepB)
-  return quadOut
+/** A wall over a band of depth: a line by its ends, an arc by its polar ends; both above and below. */
+interface WallBand {
+  readonly arc: boolean
+  readonly cx: number
+  readonly cy: number
+  /** Line: x and y of start and end. Arc: radius, heading of the start, sweep. */
+  readonly above: readonly number[]
+  readonly below: readonly number[]
 }
 
+function bandOf(room: Room, g: number, k: number): WallBand {
+  const { frame, offsets } = room
+  const [cx, cy] = [frame.cx[g]!, frame.cy[g]!]
+  const arc = frame.arc[g] === 1
+  const ends = [k - 1, k].map((level) => {
+    const [start, end] = edgeAt(room, g, level)
+    if (!arc) return [start.x, start.y, end.x, end.y]
+    const heading = Math.atan2(start.y - cy, start.x - cx)
+    const h = frame.next[g]!
+    const turned = (x: number, y: number, at: Point) =>
+      Math.atan2(
+        (x - cx) * (at.y - cy) - (y - cy) * (at.x - cx),
+        (x - cx) * (at.x - cx) + (y - cy) * (at.y - cy),
+      )
+    const sweep =
+      frame.sweep[g]! - turned(frame.px[g]!, frame.py[g]!, start) + turned(frame.px[h]!, frame.py[h]!, end)
+    return [radiusAt(frame, g, offsets[level]!.start[g]!), heading, sweep]
+  })
+  const [above, below] = [ends[0]!, ends[1]!]
+  if (arc) below[1]! -= 2 * Math.PI * Math.round((below[1]! - above[1]!) / (2 * Math.PI))
+  return { arc, cx, cy, above, below }
+}
+
+/** The patch that a chord of a wall sweeps in a slice of a band, seen along the jet. */
+const patch = new Float64Array(8)
+
 function pointOnWall(
-  { frame, places, offsets }: Room,
-  g: number,
-  band: number,
+  wall: WallBand,
   part: number,
   along: number,
-  at: number,
-  p: number,
-  q: number,
+  { p, q }: JetLine,
   depth: number,
+  at: number,
 ): void {
-  const mix = (above: Float64Array, below: Float64Array) => above[g]! + part * (below[g]! - above[g]!)
-  const [upper, lower] = [places[band - 1]!, places[band]!]
+  const mix = (i: number) => wall.above[i]! + part * (wall.below[i]! - wall.above[i]!)
   let x: number
   let y: number
-  if (frame.arc[g]) {
-    const way = Math.sign(frame.sweep[g]!)
-    const radius = frame.radius[g]! + way * mix(offsets[band - 1]!.start, offsets[band]!.start)
-    const headingAbove = Math.atan2(upper.sy[g]! - frame.cy[g]!, upper.sx[g]! - frame.cx[g]!)
-    let headingBelow = Math.atan2(lower.sy[g]! - frame.cy[g]!, lower.sx[g]! - frame.cx[g]!)
-    headingBelow -= 2 * Math.PI * Math.round((headingBelow - headingAbove) / (2 * Math.PI))
-    const sweep = sweepAt(frame, g, upper) * (1 - part) + sweepAt(frame, g, lower) * part
-    const heading = headingAbove + part * (headingBelow - headingAbove) + along * sweep
-    x = frame.cx[g]! + radius * Math.cos(heading)
-    y = frame.cy[g]! + radius * Math.sin(heading)
+  if (wall.arc) {
+    const heading = mix(1) + along * mix(2)
+    x = wall.cx + mix(0) * Math.cos(heading)
+    y = wall.cy + mix(0) * Math.sin(heading)
   } else {
-    const [sx, sy] = [mix(upper.sx, lower.sx), mix(upper.sy, lower.sy)]
-    x = sx + along * (mix(upper.ex, lower.ex) - sx)
-    y = sy + along * (mix(upper.ey, lower.ey) - sy)
+    x = mix(0) + along * (mix(2) - mix(0))
+    y = mix(1) + along * (mix(3) - mix(1))
   }
-  quadOut[at] = x - depth * p
-  quadOut[at + 1] = y - depth * q
+  patch[at] = x - depth * p
+  patch[at + 1] = y - depth * q
 }
 
 /** Distance of a stretch from a four-cornered patch, 0 where they share a point. */

@@ -1,7 +1,7 @@
 import { branchPoint, type Branch } from '../contours/branch.ts'
 import { CornerMode } from '../contours/frame.ts'
 import { makeAxisEdge, readAxisEdge } from './axis-edges.ts'
-import { wallCorner, type Level } from './level.ts'
+import { wallCorner, wallCornerAt, type Level } from './level.ts'
 import { CornerMove, LeanRefusal, type PassChoices, type PassLimits, type PassProblem } from './types.ts'
 
 /** How a level goes round each corner, what else would work, and why not. */
@@ -141,7 +141,7 @@ export function runOutLengths(level: Level, g: number): { readonly before: numbe
   const f1 = figure[previous[g]!]!
   const f2 = figure[g]!
   const top = wallCorner(level, g)
-  const bottom = wallCornerBelow(level, g)
+  const bottom = wallCornerAt(level, g, t)
   const u1 = directionBefore(level, g)
   const u2 = directionAfter(level, g)
   let before = 0
@@ -165,22 +165,6 @@ export function halfWidth({ jet, frame }: Level, slope: number): number {
   const length = Math.sqrt(1 + slope * slope)
   const widening = Math.max(0, -Math.tan(jet.taper)) * frame.body.thickness * length
   return (jet.kerf / 2 + widening) * length
-}
-
-function wallCornerBelow(level: Level, g: number): { readonly x: number; readonly y: number } {
-  const { frame, axis, figure, previous } = level
-  const t = frame.body.thickness
-  const f1 = figure[previous[g]!]!
-  const f2 = figure[g]!
-  const o1 = axis.end.wall[f1]! + t * axis.end.tan[f1]!
-  const o2 = axis.start.wall[f2]! + t * axis.start.tan[f2]!
-  const branch = frame.branches.get(g)
-  if (branch) return branchPoint(branch, o1, o2)
-  const o = level.mode[g] === CornerMode.mitre ? o2 - o1 : 0
-  return {
-    x: frame.px[g]! + o1 * frame.mx[g]! + o * frame.kx[g]!,
-    y: frame.py[g]! + o1 * frame.my[g]! + o * frame.ky[g]!,
-  }
 }
 
 /** Directions of travel at the axis' corner g, along the edge before it and along its own. */

@@ -128,7 +128,9 @@ function stepIsBefore(level: Level, corner: number): boolean {
 export function edgeLength({ frame }: Level, g: number): number {
   if (frame.arc[g]) return frame.radius[g]! * Math.abs(frame.sweep[g]!)
   const h = frame.next[g]!
-  return Math.hypot(frame.px[h]! - frame.px[g]!, frame.py[h]! - frame.py[g]!)
+  const dx = frame.px[h]! - frame.px[g]!
+  const dy = frame.py[h]! - frame.py[g]!
+  return Math.sqrt(dx * dx + dy * dy)
 }
 
 function stepLength(level: Level, corner: number, { axis }: EdgePlan): number {

@@ -1,5 +1,6 @@
 import { branchPoint } from '../contours/branch.ts'
 import { CornerMode, type Frame } from '../contours/frame.ts'
+import type { Point } from '../geometry/types.ts'
 import type { AxisTable } from './axis-table.ts'
 import { seamLength } from './jet-lines.ts'
 import type { Jet } from './types.ts'
@@ -149,13 +150,24 @@ function branchJet(level: Level, g: number, before: number, after: number): void
 }
 
 /** Where the two facets at a corner, prolonged to the top face, meet there. */
-export function wallCorner(level: Level, g: number): { readonly x: number; readonly y: number } {
-  const { frame, axis, figure, previous } = level
-  const o1 = axis.end.wall[figure[previous[g]!]!]!
-  const o2 = axis.start.wall[figure[g]!]!
+export function wallCorner(level: Level, g: number): Point {
+  return wallCornerAt(level, g, 0)
+}
+
+/** The same at a depth, mm. */
+export function wallCornerAt(level: Level, g: number, depth: number): Point {
+  const { axis, figure, previous } = level
+  const [before, after] = [figure[previous[g]!]!, figure[g]!]
+  const o1 = axis.end.wall[before]! + depth * axis.end.tan[before]!
+  const o2 = axis.start.wall[after]! + depth * axis.start.tan[after]!
+  return cornerAt(level.frame, g, o1, o2)
+}
+
+/** Corner g when the edge before it stands at offset o1 and its own at o2; at a step, the end of the edge before. */
+export function cornerAt(frame: Frame, g: number, o1: number, o2: number): Point {
   const branch = frame.branches.get(g)
   if (branch) return branchPoint(branch, o1, o2)
-  const o = level.mode[g] === CornerMode.mitre ? o2 - o1 : 0
+  const o = frame.mode[g] === CornerMode.mitre ? o2 - o1 : 0
   return {
     x: frame.px[g]! + o1 * frame.mx[g]! + o * frame.kx[g]!,
     y: frame.py[g]! + o1 * frame.my[g]! + o * frame.ky[g]!,

@@ -54,7 +54,8 @@ export function put(
   w.move[i] = move
   w.edge[i] = edge
   w.facet[i] = facet
-  w.sweep[i] = w.cx[i] = w.cy[i] = 0
+  // Columns are zero to begin with; only what is written over may hold a bend.
+  if (w.sweep[i] !== 0) w.sweep[i] = w.cx[i] = w.cy[i] = 0
 }
 
 /** Makes the move from the station written last a round one. */
