@@ -17,11 +17,16 @@ export interface Happening {
  */
 const SAME_TIME = 1e-10
 
-/** Keeps the first happening; of simultaneous ones a vanishing before a split before a break-through, then by loop and edge. */
+/**
+ * Keeps the first happening, in whatever order they are offered; of simultaneous ones a vanishing before a split before
+ * a break-through, then by loop and edge.
+ */
 export class First {
-  found: Happening | null = null
   /** Latest moment that is still of interest. */
   until: number
+  /** Everything within `same` of the earliest. */
+  private simultaneous: Happening[] = []
+  private earliest = Infinity
   private readonly same: number
 
   constructor(length: number) {
@@ -31,16 +36,30 @@ export class First {
 
   offer(t: number, kind: EventKind, edge: number, other: number, x: number, y: number): void {
     if (!(t <= this.until)) return
+    if (t < this.earliest) {
+      this.earliest = t
+      this.until = Math.min(this.until, t + this.same)
+      this.simultaneous = this.simultaneous.filter((found) => found.t <= this.until)
+    }
     const [low, high] = other >= 0 && other < edge ? [other, edge] : [edge, other]
-    const found = this.found
-    if (found && t >= found.t - this.same && !precedes(kind, low, high, found)) return
-    this.found = { t: found ? Math.min(t, found.t) : t, kind, edge: low, other: high, x, y }
-    this.until = Math.min(this.until, this.found.t + this.same)
+    this.simultaneous.push({ t, kind, edge: low, other: high, x, y })
+  }
+
+  /** All that are simultaneous with the first. */
+  get all(): readonly Happening[] {
+    return this.simultaneous
+  }
+
+  /** The one to name, at the earliest moment of all that are simultaneous. */
+  get found(): Happening | null {
+    let best: Happening | null = null
+    for (const happening of this.simultaneous) if (!best || precedes(happening, best)) best = happening
+    return best && { ...best, t: this.earliest }
   }
 }
 
 const ORDER: Record<EventKind, number> = { vanish: 0, split: 1, 'break-through': 2 }
 
-function precedes(kind: EventKind, edge: number, other: number, found: Happening): boolean {
-  return (ORDER[kind] - ORDER[found.kind] || edge - found.edge || other - found.other) < 0
+function precedes(a: Happening, b: Happening): boolean {
+  return (ORDER[a.kind] - ORDER[b.kind] || a.edge - b.edge || a.other - b.other) < 0
 }

@@ -47,6 +47,15 @@ export function wallTable(body: Body): WallTable {
       rowOfEdge[g++] = row
     }
   }
+  return tableOf(walls, rowOfEdge, body)
+}
+
+/** The table of walls that are known to be distinct; `rowOfEdge` by edge through all loops. */
+export function tableOf(
+  walls: readonly Wall[],
+  rowOfEdge: Int32Array,
+  { datum, thickness }: Pick<Body, 'datum' | 'thickness'>,
+): WallTable {
   const facetCount = walls.reduce((sum, wall) => sum + wall.facets.length, 0)
   const firstFacet = new Int32Array(walls.length + 1)
   const facetEnd = new Float64Array(facetCount)
@@ -58,7 +67,7 @@ export function wallTable(body: Body): WallTable {
   const blended = Uint8Array.from(walls, (wall) => (blends(wall) ? 1 : 0))
   const anyBlends = blended.includes(1)
   const columns = (end: EdgeEnd): WallColumns => ({
-    datum: Float64Array.from(walls, (wall) => datumReach(wall, body.datum, body.thickness, end)),
+    datum: Float64Array.from(walls, (wall) => datumReach(wall, datum, thickness, end)),
     facetTan: Float64Array.from(
       walls.flatMap(({ facets }) => facets.map((facet) => Math.tan(facetTilt(facet, end)))),
     ),
