@@ -60,14 +60,25 @@ function cureEdge(wall: EdgeWall, facet: number, taper: number, limit: number): 
   }
 }
 
-/** A wall whose tilt increases with depth: a straight jet would cut into the part. */
+/** A wall whose tilt increases with depth, at either end of its edge: a straight jet would cut into the part. */
 export function facetsCutIn(wall: EdgeWall): Finding | null {
-  if (firstRise(wall.facets) < 0) return null
-  const reach = reachability(wall.facets.map(({ depth, tilt }) => ({ depth, tilt: radians(tilt) })))
+  const blends = wall.facets.some(({ endTilt }) => endTilt !== undefined)
+  return cutIn(wall, wall, blends) ?? (blends ? cutIn(wall, atEnd(wall), blends) : null)
+}
+
+/** The wall as it stands at its edge's end. */
+function atEnd(wall: EdgeWall): EdgeWall {
+  return { ...wall, facets: wall.facets.map(({ depth, tilt, endTilt = tilt }) => ({ depth, tilt: endTilt })) }
+}
+
+/** `section`: the wall as it stands at one end. Along a blend what holds at both ends holds between them. */
+function cutIn(wall: EdgeWall, section: EdgeWall, blends: boolean): Finding | null {
+  if (firstRise(section.facets) < 0) return null
+  const reach = reachability(section.facets.map(({ depth, tilt }) => ({ depth, tilt: radians(tilt) })))
   if (reach.kind === 'reachable') return null
   const { facet } = reach
-  const above = wall.facets[facet - 1]!
-  const below = wall.facets[facet]!
+  const above = section.facets[facet - 1]!
+  const below = section.facets[facet]!
   const name = edgeName(wall)
   const overs = reach.turnedOverDoes
     ? 'Turned over, the plate could be cut.'
@@ -83,14 +94,15 @@ export function facetsCutIn(wall: EdgeWall): Finding | null {
       `Facet ${facet + 1} of edge ${name} leans ${formatAngle(below.tilt, { sign: true })} under ` +
       `${formatAngle(above.tilt, { sign: true })} at ${formatLength(above.depth, 'mm')}. Cutting either facet, a ` +
       `straight jet would go up to ${formatLength(reach.intoPart, 'mm')} into the part. ${overs}`,
-    cure: cureFacet(wall, facet, above.tilt, reach.partDepth),
+    cure: cureFacet(wall, facet, blends ? null : above.tilt, reach.partDepth),
   }
 }
 
+/** `tilt`: the one that would do for the whole edge; null along a blend, where no one number does. */
 function cureFacet(
   wall: EdgeWall,
   facet: number,
-  tilt: number,
+  tilt: number | null,
   partDepth: { readonly fromTop: readonly number[]; readonly fromBottom: readonly number[] } | null,
 ): Cure {
   const name = edgeName(wall)
@@ -99,7 +111,7 @@ function cureFacet(
     ? ` Only cuts that stop inside the plate could keep the shape: facet ${list(partDepth.fromTop)} from the top, ` +
       `${list(partDepth.fromBottom)} from the bottom.`
     : ''
-  if (!withTilt(wall, facet, tilt))
+  if (tilt === null || !withTilt(wall, facet, tilt))
     return { message: `Let the tilt of ${name} only decrease with depth.${split}` }
   return {
     message: `Set facet ${facet + 1} of ${name} to ${formatAngle(tilt, { sign: true })} or less.${split}`,

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { facetsCutIn } from '../../../shared/findings/edge.ts'
 import { evaluate } from '../../../shared/evaluate/evaluate.ts'
 import { findingSeverities } from '../../../shared/findings/schema.ts'
 import { roundTilt } from '../../../shared/findings/place.ts'
@@ -38,6 +39,19 @@ describe('findings about the part', () => {
         'the top, 2 from the bottom.',
       set: { edges: [{ loop: 0, edge: 2 }], facet: 1, tilt: -20 },
     })
+  })
+
+  it('a blend whose facets cross towards its end cannot be cut either', () => {
+    const facets = [
+      { depth: 4, tilt: 20, endTilt: -20 },
+      { depth: 10, tilt: 10 },
+    ]
+    const found = facetsCutIn({ loop: 0, edge: 2, facets })
+    expect(found).toMatchObject({ code: 'facets-cut-into-part', value: 10, limit: -20 })
+    expect(found?.cure?.set).toBeUndefined()
+    expect(
+      facetsCutIn({ loop: 0, edge: 2, facets: [{ depth: 4, tilt: 20, endTilt: 15 }, facets[1]!] }),
+    ).toBeNull()
   })
 
   it('a concave corner keeps half the kerf as a fillet; a convex one does not', () => {
