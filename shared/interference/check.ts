@@ -48,7 +48,7 @@ export function biteProblems(body: Body, path: JetPath, jet: Jet, result: Interf
 }
 
 /** How deep the told place stands in the move's jet at its deepest: by lines along the move, then ever closer ones. */
-function deepestOfMove(path: JetPath, jet: Jet, { station, x, y, depth }: JetBite): number {
+export function deepestOfMove(path: JetPath, jet: Jet, { station, x, y, depth }: JetBite): number {
   let [from, to] = [0, 1]
   let best = -Infinity
   for (let round = 0; round < 4; round++) {

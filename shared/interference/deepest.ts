@@ -26,13 +26,16 @@ export interface Deepest {
 export type Search = Deepest | 'none' | 'undecided'
 
 /** Looks after which a search gives up: some hundred times what a touch at an angle takes. */
-const MOST_LOOKS = 6000
+const MOST_LOOKS = 12_000
 
 /** Golden section: the share of a bracket that stays. */
 const GOLDEN = (Math.sqrt(5) - 1) / 2
 
 /** Share of the band to which the depth of a maximum is narrowed: a maximum is flat, so the bite is far better. */
 const FINE_SHARE = 1e-11
+
+/** Places along the move and down the band that are looked at first: the ends, where bites are often deepest, and the middle. */
+const SEEDS = [0, 1, 0.5] as const
 
 const line = makeJetLine()
 const wall = makeWallLine()
@@ -117,8 +120,8 @@ function steadyBite(scene: Scene, i: number, f: number, floor: number): Search {
     const dy = wall.sy - path.y[i]! - depth * q
     const det = vx * my - vy * mx
     if (det !== 0) {
-      u = (vx * dy - vy * dx) / -det
-      v = (dx * my - dy * mx) / -det
+      u = (vx * dy - vy * dx) / det
+      v = (dy * mx - dx * my) / det
       if (u >= 0 && u <= 1 && v >= 0 && v <= 1) return biteBeside(cone, p, q, depth, 0, 0)
     }
     let best = -Infinity
@@ -185,9 +188,16 @@ function turningBite(
   }
   const gain = moveGain(scene, i, round, steepest(scene, i))
   let best = { u: 0, s: 0, bite: -Infinity }
+  for (const u of SEEDS) {
+    lineAt(path, i, round, u, line)
+    for (const s of SEEDS) {
+      const bite = value(s)
+      if (bite > best.bite) best = { u, s, bite }
+    }
+  }
   const pieces = [0, 1]
-  for (let looks = 0; pieces.length > 0; looks += 2) {
-    if (looks > MOST_LOOKS / 10) {
+  for (let looks = 0; pieces.length > 0; looks++) {
+    if (looks > MOST_LOOKS) {
       if (best.bite <= floor) return 'undecided'
       break
     }
@@ -249,24 +259,41 @@ function bentBite(scene: Scene, i: number, f: number, round: RoundMove | null, f
     )
   }
   let best = { u: 0, s: 0, bite: -Infinity }
-  const pieces = [0, 1, 0, 1]
-  for (let looks = 0; pieces.length > 0; looks++) {
-    if (looks > MOST_LOOKS) {
-      if (best.bite <= floor) return 'undecided'
-      break
+  for (const u of SEEDS) {
+    for (const s of SEEDS) {
+      const bite = value(u, s)
+      if (bite > best.bite) best = { u, s, bite }
     }
+  }
+  // Pieces wait as u0, u1, s0, s1 and the most that they can hold; of two halves the better is looked into first.
+  const pieces: number[] = []
+  const most = (u0: number, u1: number, s0: number, s1: number) => {
+    const [u, s] = [(u0 + u1) / 2, (s0 + s1) / 2]
+    const bite = value(u, s)
+    if (bite > best.bite) best = { u, s, bite }
+    return bite + (alongMove * (u1 - u0)) / 2 + downGain(s0, s1)
+  }
+  pieces.push(0, 1, 0, 1, most(0, 1, 0, 1))
+  for (let looks = 0; pieces.length > 0; ) {
+    const bound = pieces.pop()!
     const s1 = pieces.pop()!
     const s0 = pieces.pop()!
     const u1 = pieces.pop()!
     const u0 = pieces.pop()!
-    const [u, s] = [(u0 + u1) / 2, (s0 + s1) / 2]
-    const bite = value(u, s)
-    const along = (alongMove * (u1 - u0)) / 2
-    const down = downGain(s0, s1)
-    if (bite > best.bite) best = { u, s, bite }
-    if (bite + along + down <= Math.max(floor, best.bite + BITE_ACCURACY)) continue
-    if (along > down) pieces.push(u0, u, s0, s1, u, u1, s0, s1)
-    else pieces.push(u0, u1, s0, s, u0, u1, s, s1)
+    if (bound <= Math.max(floor, best.bite + BITE_ACCURACY)) continue
+    if ((looks += 2) > MOST_LOOKS) {
+      if (best.bite <= floor) return 'undecided'
+      break
+    }
+    const u = (u0 + u1) / 2
+    const s = (s0 + s1) / 2
+    const split = alongMove * (u1 - u0) > 2 * downGain(s0, s1)
+    const [a, b] = split
+      ? [[u0, u, s0, s1] as const, [u, u1, s0, s1] as const]
+      : [[u0, u1, s0, s] as const, [u0, u1, s, s1] as const]
+    const [boundA, boundB] = [most(...a), most(...b)]
+    if (boundA < boundB) pieces.push(...a, boundA, ...b, boundB)
+    else pieces.push(...b, boundB, ...a, boundA)
   }
   if (best.bite <= floor) return 'none'
   value(best.u, best.s)

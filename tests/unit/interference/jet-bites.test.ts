@@ -4,10 +4,10 @@ import { interferencesOf } from '../../../shared/interference/interference.ts'
 import { BITE_ACCURACY } from '../../../shared/interference/types.ts'
 import { soundRange } from '../../../shared/events/range.ts'
 import { MoveKind, type Jet } from '../../../shared/passes/types.ts'
-import type { Body } from '../../../shared/walls/types.ts'
 import type { Vertex } from '../../../shared/geometry/types.ts'
-import { DEGREE, circle, facets, plate, rectangle, reversed, seeded, star } from '../../support/plates.ts'
+import { DEGREE, circle, facets, plate, rectangle, reversed, seeded } from '../../support/plates.ts'
 import { alongWalls, pathOfStations } from './paths.ts'
+import { randomPlate } from './plates.ts'
 
 const plain: Jet = { kerf: 1, taper: 0 }
 
@@ -45,7 +45,7 @@ describe('the jet against the far side of a slot', () => {
     // By hand: wall 3 leans outward (into the slot) by 20°, wall 5 is upright. The jet's axis at depth d lies
     // d·tan 20° + r/cos 20° outside wall 3's top line; from wall 5 it keeps w − that, square to a plane that leans
     // by 20° against the jet (level distance × cos 20°).
-    const [t, w, r] = [10, 5, 0.5]
+    const [t, w, r] = [10, 4.5, 0.5]
     const body = plate(t, [slotted(w)], (_, e) => facets([t, e === 3 ? 20 : 0]))
     const result = interferencesOf(body, alongWalls(body, plain), plain)
     const gap = w - t * Math.tan(20 * DEGREE) - r / Math.cos(20 * DEGREE)
@@ -102,25 +102,6 @@ describe('walls that the jet is meant to touch', () => {
     expect(biteProblems(body, alongWalls(body, plain).path, plain, result)).toEqual([])
   })
 })
-
-/** Plates on which jets that know nothing of each other bite often: notched stars, narrow slots, holes near edges, arcs. */
-function randomPlate(seed: number): Body {
-  const random = seeded(seed)
-  const n = 5 + Math.floor(7 * random())
-  const outline = star(random, n, 15, 30).map((v, i) =>
-    i % 4 === 3 && random() < 0.6 ? { ...v, bulge: 0.4 * random() - 0.2 } : v,
-  )
-  const loops = [outline]
-  const r = random()
-  if (r < 0.4) loops.push(circle(2 * random(), 2 * random(), 1 + 6 * random(), true))
-  else if (r < 0.7) loops.push(reversed(rectangle(-5, -1, 10, 0.8 + 2 * random())))
-  const t = 2 + 8 * random()
-  const lean = () => 50 * (random() - 0.5)
-  return plate(t, loops, () => {
-    const first = lean()
-    return random() < 0.7 ? facets([t, first]) : facets([t / 3, first], [t, first - 15 * random()])
-  })
-}
 
 describe('random plates against a dense sampler that shares no formula', () => {
   const seeds = Array.from({ length: 24 }, (_, k) => k + 1)
