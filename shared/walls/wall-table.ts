@@ -91,10 +91,11 @@ export function makeEdgeEnds({ rowOfEdge, blends: unlike }: WallTable): EdgeEnds
 
 /** Fills `out` with the offset of every edge's contour at a depth from the drawing's outline, mm. */
 export function fillOffsets(table: WallTable, depth: number, out: EdgeEnds): void {
-  fillEnds(table, out, (columns) => offsetsOfRows(table, columns, depth))
+  fillEnds(table, out, (columns) => rowOffsets(table, columns, depth))
 }
 
-function offsetsOfRows(table: WallTable, columns: WallColumns, depth: number): number[] {
+/** Per row: offset of its contour at a depth from the drawing's outline, mm. */
+export function rowOffsets(table: WallTable, columns: WallColumns, depth: number): number[] {
   return table.walls.map((_, row) => {
     const last = table.firstFacet[row + 1]! - 1
     let reach = 0
@@ -111,9 +112,12 @@ function offsetsOfRows(table: WallTable, columns: WallColumns, depth: number): n
 
 /** Fills `out` with the tangent of the tilt just below a depth: how fast each contour moves outward with depth. */
 export function fillRates(table: WallTable, depth: number, out: EdgeEnds): void {
-  fillEnds(table, out, ({ facetTan }) =>
-    table.walls.map((_, row) => facetTan[facetBelow(table, row, depth)]!),
-  )
+  fillEnds(table, out, (columns) => rowRates(table, columns, depth))
+}
+
+/** Per row: tangent of the tilt just below a depth. */
+export function rowRates(table: WallTable, { facetTan }: WallColumns, depth: number): number[] {
+  return table.walls.map((_, row) => facetTan[facetBelow(table, row, depth)]!)
 }
 
 function fillEnds(table: WallTable, out: EdgeEnds, perRow: (columns: WallColumns) => number[]): void {
