@@ -64,6 +64,6 @@ function edgeLengths(contour: Contour | null, loop: number, count: number): Floa
   const segments = contour?.loops[loop]
   if (!segments) return null
   const lengths = new Float64Array(count)
-  for (const segment of segments) if (segment.edge !== null) lengths[segment.edge] = segmentLength(segment)
+  for (const segment of segments) if (segment.edge !== null) lengths[segment.edge]! += segmentLength(segment)
   return lengths
 }

@@ -1,12 +1,15 @@
-import type { EdgeEnds } from '../walls/wall-table.ts'
+import type { Branch } from '../contours/branch.ts'
+import { CornerMode, blendsAt, makePlaces, place, radiusAt, sweepAt, type Frame } from '../contours/frame.ts'
+import { chordCount } from '../geometry/sample.ts'
 import { startAngle } from '../geometry/segment.ts'
-import { branchPoint, branchRange, branchStray, type Branch, type BranchRange } from '../contours/branch.ts'
-import { CornerMode, makePlaces, place, radiusAt, sweepAt, type Frame } from '../contours/frame.ts'
+import { levelsOf } from '../walls/levels.ts'
+import { fillOffsets, makeEdgeEnds } from '../walls/wall-table.ts'
 
 /**
- * The contour as a closed chain of moving pieces: edges and the steps between them. Piece e runs from point e
- * to point next[e]. Within a band (no wall changes tilt) lines move evenly and radii change evenly; points do
- * so too, except where an arc meets a neighbour at an angle (`bent` points).
+ * The contour as a closed chain of moving pieces: edges, the steps between them, and the chords that stand for an
+ * arc that blends. Piece e runs from point e to point next[e]. Within a band (no wall changes tilt) lines move evenly
+ * and radii change evenly; points do so too, except where an arc meets a neighbour at an angle (`uneven` points).
+ * A line keeps its direction, unless it blends (`rotates`): then only its ends tell where it lies.
  */
 export interface Chain {
   readonly frame: Frame
@@ -16,28 +19,49 @@ export interface Chain {
   readonly edge: Int32Array
   readonly next: Int32Array
   readonly previous: Int32Array
-  /** Unit direction of a line or step. */
+  /** Unit direction of a line or step that keeps it. */
   readonly ux: Float64Array
   readonly uy: Float64Array
-  /** Branch of a bent point. */
+  /** Branch of a point where an arc meets a neighbour at an angle. */
   readonly bent: readonly (Branch | undefined)[]
+  /** 1 for points that do not move evenly: bent ones, and those between chords of an arc with a bent end. */
+  readonly uneven: Uint8Array
+  readonly hasUneven: boolean
+  /** 1 for lines that blend and for chords. */
+  readonly rotates: Uint8Array
+  /** Of a chord: the share of its arc's sweep at which it starts. */
+  readonly share: Float64Array
+  /** Per edge its first piece that is not a step. */
+  readonly firstOf: Int32Array
 }
 
-export const PieceKind = { line: 0, arc: 1, step: 2 } as const
+export const PieceKind = { line: 0, arc: 1, step: 2, chord: 3 } as const
+
+/**
+ * How far the chords that stand for a blended arc may depart from it at the levels of the body, mm: events there are
+ * told as if the arc stood so much further in. A hundredth of what any cut is held to.
+ */
+export const EVENT_CHORD_TOLERANCE = 1e-3
 
 /** Loops are taken in the given order; pieces of one loop follow one another. */
 export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
   const steps = frame.hasSteps
     ? frame.mode.reduce((sum, mode) => sum + (mode === CornerMode.step ? 1 : 0), 0)
     : 0
-  const count = frame.count + steps
+  const chords = chordsOf(frame)
+  const count = frame.count + steps + (chords ? chords.reduce((sum, n) => sum + Math.max(0, n - 1), 0) : 0)
   const kind = new Uint8Array(count)
   const edge = new Int32Array(count)
   const next = new Int32Array(count)
   const previous = new Int32Array(count)
   const ux = new Float64Array(count)
   const uy = new Float64Array(count)
+  const uneven = new Uint8Array(count)
+  const rotates = new Uint8Array(count)
+  const share = new Float64Array(chords ? count : 0)
+  const firstOf = new Int32Array(frame.count)
   const bent: (Branch | undefined)[] = new Array<Branch | undefined>(count).fill(undefined)
+  let hasUneven = false
   let e = 0
   for (const loop of loopOrder) {
     const first = e
@@ -51,13 +75,29 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
         e++
       }
       edge[e] = g
+      firstOf[g] = e
+      bent[e] = frame.branches.get(g)
+      if (bent[e]) hasUneven = true
+      uneven[e] = bent[e] ? 1 : 0
+      const pieces = chords?.[g] ?? 0
+      if (pieces > 0) {
+        const loose = frame.branches.has(g) || frame.branches.has(frame.next[g]!)
+        for (let i = 0; i < pieces; i++, e++) {
+          kind[e] = PieceKind.chord
+          edge[e] = g
+          rotates[e] = 1
+          share[e] = i / pieces
+          if (i > 0 && loose) uneven[e] = 1
+        }
+        continue
+      }
       if (frame.arc[g]) {
         kind[e] = PieceKind.arc
       } else {
         ux[e] = frame.ux[g]!
         uy[e] = frame.uy[g]!
+        if (chords && blendsAt(frame, g)) rotates[e] = 1
       }
-      bent[e] = frame.branches.get(g)
       e++
     }
     for (let i = first; i < e; i++) {
@@ -65,121 +105,63 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
       previous[i] = i === first ? e - 1 : i - 1
     }
   }
-  return { frame, count, kind, edge, next, previous, ux, uy, bent }
+  return {
+    frame,
+    count,
+    kind,
+    edge,
+    next,
+    previous,
+    ux,
+    uy,
+    bent,
+    uneven,
+    hasUneven,
+    rotates,
+    share,
+    firstOf,
+  }
 }
 
-/** A chain over one stretch of its march; `t` runs from 0 to `length`, mm of depth (or a share, while morphing). */
-export interface March {
-  readonly chain: Chain
-  readonly length: number
-  /** Per edge: offset at t = 0 and its change per unit of t. */
-  readonly offset: EdgeEnds
-  readonly rate: EdgeEnds
-  /** Per piece: its first point at t = 0 and the point's velocity (bent points: the place only). */
-  readonly x: Float64Array
-  readonly y: Float64Array
-  readonly vx: Float64Array
-  readonly vy: Float64Array
-  /** Per piece that is an arc: radius and its change, start heading and sweep at t = 0. */
-  readonly radius: Float64Array
-  readonly radiusRate: Float64Array
-  readonly sweep: Float64Array
-}
-
-export function marchOf(chain: Chain, offset: EdgeEnds, rate: EdgeEnds, length: number): March {
-  const { frame, count, kind, edge } = chain
-  const x = new Float64Array(count)
-  const y = new Float64Array(count)
-  const vx = new Float64Array(count)
-  const vy = new Float64Array(count)
-  const arcs = frame.hasArcs ? count : 0
-  const radius = new Float64Array(arcs)
-  const radiusRate = new Float64Array(arcs)
-  const sweep = new Float64Array(arcs)
-  const places = makePlaces(frame.count)
-  place(frame, offset, places)
-  for (let e = 0; e < count; e++) {
-    const g = edge[e]!
-    const p = frame.previous[g]!
-    const isStep = kind[e] === PieceKind.step
-    x[e] = isStep ? places.ex[p]! : places.sx[g]!
-    y[e] = isStep ? places.ey[p]! : places.sy[g]!
-    const w1 = rate.end[p]!
-    const w2 = rate.start[g]!
-    const mode = frame.mode[g]
-    if (mode === CornerMode.mitre) {
-      vx[e] = w1 * frame.mx[g]! + (w2 - w1) * frame.kx[g]!
-      vy[e] = w1 * frame.my[g]! + (w2 - w1) * frame.ky[g]!
-    } else if (mode === CornerMode.smooth || mode === CornerMode.step) {
-      const w = isStep ? w1 : w2
-      vx[e] = w * frame.mx[g]!
-      vy[e] = w * frame.my[g]!
-    }
-    if (kind[e] === PieceKind.arc) {
-      radius[e] = radiusAt(frame, g, offset.start[g]!)
-      radiusRate[e] = Math.sign(frame.sweep[g]!) * w2
-      sweep[e] = sweepAt(frame, g, places)
+/** Chords for every arc that blends, 0 for other edges; null when nothing blends. */
+function chordsOf(frame: Frame): Int32Array | null {
+  const { table, count, body } = frame
+  if (!table.blends) return null
+  const chords = new Int32Array(count)
+  const offsets = makeEdgeEnds(table)
+  const places = makePlaces(count)
+  for (const depth of levelsOf(body)) {
+    fillOffsets(table, depth, offsets)
+    place(frame, offsets, places)
+    for (let g = 0; g < count; g++) {
+      if (!frame.arc[g] || !blendsAt(frame, g)) continue
+      const radius = Math.max(
+        frame.radius[g]!,
+        radiusAt(frame, g, offsets.start[g]!),
+        radiusAt(frame, g, offsets.end[g]!),
+      )
+      const most = chordCount(radius, sweepAt(frame, g, places), EVENT_CHORD_TOLERANCE)
+      chords[g] = Math.max(chords[g]!, most)
     }
   }
-  return { chain, length, offset, rate, x, y, vx, vy, radius, radiusRate, sweep }
+  return chords
 }
 
-export function pointX(march: March, e: number, t: number): number {
-  return march.chain.bent[e] ? bentPoint(march, e, t).x : march.x[e]! + t * march.vx[e]!
+/** Whether a corner stands at the piece's first point; the points between chords are none. */
+export function startsAtCorner({ kind, share }: Chain, e: number): boolean {
+  return kind[e] !== PieceKind.chord || share[e] === 0
 }
 
-export function pointY(march: March, e: number, t: number): number {
-  return march.chain.bent[e] ? bentPoint(march, e, t).y : march.y[e]! + t * march.vy[e]!
+/** Whether the piece is told by its two ends: a line, a chord, a step. */
+export function isStraight({ kind }: Chain, e: number): boolean {
+  return kind[e] !== PieceKind.arc
 }
 
-function bentPoint({ chain, offset, rate }: March, e: number, t: number) {
-  const g = chain.edge[e]!
-  const p = chain.frame.previous[g]!
-  return branchPoint(chain.bent[e]!, offset.end[p]! + t * rate.end[p]!, offset.start[g]! + t * rate.start[g]!)
-}
-
-/** How far point e can be, between two moments, from where it is half-way between them, mm. */
-export function pointStray(march: March, e: number, from: number, to: number): number {
-  const branch = march.chain.bent[e]
-  if (!branch) return (Math.hypot(march.vx[e]!, march.vy[e]!) * (to - from)) / 2
-  return branchStray(branch, ...offsetSpans(march, e, from, to))
-}
-
-export function bentRange(march: March, e: number, branch: Branch, from: number, to: number): BranchRange {
-  return branchRange(branch, ...offsetSpans(march, e, from, to))
-}
-
-function offsetSpans({ chain, offset, rate }: March, e: number, from: number, to: number) {
-  const g = chain.edge[e]!
-  const p = chain.frame.previous[g]!
-  return [
-    [offset.end[p]! + from * rate.end[p]!, offset.end[p]! + to * rate.end[p]!],
-    [offset.start[g]! + from * rate.start[g]!, offset.start[g]! + to * rate.start[g]!],
-  ] as const
-}
-
-/** Centre of a piece that is an arc. */
+/** Centre of a piece that is an arc or a chord of one. */
 export function centreOf(chain: Chain, e: number) {
   const segment = chain.frame.segments[chain.edge[e]!]!
   if (segment.kind !== 'arc') throw new Error('a line has no centre')
   return segment.centre
-}
-
-/** Signed included angle of an arc piece at a moment. */
-export function sweepOf(march: March, e: number, t: number): number {
-  const { chain } = march
-  const following = chain.next[e]!
-  if (!chain.bent[e] && !chain.bent[following]) return march.sweep[e]!
-  const { x: cx, y: cy } = centreOf(chain, e)
-  const turn = (i: number) => {
-    if (!chain.bent[i]) return 0
-    const ax = march.x[i]! - cx
-    const ay = march.y[i]! - cy
-    const bx = pointX(march, i, t) - cx
-    const by = pointY(march, i, t) - cy
-    return Math.atan2(ax * by - ay * bx, ax * bx + ay * by)
-  }
-  return march.sweep[e]! + turn(following) - turn(e)
 }
 
 /** Heading of the drawing's arc start: where smooth ends stay. */

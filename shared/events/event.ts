@@ -2,7 +2,8 @@ import { BOX_STRIDE, boxTree, visitMeetingPairs } from '../geometry/boxes.ts'
 import { boundsOf } from '../geometry/loop.ts'
 import { nearbyOrder } from '../geometry/order.ts'
 import { roundingOf } from '../geometry/rounding.ts'
-import { chainOf, marchOf, type Chain, type March } from './chain.ts'
+import { chainOf, type Chain } from './chain.ts'
+import { marchOf, type March } from './march.ts'
 import { First } from './first.ts'
 import { frameOf, type Frame } from '../contours/frame.ts'
 import { levelsOf } from '../walls/levels.ts'
@@ -62,7 +63,7 @@ function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: n
   if (rate.start.every((w) => w === 0) && rate.end.every((w) => w === 0)) return null
   const run = marchOf(chain, offset, rate, length)
   const first = new First(length)
-  offerVanishings(run, first)
+  offerVanishings(run, near, first)
   offerMeetings(run, near, first)
   return first.found
 }

@@ -1,20 +1,21 @@
 import { arcBounds } from '../geometry/segment.ts'
 import { BOX_STRIDE } from '../geometry/boxes.ts'
-import { PieceKind, bentRange, centreOf, drawnStart, type March } from './chain.ts'
+import { PieceKind, centreOf, drawnStart } from './chain.ts'
+import { bentRange, headingSpread, looseRadii, looseSpread, type March } from './march.ts'
 
 /**
  * A moving box round every piece from t = 0 to `span`, widened by `pad`. Even motion keeps between the boxes
- * of both ends; where a point is bent, one box of everywhere that it goes stands for both.
+ * of both ends, of a line that turns as well; where a point moves unevenly, one box of everywhere that it goes stands for both.
  */
 export function fillMotionBoxes(march: March, span: number, pad: number, out: Float64Array): void {
   const { chain, x, y, vx, vy } = march
-  const { count, kind, next, bent } = chain
+  const { count, kind, next, uneven } = chain
   for (let e = 0; e < count; e++) {
     const f = next[e]!
     const at = e * BOX_STRIDE
     if (kind[e] === PieceKind.arc) {
       fillArc(march, e, span, out, at)
-    } else if (bent[e] || bent[f]) {
+    } else if (uneven[e] || uneven[f]) {
       empty(out, at)
       cover(march, e, span, out, at)
       cover(march, f, span, out, at)
@@ -62,8 +63,7 @@ function include(
 
 /** Adds everywhere that point e goes. */
 function cover(march: March, e: number, span: number, out: Float64Array, at: number): void {
-  const branch = march.chain.bent[e]
-  if (!branch) {
+  if (!march.chain.uneven[e]) {
     for (const t of [0, span]) {
       const x = march.x[e]! + t * march.vx[e]!
       const y = march.y[e]! + t * march.vy[e]!
@@ -71,9 +71,22 @@ function cover(march: March, e: number, span: number, out: Float64Array, at: num
     }
     return
   }
+  const branch = march.chain.bent[e]
+  if (!branch) return coverLoose(march, e, span, out, at)
   const { radii, headings } = bentRange(march, e, branch, 0, span)
   for (const radius of radii) {
     const box = arcBounds(branch.centre, radius, headings[0], headings[1] - headings[0])
+    include(out, at, box.minX, box.minY, box.maxX, box.maxY)
+  }
+}
+
+/** A point between chords of an arc with a bent end. */
+function coverLoose(march: March, e: number, span: number, out: Float64Array, at: number): void {
+  const centre = centreOf(march.chain, e)
+  const spread = Math.min(Math.PI, looseSpread(march, e, 0, span))
+  const heading = Math.atan2(march.y[e]! - centre.y, march.x[e]! - centre.x)
+  for (const radius of looseRadii(march, e, 0, span)) {
+    const box = arcBounds(centre, radius, heading - spread, 2 * spread)
     include(out, at, box.minX, box.minY, box.maxX, box.maxY)
   }
 }
@@ -88,8 +101,8 @@ function fillArc(march: March, e: number, span: number, out: Float64Array, at: n
   let sweep = march.sweep[e]!
   if (bent) {
     const way = Math.sign(sweep)
-    const before = spread(e)
-    const after = spread(f)
+    const before = headingSpread(march, e, e, 0, span)
+    const after = headingSpread(march, e, f, 0, span)
     from -= way * before
     sweep += way * (before + after)
   }
@@ -97,18 +110,5 @@ function fillArc(march: March, e: number, span: number, out: Float64Array, at: n
     const box = arcBounds(centre, march.radius[e]! + end * span * march.radiusRate[e]!, from, sweep)
     empty(out, at + 4 * end)
     include(out, at + 4 * end, box.minX, box.minY, box.maxX, box.maxY)
-  }
-
-  /** How far a bent end's heading about this arc's centre can go from where it starts. */
-  function spread(point: number): number {
-    const branch = chain.bent[point]
-    if (!branch) return 0
-    const { radii, headings } = bentRange(march, point, branch, 0, span)
-    const turn = headings[1] - headings[0]
-    if (branch.centre === centre) return turn
-    // About the other centre: a point that strays by s turns by at most asin(s / r) ≤ (π/2) s / r.
-    const stray = Math.abs(radii[1] - radii[0]) + Math.max(...radii) * turn
-    const narrowest = march.radius[e]! + Math.min(0, span * march.radiusRate[e]!)
-    return narrowest > 0 ? Math.min(2 * Math.PI, ((Math.PI / 2) * stray) / narrowest) : 2 * Math.PI
   }
 }

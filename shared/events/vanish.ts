@@ -1,5 +1,6 @@
-import { PieceKind, centreOf, pointStray, pointX, pointY, sweepOf, type March } from './chain.ts'
-import { CornerMode } from '../contours/frame.ts'
+import { PieceKind, centreOf, isStraight, startsAtCorner } from './chain.ts'
+import { pointStray, pointX, pointY, sweepOf, type March } from './march.ts'
+import { CornerMode, radiusAt } from '../contours/frame.ts'
 import type { First } from './first.ts'
 import { firstZero } from './first-zero.ts'
 
@@ -7,11 +8,11 @@ import { firstZero } from './first-zero.ts'
  * Vanishings: an edge's length or an arc's radius reaches zero, or neighbours become tangent and then no
  * longer meet. Offers each piece's earliest one; what depends evenly on depth is solved directly.
  */
-export function offerVanishings(march: March, first: First): void {
+export function offerVanishings(march: March, near: number, first: First): void {
   const { chain } = march
-  const { count, kind, next, edge, ux, uy, bent, frame } = chain
+  const { count, kind, next, edge, ux, uy, bent, uneven, rotates, frame } = chain
   for (let e = 0; e < count; e++) {
-    if (kind[e] === PieceKind.step) continue
+    if (kind[e] === PieceKind.step || !startsAtCorner(chain, e)) continue
     const f = next[e]!
     const g = edge[e]!
     if (frame.mode[g] === CornerMode.spike) offerSpike(march, e, first)
@@ -22,7 +23,11 @@ export function offerVanishings(march: March, first: First): void {
         const { x, y } = centreOf(chain, e)
         first.offer(Math.max(0, march.radius[e]! / shrink), 'vanish', g, -1, x, y)
       }
-    } else if (!bent[e] && !bent[f]) {
+    } else if (kind[e] === PieceKind.chord) {
+      offerSpiralEnd(march, e, first)
+    } else if (rotates[e]) {
+      if (!uneven[e] && !uneven[f]) offerPoint(march, e, f, near, first)
+    } else if (!uneven[e] && !uneven[f]) {
       const length = (march.x[f]! - march.x[e]!) * ux[e]! + (march.y[f]! - march.y[e]!) * uy[e]!
       const shrink = (march.vx[e]! - march.vx[f]!) * ux[e]! + (march.vy[e]! - march.vy[f]!) * uy[e]!
       if (shrink > 0 && length <= shrink * first.until) {
@@ -32,14 +37,40 @@ export function offerVanishings(march: March, first: First): void {
     }
   }
   // Points on arcs are only right up to where their curves part, so they are looked at last.
-  if (bent.some(Boolean)) for (let e = 0; e < count; e++) offerBentVanishing(march, e, first)
+  if (chain.hasUneven) for (let e = 0; e < count; e++) offerBentVanishing(march, e, first)
+}
+
+/** A blended arc's radius goes evenly along it and in depth: it is used up first at one of its ends. */
+function offerSpiralEnd(march: March, e: number, first: First): void {
+  const { chain, offset, rate } = march
+  const g = chain.edge[e]!
+  const { x, y } = centreOf(chain, e)
+  const grow = Math.sign(chain.frame.sweep[g]!)
+  for (const [o, w] of [
+    [offset.start[g]!, rate.start[g]!],
+    [offset.end[g]!, rate.end[g]!],
+  ] as const) {
+    const shrink = -grow * w
+    if (shrink > 0) first.offer(Math.max(0, radiusAt(chain.frame, g, o) / shrink), 'vanish', g, -1, x, y)
+  }
+}
+
+/** A line that turns seldom closes to a point: both ends must come to one spot at one moment. Otherwise it folds (`offerMeeting`). */
+function offerPoint(march: March, e: number, f: number, near: number, first: First): void {
+  const { x, y, vx, vy, chain } = march
+  const [dx, dy, dvx, dvy] = [x[f]! - x[e]!, y[f]! - y[e]!, vx[f]! - vx[e]!, vy[f]! - vy[e]!]
+  const square = dvx * dvx + dvy * dvy
+  if (square === 0) return
+  const t = Math.max(0, -(dx * dvx + dy * dvy) / square)
+  if (Math.hypot(dx + t * dvx, dy + t * dvy) > near) return
+  first.offer(t, 'vanish', chain.edge[e]!, -1, x[e]! + t * vx[e]!, y[e]! + t * vy[e]!)
 }
 
 function offerBentVanishing(march: March, e: number, first: First): void {
-  const { kind, next, edge, ux, uy, bent } = march.chain
+  const { kind, next, edge, ux, uy, uneven, rotates } = march.chain
   const f = next[e]!
-  if (kind[e] === PieceKind.step || (!bent[e] && !bent[f])) return
-  const isArc = kind[e] === PieceKind.arc
+  if (kind[e] === PieceKind.step || rotates[e] || (!uneven[e] && !uneven[f])) return
+  const isArc = !isStraight(march.chain, e)
   const end = Math.min(first.until, march.length)
   const way = isArc ? Math.sign(march.sweep[e]!) : 0
   const length = isArc

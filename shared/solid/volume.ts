@@ -1,9 +1,8 @@
-import { capFactor } from '../geometry/loop.ts'
-import { frameOf, makePlaces, place, radiusAt, sweepAt, type Frame, type Places } from '../contours/frame.ts'
+import { areaByDepth } from '../contours/area.ts'
+import { frameOf } from '../contours/frame.ts'
 import { levelsOf } from '../walls/levels.ts'
 import { soundRange } from '../events/range.ts'
 import type { Body } from '../walls/types.ts'
-import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 
 /**
  * Relative error at which the integral over depth stops being refined, for bodies in which an arc meets a
@@ -16,7 +15,8 @@ const DEEPEST = 30
 
 /**
  * Volume, mm³; null when an event lies within the plate. Between two levels the area is quadratic in depth
- * for lines and tangent arcs, so that the prismatoid rule is exact; otherwise Gauss's rule is refined.
+ * for lines and tangent arcs, blended ones too as their corners and radii go evenly, so that the prismatoid rule is
+ * exact; otherwise Gauss's rule is refined.
  */
 export function volumeOf(body: Body): number | null {
   const { from, to, empty } = soundRange(body)
@@ -33,40 +33,6 @@ export function volumeOf(body: Body): number | null {
       : integrate(area, a, b, gauss(area, a, b), DEEPEST)
   }
   return volume
-}
-
-/** Area of the contour as a function of depth, mm². */
-function areaByDepth(body: Body): (depth: number) => number {
-  const frame = frameOf(body)
-  const offsets = makeEdgeEnds(frame.table)
-  const places = makePlaces(frame.count)
-  return (depth) => {
-    fillOffsets(frame.table, depth, offsets)
-    place(frame, offsets, places)
-    return areaOf(frame, offsets, places)
-  }
-}
-
-/** Chords about the first corner, steps between unlike neighbours, and the caps of arcs. */
-function areaOf(frame: Frame, offsets: EdgeEnds, places: Places): number {
-  const { sx, sy, ex, ey } = places
-  const ox = sx[0] ?? 0
-  const oy = sy[0] ?? 0
-  let twice = 0
-  for (let g = 0; g < frame.count; g++) {
-    const n = frame.next[g]!
-    const ax = sx[g]! - ox
-    const ay = sy[g]! - oy
-    const bx = ex[g]! - ox
-    const by = ey[g]! - oy
-    twice += ax * by - ay * bx
-    if (frame.hasSteps) twice += bx * (sy[n]! - oy) - by * (sx[n]! - ox)
-    if (frame.hasArcs && frame.arc[g]) {
-      const radius = radiusAt(frame, g, offsets.start[g]!)
-      twice += radius * radius * capFactor(sweepAt(frame, g, places))
-    }
-  }
-  return twice / 2
 }
 
 function integrate(f: (x: number) => number, a: number, b: number, whole: number, depth: number): number {
