@@ -1,7 +1,8 @@
-import { makeEdgePlan, planEdge } from './edge-plan.ts'
-import type { Level } from './level.ts'
+import { makeEdgePlan, planEdge, type EdgePlan } from './edge-plan.ts'
+import { turnAt, type Level } from './level.ts'
 import type { Start } from './starts.ts'
 import { bendAlong, putSquare, writeEnd, writeStart } from './stations.ts'
+import { writeStraightEdge } from './straight-edge.ts'
 import { CornerMove, MoveKind } from './types.ts'
 import { finish, put, type PathWriter } from './writer.ts'
 
@@ -21,10 +22,8 @@ export function writeClosedPass(
   const writeEdges = (from: number) => {
     let g = from
     do {
-      planEdge(level, move, g, plan)
       if (firstStation) firstStation[g] = w.at
-      writeStart(w, level, plan)
-      writeEnd(w, level, plan)
+      writeEdge(w, level, move, g, plan)
       g = level.next[g]!
     } while (g !== g0)
   }
@@ -67,11 +66,19 @@ export function writeClosedPass(
   }
 }
 
+/** All stations of an edge, at the writer's place: from its corner up to the next edge's first. */
+export function writeEdge(w: PathWriter, level: Level, move: Uint8Array, g: number, plan: EdgePlan): void {
+  if (writeStraightEdge(w, level, move, g)) return
+  planEdge(level, move, g, plan)
+  writeStart(w, level, plan)
+  writeEnd(w, level, plan)
+}
+
 /** A station off the wall by `out`, its jet parallel to the one on the wall, so that it is clear of it at every depth. */
 export function putOutside(
   w: PathWriter,
   level: Level,
-  plan: ReturnType<typeof makeEdgePlan>,
+  plan: EdgePlan,
   at: number,
   out: number,
   move: number,
@@ -111,8 +118,8 @@ export function lengthenRunIn(
 
 /** Unit direction into the waste half way between the outward normals at a corner. */
 export function outwardBetween(level: Level, g: number): { readonly x: number; readonly y: number } {
-  const { frame, turn } = level
-  const half = turn[g]! / 2
+  const { frame } = level
+  const half = turnAt(level, g) / 2
   // The edge's own outward normal, turned back by half the corner's turn.
   const [nx, ny] = [frame.uy[g]!, -frame.ux[g]!]
   const [c, s] = [Math.cos(half), Math.sin(half)]

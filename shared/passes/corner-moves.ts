@@ -1,7 +1,7 @@
 import { branchPoint, type Branch } from '../contours/branch.ts'
 import { CornerMode } from '../contours/frame.ts'
 import { makeAxisEdge, readAxisEdge } from './axis-edges.ts'
-import { wallCorner, wallCornerAt, type Level } from './level.ts'
+import { turnAt, wallCorner, wallCornerAt, type Level } from './level.ts'
 import { CornerMove, LeanRefusal, type PassChoices, type PassLimits, type PassProblem } from './types.ts'
 
 /** How a level goes round each corner, what else would work, and why not. */
@@ -29,7 +29,7 @@ const WIDEST_ARC_RUN_OUT = Math.PI / 4
  * pivot. A lean beside an edge that is too short for it gives way, which can shorten no other edge's room.
  */
 export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassChoices): CornerMoves {
-  const { frame, previous, gone, member, mode, turn } = level
+  const { frame, previous, gone, member, mode, turnSin } = level
   const { count } = frame
   const move = new Uint8Array(count)
   const offers = new Uint8Array(count)
@@ -49,12 +49,12 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
     else if (level.unfit[g]) refusals[g] = LeanRefusal.noJet
     else if (steep > steepest) refusals[g] = LeanRefusal.overLimit
     else offers[g] = 1 << CornerMove.lean
-    if (turn[g]! > 0 && previous[g] === frame.previous[g]) {
+    if (turnSin[g]! > 0 && previous[g] === frame.previous[g]) {
       offers[g]! |= 1 << CornerMove.pivot
       if (canRunOut(level, g)) offers[g]! |= 1 << CornerMove.runOut
     }
     const endsRun = member[g] !== member[previous[g]!]
-    move[g] = endsRun && turn[g]! > 0 ? CornerMove.runOut : firstOffer(offers[g]!)
+    move[g] = endsRun && turnSin[g]! > 0 ? CornerMove.runOut : firstOffer(offers[g]!)
   }
   for (const [g, wished] of choices.corners ?? []) {
     if (g >= 0 && g < count && !gone[g] && offers[g]! & (1 << wished)) move[g] = wished
@@ -190,7 +190,7 @@ function canRunOut(level: Level, g: number): boolean {
   const p = previous[g]!
   if (!frame.arc[p] && !frame.arc[g]) return true
   const { before, after } = runOutLengths(level, g)
-  const widest = Math.min(level.turn[g]!, WIDEST_ARC_RUN_OUT)
+  const widest = Math.min(turnAt(level, g), WIDEST_ARC_RUN_OUT)
   const fits = (edge: number, length: number) =>
     !frame.arc[edge] || length <= widest * Math.hypot(x[g]! - frame.cx[edge]!, y[g]! - frame.cy[edge]!)
   return fits(p, before) && fits(g, after)

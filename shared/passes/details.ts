@@ -32,7 +32,8 @@ export function followable(level: Level): Followed {
     ...level,
     previous: level.previous.slice(),
     next: level.next.slice(),
-    turn: level.turn.slice(),
+    turnSin: level.turnSin.slice(),
+    turnCos: level.turnCos.slice(),
     mode: level.mode.slice(),
   }
   const { previous, next, gone } = own

@@ -85,7 +85,7 @@ export function planEdge(level: Level, move: Uint8Array, g: number, plan: EdgePl
 }
 
 /** At least a kerf: a jet that turns on the spot digs in. `shift`: how far the bottom is ahead, mm. */
-function leanLength(level: Level, shift: number): number {
+export function leanLength(level: Level, shift: number): number {
   return Math.max(LEAN_FACTOR * Math.abs(shift), level.jet.kerf)
 }
 

@@ -23,8 +23,9 @@ export interface Level {
   readonly previous: Int32Array
   readonly next: Int32Array
   readonly gone: Uint8Array
-  /** Turn and kind of every corner: the frame's, but where edges are gone. */
-  readonly turn: Float64Array
+  /** Sine and cosine of the turn, and the kind, of every corner: the frame's, but where edges are gone. */
+  readonly turnSin: Float64Array
+  readonly turnCos: Float64Array
   readonly mode: Uint8Array
   /** The jet along the seam at corner g, in the columns of a jet path; at a step, the jet of the edge before. */
   readonly x: Float64Array
@@ -61,7 +62,8 @@ export function makeLevel(frame: Frame, axis: AxisTable, jet: Jet, level: number
     previous: frame.previous,
     next: frame.next,
     gone: new Uint8Array(count),
-    turn: frame.turn,
+    turnSin: frame.turnSin,
+    turnCos: frame.turnCos,
     mode: frame.mode,
     x: numbers(),
     y: numbers(),
@@ -147,6 +149,11 @@ function branchJet(level: Level, g: number, before: number, after: number): void
   y[g] = top.y
   p[g] = (bottom.x - top.x) / t
   q[g] = (bottom.y - top.y) / t
+}
+
+/** Signed turn at corner g, radians, left positive. */
+export function turnAt({ turnSin, turnCos }: Level, g: number): number {
+  return Math.atan2(turnSin[g]!, turnCos[g]!)
 }
 
 /** Where the two facets at a corner, prolonged to the top face, meet there. */

@@ -23,7 +23,8 @@ function meetLines(level: Level, p: number, h: number): boolean {
   const cos = ux * vx + uy * vy
   const [f1, f2] = [figure[p]!, figure[h]!]
   const [before, after] = [axis.end, axis.start]
-  level.turn[h] = Math.atan2(sin, cos)
+  level.turnSin[h] = sin
+  level.turnCos[h] = cos
   if (Math.abs(sin) < PARALLEL) {
     if (cos < 0) return false
     // In line again, past a notch: the way goes over half way between.
@@ -76,7 +77,8 @@ function meetArcs(level: Level, p: number, h: number): boolean {
   level.unfit[h] = 0
   level.mode[h] = CornerMode.mitre
   const [u, v] = [directionBefore(level, h), directionAfter(level, h)]
-  level.turn[h] = Math.atan2(u.x * v.y - u.y * v.x, u.x * v.x + u.y * v.y)
+  level.turnSin[h] = u.x * v.y - u.y * v.x
+  level.turnCos[h] = u.x * v.x + u.y * v.y
   return true
 }
 

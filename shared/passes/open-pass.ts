@@ -17,9 +17,9 @@ export const RunEnd = {
 } as const
 
 export function runEnd(level: Level, offers: Uint8Array, corner: number): number {
-  const { turn } = level
+  const { turnSin } = level
   if (offers[corner]! & (1 << CornerMove.step)) return RunEnd.off
-  return turn[corner]! > 0 ? RunEnd.runOut : RunEnd.seam
+  return turnSin[corner]! > 0 ? RunEnd.runOut : RunEnd.seam
 }
 
 /** Writes the pass of an open run. `move`: the moves at the corners within it; those at its ends are set here. */

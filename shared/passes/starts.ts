@@ -48,13 +48,14 @@ export function* startsOf(
   choices: PassChoices,
   lengths: readonly number[],
 ): Generator<Start> {
-  const { turn, mode } = level
+  const { turnSin, turnCos, mode } = level
   const { kerf } = level.jet
   const corners = bestOf(level, loop, (g) =>
     mode[g] !== CornerMode.spike &&
+    turnSin[g]! > 0 &&
     moves.offers[g]! & (1 << CornerMove.runOut) &&
     (choices.corners?.get(g) ?? CornerMove.runOut) === CornerMove.runOut
-      ? turn[g]! - FLATTEST_START
+      ? Math.cos(FLATTEST_START) - turnCos[g]!
       : 0,
   )
   for (const leadIn of lengths) for (const g of corners) yield { kind: 'corner', g, leadIn }

@@ -1,6 +1,6 @@
 import { sideSlope, sideSlopeRate } from './jet-lines.ts'
 import type { EdgePlan } from './edge-plan.ts'
-import { wallCorner, type Level } from './level.ts'
+import { turnAt, wallCorner, type Level } from './level.ts'
 import { CornerMove, MoveKind } from './types.ts'
 import { bend, put, type PathWriter } from './writer.ts'
 
@@ -62,7 +62,7 @@ export function writeEnd(w: PathWriter, level: Level, plan: EdgePlan): void {
   } else if (endMove === CornerMove.pivot) {
     putSquare(w, level, plan, to, MoveKind.pivot)
     const wall = wallCorner(level, end)
-    bend(w, level.turn[end]!, wall.x, wall.y)
+    bend(w, turnAt(level, end), wall.x, wall.y)
   }
 }
 
