@@ -12,6 +12,8 @@ export const findingCodes = [
   'corner-over-mechanical-limit',
   'corner-over-working-limit',
   'nozzle-touches-plate',
+  'head-touches-plate',
+  'axis-out-of-travel',
   // the part
   'wall-vanishes',
   'contour-splits',
@@ -22,6 +24,19 @@ export const findingCodes = [
   'hole-smaller-than-kerf',
   'profile-crosses-itself',
   'loop-outside-part',
+  // the way of the jet
+  'corner-without-way-round',
+  'corner-choice-refused',
+  'no-room-to-pierce',
+  'detail-finer-than-jet',
+  'hole-too-small-for-tilt',
+  'seam-bends',
+  'loose-before-last-pass',
+  'jet-cuts-wall',
+  'jet-clearance-unknown',
+  // the way out
+  'part-trapped',
+  'slug-trapped',
 ] as const
 
 export const findingSeverities = ['stop', 'warning', 'note'] as const

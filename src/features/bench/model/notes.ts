@@ -61,6 +61,19 @@ const gathered: Record<FindingCode, { one: string; say: string; length?: true }>
   'hole-smaller-than-kerf': { one: 'holes', say: 'are smaller than the kerf', length: true },
   'profile-crosses-itself': { one: 'places', say: 'let the profile cross itself' },
   'loop-outside-part': { one: 'loops', say: 'lie outside the part' },
+  'head-touches-plate': { one: 'places', say: 'bring the head down to the plate', length: true },
+  'axis-out-of-travel': { one: 'places', say: 'ask for more travel than an axis has' },
+  'corner-without-way-round': { one: 'corners', say: 'have no way round that works' },
+  'corner-choice-refused': { one: 'corners', say: 'refuse the way round that was chosen' },
+  'no-room-to-pierce': { one: 'loops', say: 'have no room to pierce and lead in' },
+  'detail-finer-than-jet': { one: 'edges', say: 'lie in hollows finer than the jet', length: true },
+  'hole-too-small-for-tilt': { one: 'holes', say: 'are too small for their tilt', length: true },
+  'seam-bends': { one: 'corners', say: 'have a bent seam', length: true },
+  'loose-before-last-pass': { one: 'loops', say: 'are free before their last pass' },
+  'jet-cuts-wall': { one: 'walls', say: 'are entered by the jet of another', length: true },
+  'jet-clearance-unknown': { one: 'places', say: 'could not be looked at to the end' },
+  'part-trapped': { one: 'parts', say: 'are trapped in the sheet' },
+  'slug-trapped': { one: 'slugs', say: 'are trapped in the part' },
 }
 
 export interface NoteFormat {
