@@ -83,7 +83,7 @@ function worstEdge(body: Body, kerf: number, loop: number, slope: Point, rise: 1
 }
 
 /** Largest n·(x, y) over the segment's outward normals. */
-function mostOutward(segment: Segment, { x, y }: Point): number {
+export function mostOutward(segment: Segment, { x, y }: Point): number {
   const at = (fraction: number) => {
     const n = normalAt(segment, fraction)
     return n.x * x + n.y * y
@@ -96,13 +96,7 @@ function mostOutward(segment: Segment, { x, y }: Point): number {
 }
 
 /** Room that a facet leaves along its piece's outward normal, mm per mm of rise or fall. */
-function boundOf(
-  body: Body,
-  kerf: number,
-  facet: Facet & { readonly endTilt?: number | undefined },
-  loop: number,
-  rise: 1 | -1,
-): number {
+export function boundOf(body: Body, kerf: number, facet: Facet, loop: number, rise: 1 | -1): number {
   const sign = loop === 0 ? -rise : rise
   return Math.min(
     ...[facet.tilt, facet.endTilt ?? facet.tilt].map(

@@ -10,7 +10,7 @@ export interface Allowance {
 }
 
 /** The tilts between which a facet's tilt lies along its edge: the same twice except where it blends. */
-function tiltsOf(facet: Facet & { readonly endTilt?: number | undefined }): readonly [number, number] {
+function tiltsOf(facet: Facet): readonly [number, number] {
   const end = facet.endTilt ?? facet.tilt
   return [Math.min(facet.tilt, end), Math.max(facet.tilt, end)]
 }
