@@ -150,12 +150,13 @@ function distanceToPatch(ax: number, ay: number, bx: number, by: number, quad: F
     const j = (i + 2) % 8
     const [px, py, qx, qy] = [quad[i]!, quad[i + 1]!, quad[j]!, quad[j + 1]!]
     if (py > ay !== qy > ay && ax < px + ((ay - py) / (qy - py)) * (qx - px)) inside = !inside
-    least = Math.min(least, distanceBetween(ax, ay, bx, by, px, py, qx, qy))
+    least = Math.min(least, squareBetween(ax, ay, bx, by, px, py, qx, qy))
   }
-  return inside ? 0 : least
+  return inside ? 0 : Math.sqrt(least)
 }
 
-function distanceBetween(
+/** Square of the distance between two stretches. */
+function squareBetween(
   ax: number,
   ay: number,
   bx: number,
@@ -185,5 +186,7 @@ function pointToStretch(x: number, y: number, ax: number, ay: number, bx: number
   const [ux, uy] = [bx - ax, by - ay]
   const square = ux * ux + uy * uy
   const part = square === 0 ? 0 : Math.min(1, Math.max(0, ((x - ax) * ux + (y - ay) * uy) / square))
-  return Math.hypot(x - ax - part * ux, y - ay - part * uy)
+  const dx = x - ax - part * ux
+  const dy = y - ay - part * uy
+  return dx * dx + dy * dy
 }

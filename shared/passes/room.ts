@@ -18,7 +18,7 @@ export interface Room {
 }
 
 /** Edges per box. */
-const RUN = 32
+const RUN = 8
 
 export function roomOf(frame: Frame): Room {
   const depths = depthsOf(frame)
