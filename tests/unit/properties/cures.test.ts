@@ -16,6 +16,9 @@ function cured(request: EvaluationRequest, cure: Cure | undefined): EvaluationRe
 
 const placeOf = ({ code, loop, edge, vertex }: Finding) => [code, loop, edge, vertex].join(' ')
 
+/** Some 800 evaluations, milliseconds each on a quiet core: room for a busy one. */
+const TIMEOUT = 60_000
+
 test('every finding is gone once its one-number cure is applied, 400 set-ups', () => {
   const tried: Record<string, number> = {}
   for (let seed = 1; seed <= 400; seed++) {
@@ -39,4 +42,4 @@ test('every finding is gone once its one-number cure is applied, 400 set-ups', (
   ]) {
     expect(tried[code] ?? 0, code).toBeGreaterThan(5)
   }
-})
+}, TIMEOUT)
