@@ -33,14 +33,7 @@ export function biteOnArc(
   const bound = cone.cos * cone.radius - cone.sin * depth * length - gap * fall
   if (fall > 0 && bound <= 0) return bound
   const biteFrom = (heading: number) =>
-    biteBeside(
-      cone,
-      p,
-      q,
-      depth,
-      dx + wall.radius * Math.cos(heading),
-      dy + wall.radius * Math.sin(heading),
-    )
+    biteBeside(cone, p, q, depth, dx + wall.radius * Math.cos(heading), dy + wall.radius * Math.sin(heading))
   let best = -Infinity
   const offer = (heading: number) => {
     const bite = biteFrom(heading)

@@ -118,7 +118,13 @@ export function sampledBites(body: Body, path: JetPath, jet: Jet, sampling: Samp
   return found
 }
 
-function deepestInSection(loops: readonly Loop[], line: JetLine, jet: Jet, depth: number, directions: number) {
+function deepestInSection(
+  loops: readonly Loop[],
+  line: JetLine,
+  jet: Jet,
+  depth: number,
+  directions: number,
+) {
   const axis: Point = { x: line.x + line.p * depth, y: line.y + line.q * depth }
   const length = Math.hypot(line.p, line.q, 1)
   const reach = jet.kerf * length

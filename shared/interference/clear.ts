@@ -1,3 +1,4 @@
+import { CornerMode } from '../contours/frame.ts'
 import type { JetPath } from '../passes/types.ts'
 import { fallBeside, type JetCone } from './jet-cone.ts'
 import { isSteady, roundMove } from './moves.ts'
@@ -40,10 +41,18 @@ export function isClear(scene: Scene, i: number, f: number): boolean {
   if (!arc[f] && isPlane(band, f) && outsideWall(scene, i, f)) return true
   if (path.sweep[i] !== 0) return isRoundClear(scene, i, f)
   const e = path.edge[i]!
-  if (e >= 0 && e !== f && !arc[e] && isPlane(band, e) && liesBehind(band, f, e) && outsideWall(scene, i, e)) {
+  if (
+    e >= 0 &&
+    e !== f &&
+    !arc[e] &&
+    isPlane(band, e) &&
+    liesBehind(band, f, e) &&
+    outsideWall(scene, i, e)
+  ) {
     return true
   }
-  return arc[f] !== 0 && isArcClear(scene, i, f)
+  if (arc[f]) return isArcClear(scene, i, f)
+  return outsideCorner(scene, i, f) || outsideCorner(scene, i, band.frame.next[f]!)
 }
 
 /** Whether a straight move keeps outside the endless plane of line f's wall within the band. */
@@ -83,9 +92,7 @@ function outsidePlane(
   // Quickly out: the axis itself is behind the plane.
   if (a0 + z0 * c0 < h0 || a0 + z1 * c0 < h1 || a1 + z0 * c1 < h0 || a1 + z1 * c1 < h1) return false
   const bite = (a: number, c: number, square: number, z: number, h: number) =>
-    cone.cos * cone.radius -
-    cone.sin * Math.sqrt(square) * z -
-    fallBeside(cone, c, square) * (a + z * c - h)
+    cone.cos * cone.radius - cone.sin * Math.sqrt(square) * z - fallBeside(cone, c, square) * (a + z * c - h)
   const square0 = 1 + p0 * p0 + q0 * q0
   const square1 = 1 + p1 * p1 + q1 * q1
   if (!(bite(a0, c0, square0, z0, h0) <= HALF)) return false
@@ -98,6 +105,7 @@ function outsidePlane(
   if (turn === 0 || (sin === 0 && closing === 0)) return true
   if (sin * sin * Math.max(square0, square1) > LEAST_ROOT) return false
   // Between looks a step apart the bite passes the higher one by at most bend·step²/8, bend a bound of its second derivative.
+  let looks = 0
   for (const [z, h] of [
     [z0, h0],
     [z1, h1],
@@ -107,17 +115,37 @@ function outsidePlane(
       z * sin * turn * turn +
       2 * Math.abs(g1 - g0) * (closing + sin * turn) +
       Math.max(g0, g1) * (2 * closing * closing + 4 * sin * turn * turn)
-    const looks = Math.ceil(Math.sqrt(bend / (8 * HALF)))
-    if (looks > MOST_LOOKS) return false
-    const slack = BITE_TOLERANCE - (looks > 0 ? bend / (looks * looks * 8) : 0)
-    for (let k = 1; k < looks; k++) {
-      const u = k / looks
+    const biteOf = (u: number) => {
       const [pu, qu] = [p0 + u * (p1 - p0), q0 + u * (q1 - q0)]
-      const square = 1 + pu * pu + qu * qu
-      if (!(bite(a0 + u * (a1 - a0), c0 + u * (c1 - c0), square, z, h) <= slack)) return false
+      return bite(a0 + u * (a1 - a0), c0 + u * (c1 - c0), 1 + pu * pu + qu * qu, z, h)
     }
+    const isBelow = (u0: number, f0: number, u1: number, f1: number): boolean => {
+      const step = u1 - u0
+      if (Math.max(f0, f1) + (bend * step * step) / 8 <= BITE_TOLERANCE) return true
+      if (++looks > MOST_LOOKS) return false
+      const u = (u0 + u1) / 2
+      const f = biteOf(u)
+      return f <= BITE_TOLERANCE && isBelow(u0, f0, u, f) && isBelow(u, f, u1, f1)
+    }
+    if (!isBelow(0, bite(a0, c0, square0, z, h), 1, bite(a1, c1, square1, z, h))) return false
   }
   return true
+}
+
+/**
+ * Whether a straight move keeps outside a plane that leans against line f's wall from corner g, one of its ends:
+ * square to the mitre there, so that with a convex corner the wall lies behind it. Jets that pass from one
+ * wall's prolongation to the next one's do.
+ */
+function outsideCorner({ cone, path, band }: Scene, i: number, g: number): boolean {
+  const { frame } = band
+  if (!(frame.turn[g]! > 0) || frame.mode[g] !== CornerMode.mitre) return false
+  const scale = 1 / Math.hypot(frame.mx[g]!, frame.my[g]!)
+  const [nx, ny] = [frame.mx[g]! * scale, frame.my[g]! * scale]
+  const [high, low] = band.places
+  const h0 = high.sx[g]! * nx + high.sy[g]! * ny
+  const h1 = low.sx[g]! * nx + low.sy[g]! * ny
+  return outsidePlane(cone, path, i, nx, ny, band.top, h0, band.bottom, h1)
 }
 
 /** The bound of the second derivative holds where sin²τ·L² is below this: its root then stays near that of 1 + c². */
@@ -240,7 +268,8 @@ function isRoundClear({ cone, path, band }: Scene, i: number, f: number): boolea
     far[level] = out >= 0 && back >= 0 ? Math.max(at + out, back - at) - HALF : Infinity
   }
   return (
-    behindCone(band, f, { cx, cy, at: near }, { from: heading, sweep }) || outsideRings(band, f, { cx, cy, at: far })
+    behindCone(band, f, { cx, cy, at: near }, { from: heading, sweep }) ||
+    outsideRings(band, f, { cx, cy, at: far })
   )
 }
 

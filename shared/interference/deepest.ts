@@ -173,13 +173,7 @@ function steepest({ path }: Scene, i: number): number {
 }
 
 /** A move that turns or goes round, and a plane facet: for each jet line the bite is concave in depth. */
-function turningBite(
-  scene: Scene,
-  i: number,
-  f: number,
-  round: RoundMove | null,
-  floor: number,
-): Search {
+function turningBite(scene: Scene, i: number, f: number, round: RoundMove | null, floor: number): Search {
   const { cone, path, band } = scene
   const height = band.bottom - band.top
   const value = (s: number) => {
@@ -274,7 +268,7 @@ function bentBite(scene: Scene, i: number, f: number, round: RoundMove | null, f
     return bite + (alongMove * (u1 - u0)) / 2 + downGain(s0, s1)
   }
   pieces.push(0, 1, 0, 1, most(0, 1, 0, 1))
-  for (let looks = 0; pieces.length > 0; ) {
+  for (let looks = 0; pieces.length > 0;) {
     const bound = pieces.pop()!
     const s1 = pieces.pop()!
     const s0 = pieces.pop()!

@@ -78,7 +78,10 @@ function emptyBoxes(count: number): Float64Array {
 
 /** Whether the jets of edge g may meet wall f. */
 export function mayMeet({ walls, jets }: Ground, g: number, f: number): boolean {
-  return jets[g * BOX_STRIDE]! <= jets[g * BOX_STRIDE + 2]! && boxesMeet(jets, g * BOX_STRIDE, walls, f * BOX_STRIDE, 1)
+  return (
+    jets[g * BOX_STRIDE]! <= jets[g * BOX_STRIDE + 2]! &&
+    boxesMeet(jets, g * BOX_STRIDE, walls, f * BOX_STRIDE, 1)
+  )
 }
 
 const moveBox = new Float64Array(BOX_STRIDE)

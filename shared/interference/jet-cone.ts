@@ -124,9 +124,7 @@ export function biteOnSegment(
 export function fallBeside(cone: JetCone, c: number, square: number): number {
   const away = 1 + c * c
   if (cone.sin === 0) return 1 / Math.sqrt(away)
-  return (
-    (Math.sqrt(away - cone.sin * cone.sin * square) - cone.sin * c * Math.sqrt(square)) / away
-  )
+  return (Math.sqrt(away - cone.sin * cone.sin * square) - cone.sin * c * Math.sqrt(square)) / away
 }
 
 /**

@@ -14,9 +14,7 @@ export function hasMove(path: JetPath, i: number): boolean {
 /** A straight move along which the jet does not turn: it sweeps a plane sheet. */
 export function isSteady({ p, q, sweep }: JetPath, i: number): boolean {
   return (
-    sweep[i] === 0 &&
-    Math.abs(p[i + 1]! - p[i]!) <= SAME_SLOPE &&
-    Math.abs(q[i + 1]! - q[i]!) <= SAME_SLOPE
+    sweep[i] === 0 && Math.abs(p[i + 1]! - p[i]!) <= SAME_SLOPE && Math.abs(q[i + 1]! - q[i]!) <= SAME_SLOPE
   )
 }
 
@@ -100,7 +98,14 @@ export function moveRates(
 }
 
 /** Widens the box at out[at…] by everywhere that the jet of move i is at a depth. */
-export function coverMove(cone: JetCone, path: JetPath, i: number, depth: number, out: Float64Array, at: number): void {
+export function coverMove(
+  cone: JetCone,
+  path: JetPath,
+  i: number,
+  depth: number,
+  out: Float64Array,
+  at: number,
+): void {
   if (path.sweep[i] !== 0) {
     coverRound(cone, path, i, depth, out, at)
     return
@@ -109,7 +114,14 @@ export function coverMove(cone: JetCone, path: JetPath, i: number, depth: number
   coverLine(cone, path, i + 1, depth, out, at)
 }
 
-function coverLine(cone: JetCone, path: JetPath, i: number, depth: number, out: Float64Array, at: number): void {
+function coverLine(
+  cone: JetCone,
+  path: JetPath,
+  i: number,
+  depth: number,
+  out: Float64Array,
+  at: number,
+): void {
   const p = path.p[i]!
   const q = path.q[i]!
   const width = cone.sin === 0 ? cone.radius : widthAt(cone, depth, 1 + p * p + q * q)
@@ -127,7 +139,14 @@ function widthAt(cone: JetCone, depth: number, square: number): number {
   return halfWidthAt(cone, depth, cone.sin > 0 ? 1 : square) * sectionSpread(cone, square)
 }
 
-function coverRound(cone: JetCone, path: JetPath, i: number, depth: number, out: Float64Array, at: number): void {
+function coverRound(
+  cone: JetCone,
+  path: JetPath,
+  i: number,
+  depth: number,
+  out: Float64Array,
+  at: number,
+): void {
   const round = roundMove(path, i)
   const centre = { x: round.cx, y: round.cy }
   for (const e of [0, 1] as const) {

@@ -7,7 +7,10 @@ import type { HeadShape, RimClearance } from './types.ts'
  * along a move the tilt is greatest at one of its ends (slopes go evenly, or evenly in a frame that turns), so the
  * steepest station of all tells. The whole sheet counts as plate, whatever has been cut out of it.
  */
-export function rimsOf({ path, passes }: Pick<Passes, 'path' | 'passes'>, head: HeadShape): readonly RimClearance[] {
+export function rimsOf(
+  { path, passes }: Pick<Passes, 'path' | 'passes'>,
+  head: HeadShape,
+): readonly RimClearance[] {
   let steepest = -1
   let station = -1
   let pass = -1

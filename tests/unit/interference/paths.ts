@@ -42,7 +42,8 @@ export function alongWalls(body: Body, jet: Jet): { path: JetPath; passes: [] } 
     const segment = body.loops[loop]![edge]!
     let top = 0
     for (const { depth, tilt } of body.walls[loop]![edge]!.facets) {
-      const beside = offsetAt(body, loop, edge, top) - top * Math.tan(tilt) + axisOffset(jet.kerf, tilt, jet.taper)
+      const beside =
+        offsetAt(body, loop, edge, top) - top * Math.tan(tilt) + axisOffset(jet.kerf, tilt, jet.taper)
       top = depth
       const slope = Math.tan(jetTilt(tilt, jet.taper))
       for (const [k, at] of [segment.from, segment.to].entries()) {

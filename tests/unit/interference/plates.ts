@@ -19,4 +19,3 @@ export function randomPlate(seed: number): Body {
     return random() < 0.7 ? facets([t, first]) : facets([t / 3, first], [t, first - 15 * random()])
   })
 }
-
