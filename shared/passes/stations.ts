@@ -121,10 +121,11 @@ function writeLean(
   const pieces = leanPieces(level, bendTo - bendFrom)
   const putAt = (along: number, side: number) => {
     const at = from + ((along - alongFrom) / (alongTo - alongFrom)) * (to - from)
+    const clear = clearAtTop(level, tilt, side, along)
     put(
       w,
-      axis.x + at * axis.ux,
-      axis.y + at * axis.uy,
+      axis.x + at * axis.ux + clear * axis.uy,
+      axis.y + at * axis.uy - clear * axis.ux,
       side * axis.uy + along * axis.ux,
       along * axis.uy - side * axis.ux,
       MoveKind.lean,
@@ -146,6 +147,24 @@ function writeLean(
     const meet = (sb - sa + ra * a - rb * b) / (ra - rb)
     putAt(meet, sa + ra * (meet - a))
   }
+}
+
+/**
+ * How far a jet whose side slope is beyond the wall's must move out so that it does not enter at the top face, mm
+ * along the outward normal (micrometres). Its axis is at sin φ < sin τ to the wall, so the cone's nearest line
+ * comes closer to the wall upward, by tan τ·cos φ − sin φ per mm of axis, up to `rim`, where it leaves the plate
+ * (derived).
+ */
+function clearAtTop({ jet }: Level, tilt: number, side: number, along: number): number {
+  const length = Math.sqrt(1 + side * side + along * along)
+  const sinFacing = (Math.sin(tilt) - side * Math.cos(tilt)) / length
+  const cosFacing = Math.sqrt(1 - sinFacing * sinFacing)
+  const tan = Math.tan(jet.taper)
+  // Downward part of the way from the axis to that line; then the axis' length at which the line is at depth 0.
+  const down = ((Math.sin(tilt) - sinFacing / length) / cosFacing) * length
+  const rim = ((-jet.kerf / 2) * down) / (1 - tan * down)
+  const short = (jet.kerf / 2) * (cosFacing - Math.cos(jet.taper)) - rim * (tan * cosFacing - sinFacing)
+  return Math.max(0, short) / Math.cos(tilt)
 }
 
 /**
