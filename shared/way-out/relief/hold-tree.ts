@@ -4,18 +4,20 @@ import { between, ruleOf } from '../way-out.ts'
 
 /**
  * The rule most broken among a run of rows, found without looking at all of them: a tree over the rows in
- * order, each node with the box of its normals and its smallest bound, so that whole stretches that cannot
- * break a rule by more are passed over. On plain shapes about log n nodes are looked at.
+ * order, each node with the range of headings of its normals and its smallest bound, so that whole stretches
+ * that cannot break a rule by more are passed over. On plain shapes about log n nodes are looked at.
  */
 export interface HoldTree {
   readonly holds: Holds
   readonly bounds: Float64Array
-  /** Leaves, a power of two. */
+  /** Leaves, a power of two; node 1 is the root, node k has the children 2k and 2k + 1. */
   readonly size: number
-  readonly minX: Float64Array
-  readonly maxX: Float64Array
-  readonly minY: Float64Array
-  readonly maxY: Float64Array
+  /** Middle of the node's range of headings as a unit vector, cosine and sine of half the range. */
+  readonly mx: Float64Array
+  readonly my: Float64Array
+  readonly cos: Float64Array
+  readonly sin: Float64Array
+  /** Smallest bound; Infinity in nodes without rows. */
   readonly least: Float64Array
 }
 
@@ -23,57 +25,64 @@ export function holdTree(holds: Holds, bounds: Float64Array): HoldTree {
   const { count, ax, ay, bx, by } = holds
   let size = 1
   while (size < count) size *= 2
-  const of = (value: number) => new Float64Array(2 * size).fill(value)
-  const [minX, maxX, minY, maxY, least] = [
-    of(Infinity),
-    of(-Infinity),
-    of(Infinity),
-    of(-Infinity),
-    of(Infinity),
-  ]
+  const numbers = () => new Float64Array(2 * size)
+  const [middle, half, mx, my, cos, sin] = [numbers(), numbers(), numbers(), numbers(), numbers(), numbers()]
+  const least = numbers().fill(Infinity)
   for (let i = 0; i < count; i++) {
-    // Between its ends a round row's normals stand out of their box by at most 1 − cos(half the range).
-    const out = 1 - Math.sqrt(Math.max(0, (1 + Math.min(1, ax[i]! * bx[i]! + ay[i]! * by[i]!)) / 2))
-    minX[size + i] = Math.min(ax[i]!, bx[i]!) - out
-    maxX[size + i] = Math.max(ax[i]!, bx[i]!) + out
-    minY[size + i] = Math.min(ay[i]!, by[i]!) - out
-    maxY[size + i] = Math.max(ay[i]!, by[i]!) + out
+    half[size + i] = Math.atan2(ax[i]! * by[i]! - ay[i]! * bx[i]!, ax[i]! * bx[i]! + ay[i]! * by[i]!) / 2
+    middle[size + i] = Math.atan2(ay[i]!, ax[i]!) + half[size + i]!
     least[size + i] = bounds[i]!
   }
   for (let node = size - 1; node > 0; node--) {
     const [l, r] = [2 * node, 2 * node + 1]
-    minX[node] = Math.min(minX[l]!, minX[r]!)
-    maxX[node] = Math.max(maxX[l]!, maxX[r]!)
-    minY[node] = Math.min(minY[l]!, minY[r]!)
-    maxY[node] = Math.max(maxY[l]!, maxY[r]!)
     least[node] = Math.min(least[l]!, least[r]!)
+    const apart = shortest(middle[r]! - middle[l]!)
+    const low = Math.min(-half[l]!, apart - half[r]!)
+    const high = least[r] === Infinity ? half[l]! : Math.max(half[l]!, apart + half[r]!)
+    middle[node] = middle[l]! + (least[r] === Infinity ? 0 : (low + high) / 2)
+    half[node] = least[r] === Infinity ? half[l]! : Math.min(Math.PI, (high - low) / 2)
   }
-  return { holds, bounds, size, minX, maxX, minY, maxY, least }
+  for (let node = 1; node < 2 * size; node++) {
+    mx[node] = Math.cos(middle[node]!)
+    my[node] = Math.sin(middle[node]!)
+    cos[node] = Math.cos(half[node]!)
+    sin[node] = Math.sin(half[node]!)
+  }
+  return { holds, bounds, size, mx, my, cos, sin, least }
 }
+
+/** A turn brought into [−π, π]. */
+function shortest(turn: number): number {
+  return turn - 2 * Math.PI * Math.round(turn / (2 * Math.PI))
+}
+
+/** Rounding of a node's cosines; a node is passed over only past it, so that none is by mistake. */
+const COSINE_ROUNDING = 1e-14
 
 /** Of the rows `first` up to `first + length`, counted round the loop. */
 export function mostBrokenOfRun(tree: HoldTree, first: number, length: number): MostBroken {
-  const { holds, bounds, size, minX, maxX, minY, maxY, least } = tree
+  const { holds, bounds, size, mx, my, cos, sin, least } = tree
   const { count, ax, ay, bx, by, round } = holds
   const from = first % count
   const to = Math.min(count, from + length)
   return (x, y, arcs, over) => {
     const far = Math.hypot(x, y)
-    let most = over
+    let worst = over
     let row = -1
     let end = 0
     const found = (excess: number, i: number, at: number) => {
-      if (!(excess > most)) return
-      most = excess
+      if (!(excess > worst)) return
+      worst = excess
       row = i
       end = at
     }
     const look = (node: number, low: number, high: number, a: number, b: number): void => {
       if (b <= low || high <= a) return
-      const reach =
-        Math.max(minX[node]! * x, maxX[node]! * x) + Math.max(minY[node]! * y, maxY[node]! * y) - least[node]!
-      // At 0, an empty node gives 0·∞: not a number, and passed over as well.
-      if (!(reach > most)) return
+      // Largest n·(x, y) over the node's headings: along (x, y) itself if it is one of them, else at the nearer end.
+      const along = mx[node]! * x + my[node]! * y
+      const within = along >= far * cos[node]!
+      const most = within ? far : along * cos[node]! + Math.abs(mx[node]! * y - my[node]! * x) * sin[node]!
+      if (!(most + far * COSINE_ROUNDING - least[node]! > worst)) return
       if (node < size) {
         const middle = (low + high) / 2
         look(2 * node, low, middle, a, b)
@@ -87,6 +96,6 @@ export function mostBrokenOfRun(tree: HoldTree, first: number, length: number): 
     }
     look(1, 0, size, from, to)
     if (from + length > count) look(1, 0, size, 0, from + length - count)
-    return row < 0 ? null : ruleOf(holds, bounds, row, end, x, y, most)
+    return row < 0 ? null : ruleOf(holds, bounds, row, end, x, y, worst)
   }
 }

@@ -31,18 +31,19 @@ export function leaveInTurn(
   const n = blocks.length
   const left: (Leaving | null)[] = blocks.map(() => null)
   let order = 0
-  for (let moved = true; moved;) {
-    moved = false
-    for (const [b, block] of blocks.entries()) {
-      if (left[b]) continue
-      const faces: Point[] = []
-      if (n > 1 && !left[(b + n - 1) % n]) faces.push(block.startFace)
-      if (n > 1 && !left[(b + 1) % n]) faces.push(block.endFace)
-      const direction = wayOfBlock(trees, block, faces, flattest, faceRoom)
-      if (!direction) continue
-      left[b] = { direction, order: order++ }
-      moved = true
-    }
+  // Only its neighbours gain by a block's leaving, so only they are asked again.
+  const asked = blocks.map((_, b) => b)
+  for (let k = 0; k < asked.length; k++) {
+    const b = asked[k]!
+    if (left[b]) continue
+    const [before, after] = [(b + n - 1) % n, (b + 1) % n]
+    const faces: Point[] = []
+    if (n > 1 && !left[before]) faces.push(blocks[b]!.startFace)
+    if (n > 1 && !left[after]) faces.push(blocks[b]!.endFace)
+    const direction = wayOfBlock(trees, blocks[b]!, faces, flattest, faceRoom)
+    if (!direction) continue
+    left[b] = { direction, order: order++ }
+    asked.push(before, after)
   }
   return left
 }

@@ -1,9 +1,9 @@
 import type { Frame } from '../../contours/frame.ts'
-import { commonPoint } from '../../geometry/intersect.ts'
-import type { Loop, Point } from '../../geometry/types.ts'
+import type { Point } from '../../geometry/types.ts'
 import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../../walls/wall-table.ts'
 import type { Holds } from '../holds.ts'
 import type { ReliefLine } from './types.ts'
+import { meetsWall, type Walls } from './walls-met.ts'
 
 /** Where on the loop a line stands, and which way it goes. */
 export interface Stand {
@@ -88,7 +88,7 @@ export function reliefLine(
   frame: Frame,
   { g, fraction, at, before, after, along }: Stand,
   offsets: readonly EdgeEnds[],
-  contours: readonly Loop[],
+  walls: Walls,
   kerf: number,
   reach: (from: Point) => number,
 ): ReliefLine {
@@ -107,7 +107,7 @@ export function reliefLine(
   const to = { x: from.x + length * along.x, y: from.y + length * along.y }
   const foot = { x: from.x + FOOT * length * along.x, y: from.y + FOOT * length * along.y }
   const path = { kind: 'line', from: foot, to } as const
-  const clear = length > 0 && !contours.some((loop) => loop.some((segment) => commonPoint(path, segment, 0)))
+  const clear = length > 0 && !meetsWall(walls, path)
   const web = Math.max(0, outermost - Math.min(...starts) - kerf)
   return { edge: frame.edgeOf[g]!, fraction, from, to, web, clear }
 }

@@ -17,13 +17,14 @@ import type {
   ReliefRefusalCode,
   ReliefSizes,
 } from './types.ts'
+import { wallsOf, type Walls } from './walls-met.ts'
 
 /** Lines on an arc may stand at every so many radians: 5°. The count is only called proved where this costs nothing. */
 const ARC_ROW = Math.PI / 36
 
-/** How many of the plans with the fewest lines are compared; fewer on very large outlines (in rows, altogether). */
+/** How many of the plans with the fewest lines are compared; fewer where they have many (lines, altogether). */
 const MOST_PLANS = 24
-const ROWS_COMPARED = 2e5
+const LINES_COMPARED = 1000
 
 /** Sides of the polygon that stands for a core's circle. */
 const CORE_SIDES = 64
@@ -60,11 +61,11 @@ export function reliefCuts(body: Body, loop: number, sizes: ReliefSizes): Relief
     kerf,
     hub,
     offsets: offsetsAt(frame, depths),
-    contours,
+    walls: wallsOf(contours),
     reach,
   }
   const { runs, starts } = fewestRuns(lengths)
-  const plans = Math.max(2, Math.min(MOST_PLANS, Math.floor(ROWS_COMPARED / holds.count), starts.length))
+  const plans = Math.max(2, Math.min(MOST_PLANS, Math.floor(LINES_COMPARED / runs), starts.length))
   let best: Draft | null = null
   for (let k = 0; k < plans; k++) {
     const start = starts[Math.floor((k * starts.length) / plans)]!
@@ -92,7 +93,7 @@ interface Ground {
   readonly kerf: number
   readonly hub: Point | null
   readonly offsets: readonly EdgeEnds[]
-  readonly contours: readonly Loop[]
+  readonly walls: Walls
   readonly reach: (from: Point, along: Point) => number
 }
 
@@ -114,10 +115,10 @@ function cutsFrom(lengths: Int32Array, start: number): number[] {
 }
 
 function drafted(ground: Ground, cuts: readonly number[]): Draft {
-  const { frame, holds, trees, kerf, offsets, contours, reach } = ground
+  const { frame, holds, trees, kerf, offsets, walls, reach } = ground
   const stands = cuts.map((row) => standOf(frame, holds, row, ground.hub))
   const lines = stands.map((stand) =>
-    reliefLine(frame, stand, offsets, contours, kerf, (from) => reach(from, stand.along)),
+    reliefLine(frame, stand, offsets, walls, kerf, (from) => reach(from, stand.along)),
   )
   const none = { x: 0, y: 0 }
   const blocks: Block[] = cuts.map((first, b) => {
