@@ -1,4 +1,4 @@
-import { branchPoint, type Branch } from '../contours/branch.ts'
+import { branchPoint } from '../contours/branch.ts'
 import { CornerMode } from '../contours/frame.ts'
 import { makeAxisEdge, readAxisEdge } from './axis-edges.ts'
 import { turnAt, wallCorner, wallCornerAt, type Level } from './level.ts'
@@ -18,8 +18,11 @@ export interface CornerMoves {
  */
 const LIMIT_ROUNDING = 1e-11
 
-/** A bend of less than this is not worth a word, mm: as with fillets (common practice, no source). */
-const BEND_WORTH_SAYING = 0.01
+/**
+ * How far a bent seam may stand off the straight jet before a convex corner is rather run out, and a concave one
+ * told, mm: a twenty-fifth of a machine's repeatability (0.025 mm, common practice, no source).
+ */
+const BEND_ALLOWED = 1e-3
 
 /** Past this turn of an arc's prolongation a run out along it would come back to the part, radians: our choice. */
 const WIDEST_ARC_RUN_OUT = Math.PI / 4
@@ -48,6 +51,7 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
     if (mode[g] === CornerMode.spike) refusals[g] = LeanRefusal.noSeam
     else if (level.unfit[g]) refusals[g] = LeanRefusal.noJet
     else if (steep > steepest) refusals[g] = LeanRefusal.overLimit
+    else if (turnSin[g]! > 0 && seamBend(level, g) > BEND_ALLOWED) refusals[g] = LeanRefusal.bent
     else offers[g] = 1 << CornerMove.lean
     if (turnSin[g]! > 0 && previous[g] === frame.previous[g]) {
       offers[g]! |= 1 << CornerMove.pivot
@@ -65,10 +69,10 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
       problems.push(cornerProblem(level, 'choice-refused', g))
     }
   }
-  for (const [g, branch] of frame.branches) {
-    if (move[g] !== CornerMove.lean || gone[g] || level.mode[g] !== CornerMode.branch) continue
-    const value = seamBend(level, g, branch)
-    if (value > BEND_WORTH_SAYING) problems.push({ ...cornerProblem(level, 'bent-seam', g), value })
+  for (const g of frame.branches.keys()) {
+    if (move[g] !== CornerMove.lean || gone[g]) continue
+    const value = seamBend(level, g)
+    if (value > BEND_ALLOWED) problems.push({ ...cornerProblem(level, 'bent-seam', g), value })
   }
   for (let g = 0; g < count; g++) {
     const cut = member[g] || member[previous[g]!]
@@ -123,7 +127,10 @@ function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals
 }
 
 /** How far the straight jet at a corner beside an arc stands off the bent seam of the axes, half way down, mm. */
-function seamBend({ frame, axis, figure, previous, x, y, p, q }: Level, g: number, branch: Branch): number {
+function seamBend(level: Level, g: number): number {
+  const { frame, axis, figure, previous, x, y, p, q } = level
+  const branch = level.mode[g] === CornerMode.branch && frame.branches.get(g)
+  if (!branch) return 0
   const t = frame.body.thickness / 2
   const [before, after] = [figure[previous[g]!]!, figure[g]!]
   const seam = branchPoint(

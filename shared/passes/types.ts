@@ -72,6 +72,8 @@ export const LeanRefusal = {
   noJet: 3,
   /** There is no seam: smooth, or lines that double back. */
   noSeam: 4,
+  /** Beside an arc the seam is bent, by more than a straight jet may stand off it. */
+  bent: 5,
 } as const
 export type LeanRefusal = (typeof LeanRefusal)[keyof typeof LeanRefusal]
 
