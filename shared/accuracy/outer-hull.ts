@@ -1,4 +1,4 @@
-import { fillReach, type Spots } from './spots.ts'
+import { reachOf, type Spots } from './spots.ts'
 
 /** Corners of a convex polygon, counter-clockwise, no three in line. */
 export interface Hull {
@@ -7,42 +7,68 @@ export interface Hull {
 }
 
 /**
- * Convex hull of spots, each taken as the polygon of its tangents in `sides` directions (the first along x): it holds
- * every spot and stands outside the true hull nowhere by more than ρ(1/cos(π/sides) − 1), ρ the flattest spot's radius
- * of curvature. Between two directions one corner of each polygon matters, and only if no other reaches further in
- * both: so few are left to sort. Time: spots × sides, and n log n in what is left.
+ * Convex hull of spots, each taken as the polygon of its tangents in `sides` directions (a power of two, at least 4; the
+ * first along x): it holds every spot and stands outside the true hull nowhere by more than ρ(1/cos(π/sides) − 1), ρ the
+ * flattest spot's radius of curvature. Between two directions one corner of each polygon matters, and only if no other
+ * spot reaches further in both. What is beaten over a quarter is beaten over every part of it, so quarters are halved
+ * with ever fewer spots: near-linear, and n log n in what is left to sort.
  */
 export function outerHull(spots: Spots, sides: number): Hull {
-  const { count, x, y, width, pad } = spots
   const xs: number[] = []
   const ys: number[] = []
-  let here = new Float64Array(count)
-  let there = new Float64Array(count)
-  const step = (2 * Math.PI) / sides
-  fillReach(spots, 1, 0, here)
-  for (let k = 0; k < sides; k++) {
-    const [c0, s0] = direction(k, step)
-    const [c1, s1] = direction(k + 1, step)
-    fillReach(spots, c1, s1, there)
-    let best = 0
-    for (let i = 1; i < count; i++) if (here[i]! + there[i]! > here[best]! + there[best]!) best = i
-    const det = c0 * s1 - s0 * c1
-    for (let i = 0; i < count; i++) {
-      const a = here[i]!
-      const b = there[i]!
-      if (i !== best && a <= here[best]! && b <= there[best]!) continue
-      // A point is its own polygon: no rounding then tells one corner five ways.
-      const isPoint = width[i] === 0 && pad[i] === 0
-      xs.push(isPoint ? x[i]! : (a * s1 - b * s0) / det)
-      ys.push(isPoint ? y[i]! : (b * c0 - a * c1) / det)
-    }
-    ;[here, there] = [there, here]
+  const all = Uint32Array.from({ length: spots.count }, (_, i) => i)
+  for (let k = 0; k < 4; k++) {
+    putSector(spots, sides, (k * sides) / 4, ((k + 1) * sides) / 4, all, xs, ys)
   }
   return hullOfPoints(xs, ys)
 }
 
-function direction(k: number, step: number): readonly [number, number] {
-  return [Math.cos(k * step), Math.sin(k * step)]
+/** Corners that matter between directions number `from` and `to`, among the given spots. */
+function putSector(
+  spots: Spots,
+  sides: number,
+  from: number,
+  to: number,
+  among: Uint32Array,
+  xs: number[],
+  ys: number[],
+): void {
+  const count = among.length
+  if (count === 0) return
+  const [c0, s0] = direction(from, sides)
+  const [c1, s1] = direction(to, sides)
+  const here = reachOf(spots, among, c0, s0)
+  const there = reachOf(spots, among, c1, s1)
+  let best = 0
+  for (let k = 1; k < count; k++) if (here[k]! + there[k]! > here[best]! + there[best]!) best = k
+  const left = new Uint32Array(count)
+  let kept = 0
+  const [most, mostThere] = [here[best]!, there[best]!]
+  for (let k = 0; k < count; k++) {
+    if (k !== best && here[k]! <= most && there[k]! <= mostThere) continue
+    here[kept] = here[k]!
+    there[kept] = there[k]!
+    left[kept++] = among[k]!
+  }
+  if (to - from > 1) {
+    const middle = (from + to) / 2
+    putSector(spots, sides, from, middle, left.subarray(0, kept), xs, ys)
+    putSector(spots, sides, middle, to, left.subarray(0, kept), xs, ys)
+    return
+  }
+  const det = c0 * s1 - s0 * c1
+  for (let k = 0; k < kept; k++) {
+    const i = left[k]!
+    // A point is its own polygon: no rounding then tells one corner five ways.
+    const isPoint = spots.width[i] === 0 && spots.pad[i] === 0
+    xs.push(isPoint ? spots.x[i]! : (here[k]! * s1 - there[k]! * s0) / det)
+    ys.push(isPoint ? spots.y[i]! : (there[k]! * c0 - here[k]! * c1) / det)
+  }
+}
+
+function direction(k: number, sides: number): readonly [number, number] {
+  const heading = (2 * Math.PI * k) / sides
+  return [Math.cos(heading), Math.sin(heading)]
 }
 
 /** Lower chain, then upper (Andrew's, a textbook method): points in order of x, right turns taken out. */

@@ -68,11 +68,14 @@ function grow(spots: Spots): void {
   spots.loop = loops
 }
 
-/** How far each spot reaches in the direction (ex, ey), of unit length. */
-export function fillReach(spots: Spots, ex: number, ey: number, out: Float64Array): void {
-  const { count, x, y, width, p, q, pad } = spots
-  for (let i = 0; i < count; i++) {
+/** How far each of the given spots reaches in the direction (ex, ey), of unit length. */
+export function reachOf(spots: Spots, among: Uint32Array, ex: number, ey: number): Float64Array {
+  const { x, y, width, p, q, pad } = spots
+  const out = new Float64Array(among.length)
+  for (let k = 0; k < out.length; k++) {
+    const i = among[k]!
     const lean = p[i]! * ex + q[i]! * ey
-    out[i] = x[i]! * ex + y[i]! * ey + width[i]! * Math.sqrt(1 + lean * lean) + pad[i]!
+    out[k] = x[i]! * ex + y[i]! * ey + width[i]! * Math.sqrt(1 + lean * lean) + pad[i]!
   }
+  return out
 }

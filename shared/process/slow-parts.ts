@@ -59,7 +59,7 @@ function isCornerAt(path: JetPath, j: number, first: number, last: number, least
   if (!isOnWall(before) || !isOnWall(after)) return false
   const [ax, ay] = [alongX(path, j - 1, j), alongY(path, j - 1, j)]
   const [bx, by] = [alongX(path, j, j), alongY(path, j, j)]
-  const size = Math.hypot(ax, ay) * Math.hypot(bx, by)
+  const size = Math.sqrt((ax * ax + ay * ay) * (bx * bx + by * by))
   // A move that stands still at the top has no direction; beside one nothing is known, so it counts as a corner.
   return !(ax * bx + ay * by >= leastCos * size && size > 0)
 }
