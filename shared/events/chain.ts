@@ -152,6 +152,14 @@ export function startsAtCorner({ kind, share }: Chain, e: number): boolean {
   return kind[e] !== PieceKind.chord || share[e] === 0
 }
 
+/** The point at which the edge of a piece ends. */
+export function cornerAfter({ kind, edge, next, previous, firstOf, frame }: Chain, e: number): number {
+  if (kind[e] !== PieceKind.chord) return next[e]!
+  const after = firstOf[frame.next[edge[e]!]!]!
+  // A step starts where the arc ends.
+  return kind[previous[after]!] === PieceKind.step ? previous[after]! : after
+}
+
 /** Whether the piece is told by its two ends: a line, a chord, a step. */
 export function isStraight({ kind }: Chain, e: number): boolean {
   return kind[e] !== PieceKind.arc

@@ -8,6 +8,8 @@ import { First } from './first.ts'
 import { frameOf, type Frame } from '../contours/frame.ts'
 import { levelsOf } from '../walls/levels.ts'
 import { offerMeeting } from './meet.ts'
+import { isPlain } from './plain.ts'
+import { plainEvent } from './plain-event.ts'
 import { fillMotionBoxes } from './motion-boxes.ts'
 import type { Body, EdgeRef } from '../walls/types.ts'
 import type { BodyEvent } from './types.ts'
@@ -41,6 +43,7 @@ interface Stretch {
 function march(frame: Frame): BodyEvent | null {
   const { body } = frame
   if (frame.count === 0) return null
+  if (isPlain(frame)) return plainEvent(frame)
   const order = nearbyOrder(body.loops.map((loop) => loop[0]?.from ?? { x: 0, y: 0 }))
   const chain = chainOf(frame, order)
   const near = roundingOf(boundsOf(body.loops.flat()))
@@ -63,7 +66,7 @@ function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: n
   if (rate.start.every((w) => w === 0) && rate.end.every((w) => w === 0)) return null
   const run = marchOf(chain, offset, rate, length)
   const first = new First(length)
-  offerVanishings(run, near, first)
+  offerVanishings(run, first)
   offerMeetings(run, near, first)
   return first.found
 }

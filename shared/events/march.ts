@@ -9,7 +9,7 @@ import {
 import { CornerMode, makePlaces, place, radiusAt, sweepAt } from '../contours/frame.ts'
 import type { Point } from '../geometry/types.ts'
 import type { EdgeEnds } from '../walls/wall-table.ts'
-import { PieceKind, centreOf, drawnStart, startsAtCorner, type Chain } from './chain.ts'
+import { PieceKind, centreOf, cornerAfter, drawnStart, startsAtCorner, type Chain } from './chain.ts'
 
 /** A chain over one stretch of its march; `t` runs from 0 to `length`, mm of depth (or a share, while morphing). */
 export interface March {
@@ -169,7 +169,8 @@ export function headingSpread(march: March, e: number, corner: number, from: num
   return narrowest > 0 ? Math.min(2 * Math.PI, ((Math.PI / 2) * stray) / narrowest) : 2 * Math.PI
 }
 
-function narrowestRadius(march: March, e: number, from: number, to: number): number {
+/** The least radius of an arc, of a chord's arc at either end, over a span. */
+export function narrowestRadius(march: March, e: number, from: number, to: number): number {
   const { chain, radius, radiusRate, offset, rate } = march
   const narrowest = radius[e]! + Math.min(from * radiusRate[e]!, to * radiusRate[e]!)
   if (chain.kind[e] !== PieceKind.chord) return narrowest
@@ -196,13 +197,8 @@ export function looseRadii(march: March, e: number, from: number, to: number): r
 
 /** The points that are the two corners of an arc, or of the arc that a chord belongs to. */
 function cornersOfArc(chain: Chain, e: number): readonly [first: number, after: number] {
-  if (chain.kind[e] !== PieceKind.chord) return [e, chain.next[e]!]
-  const g = chain.edge[e]!
-  const following = chain.frame.next[g]!
-  const after = chain.firstOf[following]!
-  // A step starts where the arc ends.
-  const step = chain.previous[after]!
-  return [chain.firstOf[g]!, chain.kind[step] === PieceKind.step ? step : after]
+  const first = chain.kind[e] === PieceKind.chord ? chain.firstOf[chain.edge[e]!]! : e
+  return [first, cornerAfter(chain, e)]
 }
 
 /** Signed included angle of an arc piece, or of the whole arc of a chord, at a moment. */

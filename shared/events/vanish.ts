@@ -1,16 +1,17 @@
-import { PieceKind, centreOf, isStraight, startsAtCorner } from './chain.ts'
-import { pointStray, pointX, pointY, sweepOf, type March } from './march.ts'
+import { PieceKind, centreOf, cornerAfter, startsAtCorner } from './chain.ts'
+import { narrowestRadius, pointStray, pointX, pointY, sweepOf, type March } from './march.ts'
 import { CornerMode, radiusAt } from '../contours/frame.ts'
 import type { First } from './first.ts'
 import { firstZero } from './first-zero.ts'
 
 /**
  * Vanishings: an edge's length or an arc's radius reaches zero, or neighbours become tangent and then no
- * longer meet. Offers each piece's earliest one; what depends evenly on depth is solved directly.
+ * longer meet. Offers each piece's earliest one; what depends evenly on depth is solved directly. The length of a
+ * line that turns counts along its drawn direction: where it is used up the wall faces along its edge.
  */
-export function offerVanishings(march: March, near: number, first: First): void {
+export function offerVanishings(march: March, first: First): void {
   const { chain } = march
-  const { count, kind, next, edge, ux, uy, bent, uneven, rotates, frame } = chain
+  const { count, kind, next, edge, ux, uy, bent, uneven, frame } = chain
   for (let e = 0; e < count; e++) {
     if (kind[e] === PieceKind.step || !startsAtCorner(chain, e)) continue
     const f = next[e]!
@@ -25,8 +26,6 @@ export function offerVanishings(march: March, near: number, first: First): void 
       }
     } else if (kind[e] === PieceKind.chord) {
       offerSpiralEnd(march, e, first)
-    } else if (rotates[e]) {
-      if (!uneven[e] && !uneven[f]) offerPoint(march, e, f, near, first)
     } else if (!uneven[e] && !uneven[f]) {
       const length = (march.x[f]! - march.x[e]!) * ux[e]! + (march.y[f]! - march.y[e]!) * uy[e]!
       const shrink = (march.vx[e]! - march.vx[f]!) * ux[e]! + (march.vy[e]! - march.vy[f]!) * uy[e]!
@@ -55,22 +54,12 @@ function offerSpiralEnd(march: March, e: number, first: First): void {
   }
 }
 
-/** A line that turns seldom closes to a point: both ends must come to one spot at one moment. Otherwise it folds (`offerMeeting`). */
-function offerPoint(march: March, e: number, f: number, near: number, first: First): void {
-  const { x, y, vx, vy, chain } = march
-  const [dx, dy, dvx, dvy] = [x[f]! - x[e]!, y[f]! - y[e]!, vx[f]! - vx[e]!, vy[f]! - vy[e]!]
-  const square = dvx * dvx + dvy * dvy
-  if (square === 0) return
-  const t = Math.max(0, -(dx * dvx + dy * dvy) / square)
-  if (Math.hypot(dx + t * dvx, dy + t * dvy) > near) return
-  first.offer(t, 'vanish', chain.edge[e]!, -1, x[e]! + t * vx[e]!, y[e]! + t * vy[e]!)
-}
-
 function offerBentVanishing(march: March, e: number, first: First): void {
-  const { kind, next, edge, ux, uy, uneven, rotates } = march.chain
-  const f = next[e]!
-  if (kind[e] === PieceKind.step || rotates[e] || (!uneven[e] && !uneven[f])) return
-  const isArc = !isStraight(march.chain, e)
+  const { kind, edge, ux, uy, uneven } = march.chain
+  if (kind[e] === PieceKind.step || !startsAtCorner(march.chain, e)) return
+  const f = cornerAfter(march.chain, e)
+  if (!uneven[e] && !uneven[f]) return
+  const isArc = kind[e] === PieceKind.arc || kind[e] === PieceKind.chord
   const end = Math.min(first.until, march.length)
   const way = isArc ? Math.sign(march.sweep[e]!) : 0
   const length = isArc
@@ -82,7 +71,7 @@ function offerBentVanishing(march: March, e: number, first: First): void {
     const stray = pointStray(march, e, from, to) + pointStray(march, f, from, to)
     if (!isArc) return stray
     // A point that strays by s turns by at most asin(s / r) ≤ (π/2) s / r about the centre.
-    const narrowest = march.radius[e]! + Math.min(from * march.radiusRate[e]!, to * march.radiusRate[e]!)
+    const narrowest = narrowestRadius(march, e, from, to)
     return narrowest > 0 ? ((Math.PI / 2) * stray) / narrowest : Infinity
   }
   const t = firstZero(length, slack, end)
