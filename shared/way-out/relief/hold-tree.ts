@@ -76,17 +76,22 @@ export function mostBrokenOfRun(tree: HoldTree, first: number, length: number): 
       row = i
       end = at
     }
+    // Largest excess under a node: along (x, y) itself if that is one of its headings, else at the nearer end.
+    const most = (node: number) => {
+      const along = mx[node]! * x + my[node]! * y
+      if (along >= far * cos[node]!) return far - least[node]!
+      return along * cos[node]! + Math.abs(mx[node]! * y - my[node]! * x) * sin[node]! - least[node]!
+    }
     const look = (node: number, low: number, high: number, a: number, b: number): void => {
       if (b <= low || high <= a) return
-      // Largest n·(x, y) over the node's headings: along (x, y) itself if it is one of them, else at the nearer end.
-      const along = mx[node]! * x + my[node]! * y
-      const within = along >= far * cos[node]!
-      const most = within ? far : along * cos[node]! + Math.abs(mx[node]! * y - my[node]! * x) * sin[node]!
-      if (!(most + far * COSINE_ROUNDING - least[node]! > worst)) return
+      if (!(most(node) + far * COSINE_ROUNDING > worst)) return
       if (node < size) {
         const middle = (low + high) / 2
-        look(2 * node, low, middle, a, b)
+        // The more promising half first: what it finds lets the other be passed over.
+        const leftFirst = most(2 * node) >= most(2 * node + 1)
+        if (leftFirst) look(2 * node, low, middle, a, b)
         look(2 * node + 1, middle, high, a, b)
+        if (!leftFirst) look(2 * node, low, middle, a, b)
         return
       }
       found(ax[low]! * x + ay[low]! * y - bounds[low]!, low, 0)
