@@ -43,12 +43,13 @@ export function axesFaults(
   direction: number,
 ): HeadFault[] {
   const faults: HeadFault[] = []
+  const told = axes.problems.some(({ code }) => code === 'travel-exceeded')
   for (const { first, last } of passes) {
     for (let i = first; i <= last; i++) {
       const [outer, inner] = [axes.outer[i]!, axes.inner[i]!]
       const off = angleBetween(nozzle(axes.kind, outer, inner), jetUp(path.p[i]!, path.q[i]!))
       if (!(off <= direction)) faults.push({ code: 'off-direction', at: i, value: off })
-      if (axes.problems.some(({ code }) => code === 'travel-exceeded')) continue
+      if (told) continue
       if (!inTravel(head.outer, outer)) faults.push({ code: 'out-of-travel', at: i, value: outer })
       if (!inTravel(head.inner, inner)) faults.push({ code: 'out-of-travel', at: i, value: inner })
     }

@@ -48,7 +48,10 @@ export function chooseHalfTurns(runs: TiltedRuns, { outer, inner }: HeadSpec, be
   let next = new Float64Array(CANDIDATES)
   let reference = before
   for (let r = 0; r < count; r++) {
-    const [from, low, high, steepest] = [runs.from[r]!, runs.low[r]!, runs.high[r]!, runs.steepest[r]!]
+    const from = runs.from[r]!
+    const low = runs.low[r]!
+    const high = runs.high[r]!
+    const steepest = runs.steepest[r]!
     // Half turns that keep this run within travel; where there are none, those about the middle of it.
     const least = Math.ceil((outer.from - TRAVEL_ROUNDING - low) / Math.PI)
     const most = Math.floor((outer.to + TRAVEL_ROUNDING - high) / Math.PI)

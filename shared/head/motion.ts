@@ -110,7 +110,8 @@ export function inverseTimeFeed(minutes: number): number {
 
 /** Way of the top point: straight, or round about a centre from which its distance goes evenly (the mean one is used: exact where both are alike). */
 function topLength({ x, y, sweep, cx, cy }: JetPath, i: number): number {
-  const [dx, dy] = [x[i + 1]! - x[i]!, y[i + 1]! - y[i]!]
+  const dx = x[i + 1]! - x[i]!
+  const dy = y[i + 1]! - y[i]!
   if (sweep[i] === 0) return Math.sqrt(dx * dx + dy * dy)
   const from = Math.hypot(x[i]! - cx[i]!, y[i]! - cy[i]!)
   const to = Math.hypot(x[i + 1]! - cx[i]!, y[i + 1]! - cy[i]!)
@@ -125,7 +126,8 @@ function rotaryMinutes(path: JetPath, i: number, axes: HeadAxes, head: HeadSpec,
   slopeRun(path, i, shape)
   const turn = outer[i + 1]! - dwell[i + 1]! - outer[i]!
   const sweep = Math.abs(path.sweep[i]!)
-  const [outerRate, innerRate] = [60 * head.outer.speed, 60 * head.inner.speed]
+  const outerRate = 60 * head.outer.speed
+  const innerRate = 60 * head.inner.speed
   if (head.kind === 'A-B') {
     // Going round, both tilts swing to and fro: no faster than the slope's own turning.
     const slope = Math.max(Math.hypot(path.p[i]!, path.q[i]!), Math.hypot(path.p[i + 1]!, path.q[i + 1]!))
@@ -135,7 +137,8 @@ function rotaryMinutes(path: JetPath, i: number, axes: HeadAxes, head: HeadSpec,
   }
   // A goes down to where the jet is flattest and up again.
   const flattest = Math.atan(shape.flattest)
-  const [from, to] = [Math.abs(inner[i]!), Math.abs(inner[i + 1]!)]
+  const from = Math.abs(inner[i]!)
+  const to = Math.abs(inner[i + 1]!)
   const dips = shape.part > 0 && shape.part < 1
   const tilting = (dips ? from + to - 2 * flattest : Math.abs(inner[i + 1]! - inner[i]!)) / innerRate
   if (axes.crossing[i] !== 0) {
@@ -171,17 +174,22 @@ function linearWay(path: JetPath, i: number, standoff: number, pivotLength: numb
 function wayAt({ x, y, p, q, sweep, cx, cy }: JetPath, i: number, lever: number): number {
   const j = i + 1
   const turn = sweep[i]!
-  const [a, b] = [
-    lever / Math.sqrt(1 + p[i]! ** 2 + q[i]! ** 2),
-    lever / Math.sqrt(1 + p[j]! ** 2 + q[j]! ** 2),
-  ]
-  const [x0, y0] = [x[i]! - a * p[i]! - cx[i]!, y[i]! - a * q[i]! - cy[i]!]
-  let [x1, y1] = [x[j]! - b * p[j]! - cx[i]!, y[j]! - b * q[j]! - cy[i]!]
-  if (turn === 0) return Math.hypot(x1 - x0, y1 - y0, b - a)
-  const [c, s] = [Math.cos(turn), Math.sin(turn)]
-  ;[x1, y1] = [x1 * c + y1 * s, y1 * c - x1 * s]
-  const reach = Math.max(Math.hypot(x0, y0), Math.hypot(x1, y1))
-  return Math.abs(turn) * reach + Math.hypot(x1 - x0, y1 - y0, b - a)
+  const a = lever / Math.sqrt(1 + p[i]! * p[i]! + q[i]! * q[i]!)
+  const b = lever / Math.sqrt(1 + p[j]! * p[j]! + q[j]! * q[j]!)
+  const x0 = x[i]! - a * p[i]! - cx[i]!
+  const y0 = y[i]! - a * q[i]! - cy[i]!
+  let x1 = x[j]! - b * p[j]! - cx[i]!
+  let y1 = y[j]! - b * q[j]! - cy[i]!
+  let round = 0
+  if (turn !== 0) {
+    const c = Math.cos(turn)
+    const s = Math.sin(turn)
+    const back = x1 * c + y1 * s
+    y1 = y1 * c - x1 * s
+    x1 = back
+    round = Math.abs(turn) * Math.sqrt(Math.max(x0 * x0 + y0 * y0, x1 * x1 + y1 * y1))
+  }
+  return round + Math.sqrt((x1 - x0) ** 2 + (y1 - y0) ** 2 + (b - a) ** 2)
 }
 
 /** The stretch of slowed moves being walked, told at its worst when it ends. */

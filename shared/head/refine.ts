@@ -1,6 +1,6 @@
 import { jetAt } from '../passes/jet-at.ts'
 import type { JetPath, Pass } from '../passes/types.ts'
-import { headingOf, lessTurns, nearestTilt, secondTiltOf, tiltOf, upOfSlope } from './kinematics.ts'
+import { headingOf, lessTurns, nearestTilt, secondTiltOf, tiltOf } from './kinematics.ts'
 import { wishedPace, type WishedMotion } from './motion.ts'
 import { programColumns, putStation, timesOf, type HeadProgram, type ProgramWriter } from './program.ts'
 import { isSteady, makeSlopeRun, slopeRun } from './slope-run.ts'
@@ -200,6 +200,9 @@ function anglesAt(
   return [even + lessTurns(heading - even), other ? -tilt : tilt]
 }
 
+/** Where a piece is looked at, in quarters: first where an even way is farthest off as a rule. */
+const order = [2, 1, 3, 0, 4]
+
 /** Is an even way over the piece within both tolerances everywhere? */
 function keepsTo(
   { path, axes, standoff, chord, position }: Refiner,
@@ -208,35 +211,54 @@ function keepsTo(
   piece: Piece,
 ) {
   const { from, to, outer, inner } = piece
-  const length = to - from
   const { rise, tipRise } = risesBetweenLooks(axes, standoff, bounds, piece)
   if (!(rise <= chord && tipRise <= position)) return false
-  const [start, end] = [tipAt(path, i, from, standoff), tipAt(path, i, to, standoff)]
-  for (let k = 0; k <= LOOKS; k++) {
+  tipAt(path, i, from, standoff, start)
+  tipAt(path, i, to, standoff, end)
+  const turning = axes.kind === 'C-A'
+  for (const k of order) {
     const v = k / LOOKS
-    const line = tipAt(path, i, from + v * length, standoff)
+    tipAt(path, i, from + v * (to - from), standoff, tip)
     const o = outer[0] + v * (outer[1] - outer[0])
     const n = inner[0] + v * (inner[1] - inner[0])
-    const [so, co, si, ci] = [Math.sin(o), Math.cos(o), Math.sin(n), Math.cos(n)]
-    const off =
-      axes.kind === 'C-A'
-        ? Math.hypot(so * si - line.up.x, -co * si - line.up.y, ci - line.up.z)
-        : Math.hypot(si - line.up.x, -so * ci - line.up.y, co * ci - line.up.z)
-    if (!(off + rise <= chord)) return false
-    const tipOff = Math.hypot(
-      line.x - start.x - v * (end.x - start.x),
-      line.y - start.y - v * (end.y - start.y),
-      line.z - start.z - v * (end.z - start.z),
-    )
-    if (!(tipOff + tipRise <= position)) return false
+    const sn = Math.sin(n)
+    const cn = Math.cos(n)
+    const ux = (turning ? Math.sin(o) * sn : sn) - tip.ux
+    const uy = -(turning ? Math.cos(o) * sn : Math.sin(o) * cn) - tip.uy
+    const uz = (turning ? cn : Math.cos(o) * cn) - tip.uz
+    if (!(Math.sqrt(ux * ux + uy * uy + uz * uz) + rise <= chord)) return false
+    const x = tip.x - start.x - v * (end.x - start.x)
+    const y = tip.y - start.y - v * (end.y - start.y)
+    const z = tip.z - start.z - v * (end.z - start.z)
+    if (!(Math.sqrt(x * x + y * y + z * z) + tipRise <= position)) return false
   }
   return true
 }
 
-function tipAt(path: JetPath, i: number, u: number, standoff: number) {
+/** A wanted tip and the unit vector up the nozzle. */
+interface Tip {
+  x: number
+  y: number
+  z: number
+  ux: number
+  uy: number
+  uz: number
+}
+
+const makeTip = (): Tip => ({ x: 0, y: 0, z: 0, ux: 0, uy: 0, uz: 0 })
+const start = makeTip()
+const end = makeTip()
+const tip = makeTip()
+
+function tipAt(path: JetPath, i: number, u: number, standoff: number, out: Tip) {
   const { x, y, p, q } = jetAt(path, i, u)
-  const up = upOfSlope(p, q)
-  return { up, x: x + standoff * up.x, y: y + standoff * up.y, z: standoff * up.z }
+  const size = Math.sqrt(1 + p * p + q * q)
+  out.ux = -p / size
+  out.uy = -q / size
+  out.uz = 1 / size
+  out.x = x + standoff * out.ux
+  out.y = y + standoff * out.uy
+  out.z = standoff * out.uz
 }
 
 /**

@@ -22,18 +22,25 @@ export function makeSlopeRun(): SlopeRun {
 
 /** Written in place: there may be a hundred thousand moves. */
 export function slopeRun({ p, q, sweep }: JetPath, i: number, out: SlopeRun): void {
-  const [p0, q0] = [p[i]!, q[i]!]
-  let [p1, q1] = [p[i + 1]!, q[i + 1]!]
+  const p0 = p[i]!
+  const q0 = q[i]!
+  let p1 = p[i + 1]!
+  let q1 = q[i + 1]!
   const turn = sweep[i]!
   if (turn !== 0) {
-    const [c, s] = [Math.cos(turn), Math.sin(turn)]
-    ;[p1, q1] = [p1 * c + q1 * s, q1 * c - p1 * s]
+    const c = Math.cos(turn)
+    const s = Math.sin(turn)
+    const back = p1 * c + q1 * s
+    q1 = q1 * c - p1 * s
+    p1 = back
   }
-  const [dp, dq] = [p1 - p0, q1 - q0]
+  const dp = p1 - p0
+  const dq = q1 - q0
   const square = dp * dp + dq * dq
   const foot = square === 0 ? 0 : -(p0 * dp + q0 * dq) / square
   const part = Math.min(1, Math.max(0, foot))
-  const [pm, qm] = [p0 + part * dp, q0 + part * dq]
+  const pm = p0 + part * dp
+  const qm = q0 + part * dq
   out.change = Math.sqrt(square)
   out.foot = foot
   out.offset = square === 0 ? Math.sqrt(p0 * p0 + q0 * q0) : Math.abs(p0 * dq - q0 * dp) / out.change

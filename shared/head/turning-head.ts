@@ -62,7 +62,8 @@ function findAngles(
       held[i] = held[i - 1]!
       continue
     }
-    const [pi, qi] = [p[i]!, q[i]!]
+    const pi = p[i]!
+    const qi = q[i]!
     held[i] = pi * pi + qi * qi <= flat * flat ? 1 : 0
     if (held[i]) continue
     outer[i] = headingOf(pi, qi)
