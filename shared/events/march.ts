@@ -27,6 +27,22 @@ export interface March {
   readonly radius: Float64Array
   readonly radiusRate: Float64Array
   readonly sweep: Float64Array
+  /** The last answers about uneven points, which are asked for again and again at the same moment. */
+  readonly memo: Memo
+}
+
+interface Memo {
+  readonly t: Float64Array
+  readonly x: Float64Array
+  readonly y: Float64Array
+  readonly from: Float64Array
+  readonly to: Float64Array
+  readonly stray: Float64Array
+}
+
+function emptyMemo(count: number): Memo {
+  const never = () => new Float64Array(count).fill(NaN)
+  return { t: never(), x: never(), y: never(), from: never(), to: never(), stray: never() }
 }
 
 export function marchOf(chain: Chain, offset: EdgeEnds, rate: EdgeEnds, length: number): March {
@@ -41,7 +57,8 @@ export function marchOf(chain: Chain, offset: EdgeEnds, rate: EdgeEnds, length: 
   const sweep = new Float64Array(arcs)
   const places = makePlaces(frame.count)
   place(frame, offset, places)
-  const march = { chain, length, offset, rate, x, y, vx, vy, radius, radiusRate, sweep }
+  const memo = emptyMemo(chain.hasUneven ? count : 0)
+  const march = { memo, chain, length, offset, rate, x, y, vx, vy, radius, radiusRate, sweep }
   for (let e = 0; e < count; e++) {
     const g = edge[e]!
     const p = frame.previous[g]!
@@ -99,11 +116,22 @@ function placeOnSpiral(march: March, e: number): void {
 }
 
 export function pointX(march: March, e: number, t: number): number {
-  return march.chain.uneven[e] ? unevenPoint(march, e, t).x : march.x[e]! + t * march.vx[e]!
+  if (!march.chain.uneven[e]) return march.x[e]! + t * march.vx[e]!
+  if (march.memo.t[e] !== t) placeUneven(march, e, t)
+  return march.memo.x[e]!
 }
 
 export function pointY(march: March, e: number, t: number): number {
-  return march.chain.uneven[e] ? unevenPoint(march, e, t).y : march.y[e]! + t * march.vy[e]!
+  if (!march.chain.uneven[e]) return march.y[e]! + t * march.vy[e]!
+  if (march.memo.t[e] !== t) placeUneven(march, e, t)
+  return march.memo.y[e]!
+}
+
+function placeUneven(march: March, e: number, t: number): void {
+  const { x, y } = unevenPoint(march, e, t)
+  march.memo.t[e] = t
+  march.memo.x[e] = x
+  march.memo.y[e] = y
 }
 
 function unevenPoint(march: March, e: number, t: number): Point {
@@ -126,9 +154,18 @@ function unevenPoint(march: March, e: number, t: number): Point {
 
 /** How far point e can be, between two moments, from where it is half-way between them, mm. */
 export function pointStray(march: March, e: number, from: number, to: number): number {
-  const { chain } = march
+  const { chain, memo } = march
   if (!chain.uneven[e]) return (Math.hypot(march.vx[e]!, march.vy[e]!) * (to - from)) / 2
-  const branch = chain.bent[e]
+  if (memo.from[e] !== from || memo.to[e] !== to) {
+    memo.stray[e] = unevenStray(march, e, from, to)
+    memo.from[e] = from
+    memo.to[e] = to
+  }
+  return memo.stray[e]!
+}
+
+function unevenStray(march: March, e: number, from: number, to: number): number {
+  const branch = march.chain.bent[e]
   if (branch) return branchStray(branch, ...offsetSpans(march, e, from, to))
   const [radius, rate] = spiralRadius(march, e)
   const widest = Math.max(Math.abs(radius + from * rate), Math.abs(radius + to * rate))
