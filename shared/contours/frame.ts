@@ -56,6 +56,7 @@ export interface Frame {
   readonly branches: ReadonlyMap<number, Branch>
   readonly hasArcs: boolean
   readonly hasSteps: boolean
+  readonly hasSpikes: boolean
 }
 
 export const CornerMode = {
@@ -122,10 +123,6 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
     turnSin: numbers(),
     turnCos: numbers(),
     mode: new Uint8Array(count),
-    mx: numbers(),
-    my: numbers(),
-    kx: numbers(),
-    ky: numbers(),
   }
   const loopOf = new Int32Array(count)
   const edgeOf = new Int32Array(count)
@@ -145,14 +142,18 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
   const allSegments = () => (segments ??= Array.from({ length: count }, (_, g) => segmentAt(outline, g)))
   const branches = new Map<number, Branch>()
   let hasSteps = false
+  let hasSpikes = false
   for (let g = 0; g < count; g++) {
     const p = previous[g]!
     const mode = turnCorner(outline, table, p, g, corners)
     corners.mode[g] = mode
     if (mode === CornerMode.branch) branches.set(g, branchOf(allSegments()[p]!, allSegments()[g]!))
     else if (mode === CornerMode.step) hasSteps = true
+    else if (mode === CornerMode.spike) hasSpikes = true
   }
   let turn: Float64Array | null = null
+  let known: Mitres | null = null
+  const mitres = () => (known ??= mitresOf(outline, previous, corners))
   return {
     body,
     outline,
@@ -179,17 +180,30 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
     get turn() {
       return (turn ??= corners.turnSin.map((sin, g) => Math.atan2(sin, corners.turnCos[g]!)))
     },
+    get mx() {
+      return mitres().mx
+    },
+    get my() {
+      return mitres().my
+    },
+    get kx() {
+      return mitres().kx
+    },
+    get ky() {
+      return mitres().ky
+    },
     branches,
     hasArcs,
     hasSteps,
+    hasSpikes,
   }
 }
 
 type Corners = {
-  readonly [
-    column in 'ux' | 'uy' | 'length' | 'turnSin' | 'turnCos' | 'mx' | 'my' | 'kx' | 'ky'
-  ]: Float64Array
+  readonly [column in 'ux' | 'uy' | 'length' | 'turnSin' | 'turnCos']: Float64Array
 } & { readonly mode: Uint8Array }
+
+type Mitres = { readonly [column in 'mx' | 'my' | 'kx' | 'ky']: Float64Array }
 
 /** Direction in which an edge starts, and its length. */
 function direct(outline: Outline, g: number, { ux, uy, length }: Corners): void {
@@ -211,18 +225,13 @@ function direct(outline: Outline, g: number, { ux, uy, length }: Corners): void 
   uy[g] = chord === 0 ? dy : dy / chord
 }
 
-/** The turn from edge p to edge g, how the corner between them moves, and of what mode it is. */
+/** The turn from edge p to edge g, and the mode of the corner between them. */
 function turnCorner(outline: Outline, table: WallTable, p: number, g: number, out: Corners): number {
-  const { x, y, arc, cx, cy, sweep } = outline
-  const { ux, uy, mx, my } = out
+  const { arc } = outline
+  const { ux, uy } = out
   let ax = ux[p]!
   let ay = uy[p]!
-  if (arc[p]) {
-    const way = Math.sign(sweep[p]!)
-    const far = Math.hypot(x[g]! - cx[p]!, y[g]! - cy[p]!)
-    ax = (-way * (y[g]! - cy[p]!)) / far
-    ay = (way * (x[g]! - cx[p]!)) / far
-  }
+  if (arc[p]) [ax, ay] = arcEnd(outline, p, g)
   const bx = ux[g]!
   const by = uy[g]!
   const sin = ax * by - ay * bx
@@ -231,17 +240,37 @@ function turnCorner(outline: Outline, table: WallTable, p: number, g: number, ou
   out.turnCos[g] = cos
   const lines = !arc[p] && !arc[g]
   const smooth = cos > 0 && Math.abs(sin) <= (lines ? STRAIGHT_SIN : Math.sin(tangentTurn(outline, p, g)))
-  if (!smooth && !lines) return CornerMode.branch
-  if (cos < 0 && Math.abs(sin) <= SPIKE_SIN) return CornerMode.spike
-  // m·n₁ = m·n₂ = 1: the sum of both normals over 1 + cos(turn), steady down to no turn at all.
-  mx[g] = (ay + by) / (1 + cos)
-  my[g] = -(ax + bx) / (1 + cos)
   if (!smooth) {
-    out.kx[g] = ax / sin
-    out.ky[g] = ay / sin
-    return CornerMode.mitre
+    if (!lines) return CornerMode.branch
+    return cos < 0 && Math.abs(sin) <= SPIKE_SIN ? CornerMode.spike : CornerMode.mitre
   }
   return sameOffsets(table, table.rowOfEdge[p]!, table.rowOfEdge[g]!) ? CornerMode.smooth : CornerMode.step
+}
+
+/** Direction in which arc p ends, at corner g. */
+function arcEnd({ x, y, cx, cy, sweep }: Outline, p: number, g: number): [number, number] {
+  const way = Math.sign(sweep[p]!)
+  const far = Math.hypot(x[g]! - cx[p]!, y[g]! - cy[p]!)
+  return [(-way * (y[g]! - cy[p]!)) / far, (way * (x[g]! - cx[p]!)) / far]
+}
+
+function mitresOf(outline: Outline, previous: Int32Array, corners: Corners): Mitres {
+  const { count, arc } = outline
+  const { ux, uy, turnSin, turnCos, mode } = corners
+  const numbers = () => new Float64Array(count)
+  const [mx, my, kx, ky] = [numbers(), numbers(), numbers(), numbers()]
+  for (let g = 0; g < count; g++) {
+    if (mode[g] === CornerMode.branch || mode[g] === CornerMode.spike) continue
+    const p = previous[g]!
+    const [ax, ay] = arc[p] ? arcEnd(outline, p, g) : [ux[p]!, uy[p]!]
+    // m·n₁ = m·n₂ = 1: the sum of both normals over 1 + cos(turn), steady down to no turn at all.
+    mx[g] = (ay + uy[g]!) / (1 + turnCos[g]!)
+    my[g] = -(ax + ux[g]!) / (1 + turnCos[g]!)
+    if (mode[g] !== CornerMode.mitre) continue
+    kx[g] = ax / turnSin[g]!
+    ky[g] = ay / turnSin[g]!
+  }
+  return { mx, my, kx, ky }
 }
 
 /** Turn below which neighbours, at least one of them an arc, count as tangent. */

@@ -5,7 +5,7 @@ import type { BodyEvent } from '../events/types.ts'
 import type { Cure } from '../findings/schema.ts'
 import { degrees, radians } from '../units/angle.ts'
 import { formatAngle } from '../units/format.ts'
-import { sameFacets } from './read.ts'
+import { sameFacets } from './preps.ts'
 
 /** Above this many edges the search is left out, so that every keystroke stays quick. */
 const MOST_EDGES = 300

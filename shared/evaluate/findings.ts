@@ -1,4 +1,3 @@
-import type { SoundRange } from '../events/range.ts'
 import type { Contour } from '../contours/types.ts'
 import type { EdgeRef } from '../walls/types.ts'
 import { concaveFillets, cornerOverLimit, smoothStep } from '../findings/corner.ts'
@@ -6,40 +5,31 @@ import { edgeOverLimit, facetsCutIn } from '../findings/edge.ts'
 import { narrowestWidth } from '../findings/hole-width.ts'
 import { nozzleTouches } from '../findings/nozzle.ts'
 import { eventFinding, holeSmallerThanKerf, loopOutside, profileCrosses } from '../findings/part.ts'
-import { strictestLimit, type EdgeWall, type Limits } from '../findings/place.ts'
+import type { EdgeWall } from '../findings/place.ts'
 import { findingSeverities, type Finding } from '../findings/schema.ts'
-import { edgeInDrawing } from '../geometry/orient.ts'
 import { radians } from '../units/angle.ts'
-import type { CornerFigures } from './corners.ts'
+import { limitsOf, type Columns } from './columns.ts'
+import { CornerNote, interiorAngle, slopeDegrees } from './corner-columns.ts'
 import { cureEvent } from './event-cure.ts'
 import type { ReadRequest } from './read.ts'
-import type { Evaluation, EvaluationRequest } from './schema.ts'
 
-/** What the evaluation has found out before its findings. */
-export interface Known {
-  readonly request: EvaluationRequest
-  readonly read: ReadRequest
-  /** Null where the profile itself is not sound. */
-  readonly range: SoundRange | null
-  readonly contours: readonly Contour[]
-  readonly cornerFigures: CornerFigures
-  readonly neededTilt: Evaluation['neededTilt']
-}
-
-/** All findings, the gravest first; those of one severity by kind, then in the caller's order of places. */
-export function findingsOf(known: Known): Finding[] {
+/**
+ * All findings, the gravest first; those of one severity by kind, then in the caller's order of places. What the
+ * columns have marked is put into words here.
+ */
+export function findingsOf(columns: Columns, contours: () => readonly Contour[]): Finding[] {
   const all = [
-    ...profileFindings(known),
-    ...eventFindings(known),
-    ...edgeFindings(known),
-    ...cornerFindings(known),
-    ...nozzleFindings(known),
-    ...holeFindings(known),
+    ...profileFindings(columns),
+    ...eventFindings(columns),
+    ...edgeFindings(columns),
+    ...cornerFindings(columns),
+    ...nozzleFindings(columns),
+    ...holeFindings(columns, contours),
   ]
   return findingSeverities.flatMap((severity) => all.filter((finding) => finding.severity === severity))
 }
 
-function profileFindings({ read }: Known): Finding[] {
+function profileFindings({ read }: Columns): Finding[] {
   return read.problems.flatMap(({ code, loop, edge, other }) =>
     code === 'hole-outside' || code === 'hole-in-hole'
       ? [loopOutside(loop)]
@@ -47,92 +37,83 @@ function profileFindings({ read }: Known): Finding[] {
   )
 }
 
-function eventFindings({ read, range }: Known): Finding[] {
+function eventFindings({ read, range }: Columns): Finding[] {
   const event = range?.event
   if (!event) return []
-  const nameOf = (ref: EdgeRef): EdgeRef => callersEdge(read, ref)
+  const nameOf = (ref: EdgeRef): EdgeRef => read.numbering.edgeRef(ref)
   const cure = cureEvent(read.body, event, nameOf) ?? undefined
   const named = { ...event, ...nameOf(event), other: event.other && nameOf(event.other) }
   return [eventFinding(named, read.body.thickness, cure)]
 }
 
-/** An edge of the body in the caller's numbering. */
-export function callersEdge({ body, reversed }: ReadRequest, { loop, edge }: EdgeRef): EdgeRef {
-  return { loop, edge: edgeInDrawing(edge, body.loops[loop]?.length ?? 0, reversed[loop] ?? false) }
-}
-
-function limitsOf({ head }: EvaluationRequest): Limits | null {
-  return head ? { mechanical: head.mechanicalLimit, working: head.workingLimit ?? null } : null
-}
-
-function edgeFindings({ request, read }: Known): Finding[] {
+function edgeFindings({ read, edges }: Columns): Finding[] {
+  const { request, preps, numbering } = read
   const limits = limitsOf(request)
   const taper = request.jet?.taper ?? 0
   const findings: Finding[] = []
-  // Edges share their lists of facets: a list that is within the limits is looked at once.
-  const quiet = new Set<unknown>()
-  for (const [loop, ofLoop] of read.facets.entries()) {
-    for (const [edge, facets] of ofLoop.entries()) {
-      if (quiet.has(facets)) continue
-      const wall: EdgeWall = { loop, edge, facets }
-      const cutIn = facetsCutIn(wall)
-      const over = limits && edgeOverLimit(wall, taper, limits)
-      if (cutIn) findings.push(cutIn)
-      if (over) findings.push(over)
-      if (!cutIn && !over) quiet.add(facets)
-    }
-  }
+  preps.ofEdge.forEach((prep, e) => {
+    if (!edges.preps[prep]!.found) return
+    const wall: EdgeWall = { ...numbering.edgeAt(e), facets: preps.list[prep]!.facets }
+    const cutIn = facetsCutIn(wall)
+    const over = limits && edgeOverLimit(wall, taper, limits)
+    if (cutIn) findings.push(cutIn)
+    if (over) findings.push(over)
+  })
   return findings
 }
 
-function cornerFindings({ request, read, cornerFigures }: Known): Finding[] {
+function cornerFindings({ read, corners }: Columns): Finding[] {
+  const { request, frame, numbering } = read
   const limits = limitsOf(request)
-  const kerf = request.jet?.kerf
+  const { kerf, taper = 0 } = request.jet ?? {}
   const fillet = kerf === undefined ? null : concaveFillets(kerf)
-  const taper = request.jet?.taper ?? 0
-  const lowest = limits && strictestLimit(limits)
   const findings: Finding[] = []
-  for (const [i, corner] of cornerFigures.corners.entries()) {
-    const { kind, jetTilt } = corner
-    const interiorAngle = cornerFigures.interiorAngles[i] ?? 0
-    if (kind === 'smooth') {
-      if (corner.seamTilt === null) findings.push(smoothStep(corner, ...wallsAt(read, corner)))
-      continue
-    }
-    if (limits && lowest !== null && jetTilt !== null && jetTilt > lowest) {
-      const [before, after] = wallsAt(read, corner)
-      const over = cornerOverLimit(corner, jetTilt, { before, after, interiorAngle, taper }, limits)
+  for (let c = 0; c < frame.count; c++) {
+    const g = numbering.corner ? numbering.corner[c]! : c
+    const note = corners.notes[g]!
+    if (note === 0) continue
+    const corner = numbering.cornerAt(c)
+    const angle = interiorAngle(frame, g)
+    if (note & CornerNote.step) findings.push(smoothStep(corner, ...wallsAt(read, c)))
+    if (limits && note & CornerNote.over) {
+      const [before, after] = wallsAt(read, c)
+      const walls = { before, after, interiorAngle: angle, taper }
+      const over = cornerOverLimit(corner, slopeDegrees(corners.jet[g]!) ?? 0, walls, limits)
       if (over) findings.push(over)
     }
-    const rounded = kind === 'concave' && fillet ? fillet(corner, interiorAngle) : null
+    const rounded = note & CornerNote.fillet && fillet ? fillet(corner, angle) : null
     if (rounded) findings.push(rounded)
   }
   return findings
 }
 
-/** The walls that end and start at a corner, in the caller's numbering. */
-function wallsAt(
-  { facets }: ReadRequest,
-  { loop, vertex }: { loop: number; vertex: number },
-): [EdgeWall, EdgeWall] {
-  const ofLoop = facets[loop] ?? []
-  const wall = (edge: number): EdgeWall => ({ loop, edge, facets: ofLoop[edge] ?? [] })
-  return [wall((vertex + ofLoop.length - 1) % ofLoop.length), wall(vertex)]
+/** The walls that end and start at a corner; all in the caller's numbering. */
+function wallsAt({ preps, frame, numbering }: ReadRequest, corner: number): [EdgeWall, EdgeWall] {
+  const { loop, vertex } = numbering.cornerAt(corner)
+  const first = frame.loopStart[loop]!
+  const n = frame.loopStart[loop + 1]! - first
+  const wall = (edge: number): EdgeWall => ({
+    loop,
+    edge,
+    facets: preps.list[preps.ofEdge[first + edge]!]!.facets,
+  })
+  return [wall((vertex + n - 1) % n), wall(vertex)]
 }
 
-function nozzleFindings({ request, neededTilt }: Known): Finding[] {
-  const { standoff, nozzleDiameter } = request.jet ?? {}
+function nozzleFindings({ read, neededTilt }: Columns): Finding[] {
+  const { standoff, nozzleDiameter } = read.request.jet ?? {}
   if (standoff === undefined || nozzleDiameter === undefined || !neededTilt) return []
   const found = nozzleTouches(neededTilt.at, neededTilt.tilt, { diameter: nozzleDiameter, standoff })
   return found ? [found] : []
 }
 
-function holeFindings({ request, contours }: Known): Finding[] {
-  const { kerf, taper = 0 } = request.jet ?? {}
-  if (kerf === undefined) return []
+function holeFindings({ read }: Columns, contours: () => readonly Contour[]): Finding[] {
+  const { loops, jet } = read.request
+  const { kerf, taper = 0 } = jet ?? {}
+  if (kerf === undefined || loops.length < 2) return []
   const findings: Finding[] = []
-  for (let loop = 1; loop < request.loops.length; loop++) {
-    for (const contour of contours) {
+  for (let loop = 1; loop < loops.length; loop++) {
+    for (const contour of contours()) {
       const kerfThere = kerf - 2 * contour.depth * Math.tan(radians(taper))
       const width = narrowestWidth(contour.loops[loop] ?? [])
       if (width >= kerfThere) continue

@@ -1,185 +1,125 @@
+import { frameFrom, type Frame } from '../contours/frame.ts'
+import { edgeProblems, shapeProblems, type ProfileProblem } from '../geometry/problems.ts'
+import { loopsOf, readOutline, type Outline, type ReadOutline } from '../geometry/outline.ts'
+import type { Loop } from '../geometry/types.ts'
+import { surveyOf } from '../events/survey.ts'
+import type { BodyEvent } from '../events/types.ts'
 import { edgeName } from '../walls/names.ts'
-import type { Body, Wall } from '../walls/types.ts'
-import { reversedWall, squareWall } from '../walls/wall.ts'
-import type { FacetDegrees } from '../findings/place.ts'
-import { loopFromVertices } from '../geometry/bulge.ts'
-import { edgeInDrawing, orientLoops } from '../geometry/orient.ts'
-import { profileProblems, type ProfileProblem } from '../geometry/problems.ts'
-import { radians } from '../units/angle.ts'
-import { formatNumber } from '../units/format.ts'
+import type { Body, EdgeRef, Wall } from '../walls/types.ts'
+import { blends, reversedWall } from '../walls/wall.ts'
+import { tableOf, type WallTable } from '../walls/wall-table.ts'
 import { EvaluationError, type EvaluationErrorCode } from './error.ts'
+import { numberingOf, type Numbering } from './numbering.ts'
+import { readPreps, type Preps } from './preps.ts'
 import type { EvaluationRequest } from './schema.ts'
-import type { WallSpec } from '../walls/schema.ts'
 
 /**
- * A request made sound. The body runs each loop with the material on its left; where the caller's loop ran the
- * other way, its edge k is the caller's edge n − 1 − k and its corner k the caller's corner (n − k) mod n
- * (`reversed` tells). Everything beside the body is in the caller's numbering.
+ * A request made sound, in columns. The body runs each loop with the material on its left; where the caller's loop ran
+ * the other way the numbering tells which edge and corner is which.
  */
 export interface ReadRequest {
+  readonly request: EvaluationRequest
+  /** Its loops and walls become objects only when someone asks for them. */
   readonly body: Body
-  readonly reversed: readonly boolean[]
-  /** facets[loop][edge] in degrees, the caller's numbering; edges with equal walls share one list. */
-  readonly facets: readonly (readonly (readonly FacetDegrees[])[])[]
+  readonly frame: Frame
+  readonly numbering: Numbering
+  /** The caller's preps, the caller's numbering. */
+  readonly preps: Preps
+  /** Of the drawing, holes taken off, mm². */
+  readonly area: number
   /** What is wrong with the profile but can still be shown: crossings and stray loops, the caller's numbering. */
   readonly problems: readonly ProfileProblem[]
+  /** The first event; null too where the profile has problems. */
+  readonly event: BodyEvent | null
 }
-
-/** How far the last facet may end from the plate's bottom and still mean it, mm: rounding of inches to text. */
-const THICKNESS_ROUNDING = 1e-6
 
 /** Throws `EvaluationError`. */
 export function readRequest(request: EvaluationRequest): ReadRequest {
   const { thickness } = request.plate
-  const { loops, reversed } = orientLoops(request.loops.map(loopFromVertices))
-  const facets = facetsByEdge(
-    request.loops.map(({ length }) => length),
-    request.walls,
-    thickness,
-  )
-  const problems = profileProblems(loops).map((problem) => renumbered(problem, loops, reversed))
-  for (const problem of problems) refuse(problem)
+  const read = readOutline(request.loops)
+  const { outline } = read
+  const numbering = numberingOf(outline, read.reversed)
+  const preps = readPreps(request.walls, outline.loopStart, thickness)
+  const datum = request.datum ?? 'top'
+  const table = bodyTable(preps, outline, numbering, { thickness, datum })
+  const body = lazyBody(outline, table, { thickness, datum })
+  refuse(edgeProblems(outline), numbering)
+  const frame = frameFrom(body, outline, table)
+  const { problems, event } = surveyed(read, frame, numbering)
+  const area = read.areas.reduce((sum, own) => sum + own, 0)
+  return { request, body, frame, numbering, preps, area, problems, event }
+}
+
+function surveyed(
+  { outline, areas }: ReadOutline,
+  frame: Frame,
+  numbering: Numbering,
+): Pick<ReadRequest, 'problems' | 'event'> {
+  const { meetings, event } = surveyOf(frame)
+  const found = shapeProblems(outline, areas, frame.near, meetings)
+  refuse(found, numbering)
+  const problems = found.map((problem) => renumbered(problem, numbering))
+  return { problems, event: problems.length === 0 ? event : null }
+}
+
+/** Rows of the body's table are the preps; walls that blend need another row in loops that are turned round. */
+function bodyTable(
+  { list, ofEdge }: Preps,
+  outline: Outline,
+  numbering: Numbering,
+  plate: Pick<Body, 'thickness' | 'datum'>,
+): WallTable {
+  const walls: Wall[] = list.map(({ wall }) => wall)
+  const { edge: callersEdge, reversed } = numbering
+  if (!callersEdge) return tableOf(walls, ofEdge, plate)
+  const rowOfEdge = Int32Array.from(callersEdge, (caller) => ofEdge[caller]!)
+  const turned = new Map<number, number>()
+  for (let l = 0; l < reversed.length; l++) {
+    if (!reversed[l]) continue
+    for (let g = outline.loopStart[l]!; g < outline.loopStart[l + 1]!; g++) {
+      const prep = rowOfEdge[g]!
+      if (!blends(list[prep]!.wall)) continue
+      const row = turned.get(prep) ?? walls.push(reversedWall(list[prep]!.wall)) - 1
+      turned.set(prep, row)
+      rowOfEdge[g] = row
+    }
+  }
+  return tableOf(walls, rowOfEdge, plate)
+}
+
+function lazyBody(
+  outline: Outline,
+  { walls: rows, rowOfEdge }: WallTable,
+  plate: Pick<Body, 'thickness' | 'datum'>,
+): Body {
+  let loops: readonly Loop[] | null = null
+  let walls: readonly (readonly Wall[])[] | null = null
+  const { loopStart } = outline
   return {
-    body: {
-      thickness,
-      datum: request.datum ?? 'top',
-      loops,
-      walls: radianWalls(facets, thickness).map((walls, l) => (reversed[l] ? turnedRound(walls) : walls)),
+    ...plate,
+    get loops() {
+      return (loops ??= loopsOf(outline))
     },
-    reversed,
-    facets,
-    problems,
+    get walls() {
+      return (walls ??= Array.from({ length: loopStart.length - 1 }, (_, l) =>
+        Array.from(rowOfEdge.subarray(loopStart[l]!, loopStart[l + 1]!), (row) => rows[row]!),
+      ))
+    },
   }
 }
 
-function facetsByEdge(
-  edgeCounts: readonly number[],
-  walls: readonly WallSpec[],
-  thickness: number,
-): (readonly FacetDegrees[])[][] {
-  const square: readonly FacetDegrees[] = [{ depth: thickness, tilt: 0 }]
-  const facets = edgeCounts.map((count) => new Array<readonly FacetDegrees[]>(count).fill(square))
-  const named = edgeCounts.map((count) => new Uint8Array(count))
-  const share = sharer(square)
-  for (const wall of walls) {
-    const { loop, edge } = wall
-    const ofLoop = facets[loop]
-    const seen = named[loop]
-    if (!seen || ofLoop?.[edge] === undefined) {
-      throw new EvaluationError(
-        'wall-names-no-edge',
-        `A wall is given for edge ${edge} of loop ${loop}, which the profile does not have. Count loops and edges from 0.`,
-        wall,
-      )
-    }
-    if (seen[edge]) {
-      throw new EvaluationError(
-        'wall-named-twice',
-        `Edge ${edgeName(wall)} (loop ${loop}, edge ${edge}) is given two walls. Keep one.`,
-        wall,
-      )
-    }
-    seen[edge] = 1
-    ofLoop[edge] = share(soundFacets(wall, thickness))
-  }
-  return facets
-}
-
-function soundFacets(wall: WallSpec, thickness: number): readonly FacetDegrees[] {
-  const { facets } = wall
-  let above = 0
-  for (const { depth } of facets) {
-    if (!(depth > above)) {
-      throw new EvaluationError(
-        'facets-out-of-order',
-        `The facets of edge ${edgeName(wall)} must end deeper one after the other; ${formatNumber(depth)} mm follows ${formatNumber(above)} mm.`,
-        wall,
-      )
-    }
-    above = depth
-  }
-  if (Math.abs(above - thickness) > THICKNESS_ROUNDING) {
-    throw new EvaluationError(
-      'facets-miss-thickness',
-      `The last facet of edge ${edgeName(wall)} ends at ${formatNumber(above, { decimals: 6 })} mm; ` +
-        `it must end at the plate's thickness, ${formatNumber(thickness, { decimals: 6 })} mm.`,
-      wall,
-    )
-  }
-  if (above === thickness) return facets
-  return facets.map((facet, i) => (i === facets.length - 1 ? { ...facet, depth: thickness } : facet))
-}
-
-/** Lists remembered for sharing; a part seldom has more preps, and missing one costs room, not truth. */
-const MOST_SHARED = 8
-
-/** Gives equal lists back as one, so that what follows from a prep is worked out once for thousands of edges. */
-function sharer(first: readonly FacetDegrees[]): (list: readonly FacetDegrees[]) => readonly FacetDegrees[] {
-  const recent = [first]
-  return (list) => {
-    for (const other of recent) if (sameFacets(list, other)) return other
-    if (recent.length === MOST_SHARED) recent.shift()
-    recent.push(list)
-    return list
-  }
-}
-
-export function sameFacets(a: readonly FacetDegrees[], b: readonly FacetDegrees[]): boolean {
-  if (a.length !== b.length) return false
-  for (let i = 0; i < a.length; i++) {
-    if (a[i]?.depth !== b[i]?.depth || a[i]?.tilt !== b[i]?.tilt) return false
-    if ((a[i]?.endTilt ?? a[i]?.tilt) !== (b[i]?.endTilt ?? b[i]?.tilt)) return false
-  }
-  return true
-}
-
-/** One wall in radians for every list of facets, shared as they are. */
-function radianWalls(facets: readonly (readonly (readonly FacetDegrees[])[])[], thickness: number): Wall[][] {
-  const square = squareWall(thickness)
-  const made = new Map<readonly FacetDegrees[], Wall>()
-  const wallOf = (list: readonly FacetDegrees[]): Wall => {
-    const known = made.get(list)
-    if (known) return known
-    const vertical = list.every(({ tilt, endTilt }) => tilt === 0 && (endTilt ?? 0) === 0)
-    const wall = vertical
-      ? square
-      : {
-          facets: list.map(({ depth, tilt, endTilt }) =>
-            endTilt === undefined
-              ? { depth, tilt: radians(tilt) }
-              : { depth, tilt: radians(tilt), endTilt: radians(endTilt) },
-          ),
-        }
-    made.set(list, wall)
-    return wall
-  }
-  return facets.map((ofLoop) => ofLoop.map(wallOf))
-}
-
-/** The walls of a loop travelled the other way; edges that share a wall still do. */
-function turnedRound(walls: readonly Wall[]): Wall[] {
-  const turned = new Map<Wall, Wall>()
-  for (const wall of walls) if (!turned.has(wall)) turned.set(wall, reversedWall(wall))
-  return walls.map((wall) => turned.get(wall) ?? wall).reverse()
-}
-
-function renumbered(
-  problem: ProfileProblem,
-  loops: readonly (readonly unknown[])[],
-  reversed: readonly boolean[],
-): ProfileProblem {
-  const edgeOf = (loop: number, edge: number | null) =>
-    edge === null ? null : edgeInDrawing(edge, loops[loop]?.length ?? 0, reversed[loop] ?? false)
-  const { other } = problem
-  return {
-    ...problem,
-    edge: edgeOf(problem.loop, problem.edge),
-    other: other && { loop: other.loop, edge: edgeOf(other.loop, other.edge) },
-  }
+function renumbered(problem: ProfileProblem, numbering: Numbering): ProfileProblem {
+  const named = (ref: { loop: number; edge: number | null }) =>
+    ref.edge === null ? ref : numbering.edgeRef(ref as EdgeRef)
+  return { ...problem, ...named(problem), other: problem.other && named(problem.other) }
 }
 
 /** Profiles that have no meaning at all are errors; those that merely cross are findings. */
-function refuse(problem: ProfileProblem): void {
+function refuse(problems: readonly ProfileProblem[], numbering: Numbering): void {
+  for (const problem of problems) refuseOne(renumbered(problem, numbering))
+}
+
+function refuseOne(problem: ProfileProblem): void {
   const { loop, edge } = problem
   const place = { loop, edge: edge ?? undefined }
   const name = edge === null ? `loop ${loop}` : `edge ${edgeName({ loop, edge })}`

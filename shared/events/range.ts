@@ -19,14 +19,19 @@ const ranges = new WeakMap<Body, SoundRange>()
 export function soundRange(body: Body): SoundRange {
   let range = ranges.get(body)
   if (!range) {
-    range = rangeOf(body)
-    ranges.set(body, range)
+    range = rangeOfEvent(body, firstEvent(body))
   }
   return range
 }
 
-function rangeOf(body: Body): SoundRange {
-  const event = firstEvent(body)
+/** The same for a body whose first event is known already; remembered for whoever asks later. */
+export function rangeOfEvent(body: Body, event: BodyEvent | null): SoundRange {
+  const range = rangeUpTo(body, event)
+  ranges.set(body, range)
+  return range
+}
+
+function rangeUpTo(body: Body, event: BodyEvent | null): SoundRange {
   const { thickness } = body
   if (!event) return { from: 0, to: thickness, empty: false, event }
   if (body.datum === 'bottom') return { from: event.depth, to: thickness, empty: false, event }

@@ -1,5 +1,6 @@
 import { largestCornerTilt, seamTiltOf } from '../seams/corners.ts'
 import { edgeName } from '../walls/names.ts'
+import { seamJetTilt } from '../passes/jet-lines.ts'
 import { tiltsAllowedBeside } from '../seams/limits.ts'
 import { degrees, radians } from '../units/angle.ts'
 import { formatAngle } from '../units/format.ts'
@@ -54,17 +55,18 @@ export function cureCorner(corner: CornerWalls, limit: number, headLimit: number
 }
 
 /** Largest seam of the jet over all depths, degrees. */
-export function jetSeam({ before, after, interiorAngle, taper }: CornerWalls): number {
+export function jetSeam(corner: CornerWalls): number {
+  const { before, after } = corner
   return Math.max(
-    ...facetPairs(before, after).map(([i, j]) =>
-      pairSeam(tiltOf(before, i) - taper, tiltOf(after, j) - taper, interiorAngle),
-    ),
+    ...facetPairs(before, after).map(([i, j]) => pairSeam(corner, tiltOf(before, i), tiltOf(after, j))),
   )
 }
 
-/** Unlike walls without a turn have no seam: as far past any limit as can be. */
-function pairSeam(jet1: number, jet2: number, interiorAngle: number): number {
-  const seam = seamTiltOf(radians(jet1), radians(jet2), Math.PI - interiorAngle)
+/** Of the jet for two tilts. Where there is none (unlike walls without a turn), as far past any limit as can be. */
+function pairSeam({ interiorAngle, taper }: CornerWalls, before: number, after: number): number {
+  const turn = Math.PI - interiorAngle
+  const [one, two] = [radians(before), radians(after)]
+  const seam = taper === 0 ? seamTiltOf(one, two, turn) : seamJetTilt(one, two, turn, radians(taper))
   return seam === null ? 90 : degrees(seam)
 }
 
@@ -87,59 +89,99 @@ function facetPairs(before: EdgeWall, after: EdgeWall): [number, number][] {
 
 /** What to try, best first: equal walls together, else the wall that leans more, else the other, else both. */
 function trials(corner: CornerWalls, limit: number): Trial[] {
-  const { before, after, interiorAngle, taper } = corner
+  const { before, after, taper } = corner
   const [i, j] = worstPair(corner)
-  const [jet1, jet2] = [tiltOf(before, i) - taper, tiltOf(after, j) - taper]
+  const [tilt1, tilt2] = [tiltOf(before, i), tiltOf(after, j)]
   const list: (Trial | null)[] = []
-  const together = i === j ? bothTrial(corner, i, jet1, jet2, limit) : null
-  const alone = (change: 'before' | 'after', facet: number, jet: number, other: number): Trial | null => {
-    const allowed = tiltsAllowedBeside(radians(limit), radians(other), interiorAngle)
-    return allowed && toward(change, facet, jet, degrees(allowed.lowest), degrees(allowed.highest), taper)
-  }
-  const first = alone('before', i, jet1, jet2)
-  const second = alone('after', j, jet2, jet1)
-  if (Math.abs(jet1 - jet2) <= LIMIT_ROUNDING) list.push(together)
-  list.push(...(Math.abs(jet1) >= Math.abs(jet2) ? [first, second] : [second, first]), together)
+  const together = i === j ? bothTrial(corner, i, tilt1, tilt2, limit) : null
+  const first = aloneTrial(corner, 'before', i, tilt1, tilt2, limit)
+  const second = aloneTrial(corner, 'after', j, tilt2, tilt1, limit)
+  if (Math.abs(tilt1 - tilt2) <= LIMIT_ROUNDING) list.push(together)
+  const firstLeansMore = Math.abs(tilt1 - taper) >= Math.abs(tilt2 - taper)
+  list.push(...(firstLeansMore ? [first, second] : [second, first]), together)
   return list.filter((trial) => trial !== null)
 }
 
 function worstPair(corner: CornerWalls): [number, number] {
-  const { before, after, interiorAngle, taper } = corner
+  const { before, after } = corner
   let worst: [number, number] = [0, 0]
   let most = -1
   for (const pair of facetPairs(before, after)) {
-    const seam = pairSeam(tiltOf(before, pair[0]) - taper, tiltOf(after, pair[1]) - taper, interiorAngle)
+    const seam = pairSeam(corner, tiltOf(before, pair[0]), tiltOf(after, pair[1]))
     if (seam > most) [most, worst] = [seam, pair]
   }
   return worst
 }
 
+/** One wall changes, the other keeps its tilt: closed form without taper, else searched from the tilt that needs least. */
+function aloneTrial(
+  corner: CornerWalls,
+  change: 'before' | 'after',
+  facet: number,
+  tilt: number,
+  other: number,
+  limit: number,
+): Trial | null {
+  const { interiorAngle, taper } = corner
+  if (taper === 0) {
+    const allowed = tiltsAllowedBeside(radians(limit), radians(other), interiorAngle)
+    return allowed && toward(change, facet, tilt, degrees(allowed.lowest), degrees(allowed.highest), 0)
+  }
+  const least = degrees(Math.atan(-Math.tan(radians(other - taper)) * Math.cos(interiorAngle))) + taper
+  const seam = (own: number) =>
+    change === 'before' ? pairSeam(corner, own, other) : pairSeam(corner, other, own)
+  const most = lastWithin(seam, least, tilt, limit)
+  return most === null ? null : toward(change, facet, tilt, most, most, taper)
+}
+
+/** Both walls take one tilt; without a taper nothing leans at 0, with one at the taper itself. */
 function bothTrial(
   corner: CornerWalls,
   facet: number,
-  jet1: number,
-  jet2: number,
+  tilt1: number,
+  tilt2: number,
   limit: number,
 ): Trial | null {
-  if (jet1 * jet2 <= 0) return null
-  const most = degrees(largestCornerTilt(radians(limit), corner.interiorAngle))
-  const smaller = Math.abs(jet1) < Math.abs(jet2) ? jet1 : jet2
-  return Math.abs(smaller) < most ? null : toward('both', facet, smaller, -most, most, corner.taper)
+  const { interiorAngle, taper } = corner
+  const [lean1, lean2] = [tilt1 - taper, tilt2 - taper]
+  if (lean1 * lean2 <= 0) return null
+  const smaller = Math.abs(lean1) < Math.abs(lean2) ? tilt1 : tilt2
+  if (taper === 0) {
+    const most = degrees(largestCornerTilt(radians(limit), interiorAngle))
+    return Math.abs(smaller) < most ? null : toward('both', facet, smaller, -most, most, 0)
+  }
+  const most = lastWithin((own) => pairSeam(corner, own, own), taper, smaller, limit)
+  return most === null ? null : toward('both', facet, smaller, most, most, taper)
 }
 
-/** The end of the allowed jet tilts that lies toward the present one; null if that would turn the wall the other way. */
+/** Where halving ends, degrees. */
+const FINEST_TILT = 1e-12
+
+/** The last tilt within a limit on the way from one that keeps it to one that passes it; null where that is not so. */
+function lastWithin(seam: (tilt: number) => number, from: number, to: number, limit: number): number | null {
+  if (!(seam(from) <= limit) || seam(to) <= limit) return null
+  let [within, beyond] = [from, to]
+  while (Math.abs(beyond - within) > FINEST_TILT) {
+    const middle = (within + beyond) / 2
+    if (middle === within || middle === beyond) break
+    if (seam(middle) <= limit) within = middle
+    else beyond = middle
+  }
+  return within
+}
+
+/** The end of the allowed tilts that lies toward the present one; null if that would turn the jet the other way. */
 function toward(
   change: Trial['change'],
   facet: number,
-  jet: number,
+  tilt: number,
   lowest: number,
   highest: number,
   taper: number,
 ): Trial | null {
-  const most = jet > highest ? highest : jet < lowest ? lowest : null
-  if (most === null || most * jet < 0) return null
-  const tilt = roundTilt(most + taper, jet > highest ? 'down' : 'up')
-  return { change, facet, most: most + taper, tilt }
+  const most = tilt > highest ? highest : tilt < lowest ? lowest : null
+  if (most === null || (most - taper) * (tilt - taper) < 0) return null
+  return { change, facet, most, tilt: roundTilt(most, tilt > highest ? 'down' : 'up') }
 }
 
 function cures(corner: CornerWalls, trial: Trial, limit: number): boolean {

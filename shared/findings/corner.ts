@@ -64,7 +64,7 @@ function stepCure(before: EdgeWall, after: EdgeWall) {
  * How far a fillet must leave the sharp corner to be worth a word, mm. Common practice, no source: finer than a
  * drawing's general tolerance, and it keeps the flat corners of a polygon that stands for a curve quiet.
  */
-const FILLET_WORTH_SAYING = 0.01
+export const FILLET_WORTH_SAYING = 0.01
 
 /**
  * A maker for one kerf (mm, at the top): a part may have thousands of such corners. It answers null where the

@@ -9,11 +9,12 @@ export interface MovingChain {
   readonly count: number
   /** Piece e runs from point e to point next[e]; pieces that follow one another are mostly numbered so. */
   readonly next: Int32Array
-  /** Points at the start of the span, and how far they go in all of it. */
+  /** Points at the start of the span and their velocities. */
   readonly x: Float64Array
   readonly y: Float64Array
-  readonly goX: Float64Array
-  readonly goY: Float64Array
+  readonly vx: Float64Array
+  readonly vy: Float64Array
+  readonly span: number
   /** Directions in which a piece advances throughout; 0 where it cannot be said. */
   readonly advance: Uint16Array
   /** Pieces that are not straight, or whose points do not go evenly, tell their own box. */
@@ -70,7 +71,7 @@ export function refresh(tree: ChainTree, pieces: readonly number[]): void {
 }
 
 function fillLeaf({ chain, nodes, advance }: ChainTree, i: number): void {
-  const { count, next, x, y, goX, goY, ownBox, near } = chain
+  const { count, next, x, y, vx, vy, span, ownBox, near } = chain
   let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity]
   let [endMinX, endMinY, endMaxX, endMaxY] = [Infinity, Infinity, -Infinity, -Infinity]
   let shared = 0xffff
@@ -98,8 +99,8 @@ function fillLeaf({ chain, nodes, advance }: ChainTree, i: number): void {
       if (px > maxX) maxX = px
       if (py < minY) minY = py
       if (py > maxY) maxY = py
-      const qx = px + goX[p]!
-      const qy = py + goY[p]!
+      const qx = px + span * vx[p]!
+      const qy = py + span * vy[p]!
       if (qx < endMinX) endMinX = qx
       if (qx > endMaxX) endMaxX = qx
       if (qy < endMinY) endMinY = qy
@@ -246,16 +247,17 @@ const boxesA = new Float64Array(LEAF * BOX_STRIDE)
 const boxesB = new Float64Array(LEAF * BOX_STRIDE)
 
 function fillBoxes(chain: MovingChain, first: number, end: number, out: Float64Array): void {
-  const { next, x, y, goX, goY, ownBox, near } = chain
+  const { next, x, y, vx, vy, span, ownBox, near } = chain
   for (let e = first; e < end; e++) {
     const at = (e - first) * BOX_STRIDE
     if (ownBox?.(e, out, at)) continue
     const n = next[e]!
     for (let end = 0; end < 2; end++) {
-      const ax = x[e]! + end * goX[e]!
-      const ay = y[e]! + end * goY[e]!
-      const bx = x[n]! + end * goX[n]!
-      const by = y[n]! + end * goY[n]!
+      const t = end * span
+      const ax = x[e]! + t * vx[e]!
+      const ay = y[e]! + t * vy[e]!
+      const bx = x[n]! + t * vx[n]!
+      const by = y[n]! + t * vy[n]!
       out[at + 4 * end] = (ax < bx ? ax : bx) - near
       out[at + 4 * end + 1] = (ay < by ? ay : by) - near
       out[at + 4 * end + 2] = (ax < bx ? bx : ax) + near

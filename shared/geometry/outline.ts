@@ -1,7 +1,7 @@
 import { STRAIGHT_BULGE } from './bulge.ts'
 import { capFactor } from './loop.ts'
 import { segmentBounds } from './segment.ts'
-import type { Bounds, Loop, Segment, VertexLoop } from './types.ts'
+import type { Bounds, Loop, Segment, Vertex, VertexLoop } from './types.ts'
 
 /**
  * All loops of a profile in flat arrays, edges numbered through the loops: edge i starts at (x, y)[i] and ends
@@ -37,25 +37,25 @@ export interface ReadOutline {
  * the caller's edge n − 1 − k.
  */
 export function readOutline(loops: readonly VertexLoop[]): ReadOutline {
-  const out = emptyOutline(loops)
-  const { x, y, arc, next } = out
-  let hasArcs = false
+  const hasArcs = loops.some((loop) => loop.some(isBulged))
+  const outline = emptyOutline(loops, hasArcs)
+  const { x, y, next } = outline
   let i = 0
   for (const loop of loops) {
-    for (const vertex of loop) {
-      x[i] = vertex.x
-      y[i] = vertex.y
-      const { bulge } = vertex
-      if (bulge !== undefined && Math.abs(bulge) >= STRAIGHT_BULGE) {
-        arc[i] = 1
-        out.sweep[i] = bulge
-        hasArcs = true
-      }
-      i++
+    for (let v = 0; v < loop.length; v++) {
+      x[i] = loop[v]!.x
+      y[i++] = loop[v]!.y
     }
   }
-  if (hasArcs) for (let e = 0; e < i; e++) if (arc[e]) curve(out, e, next[e]!, out.sweep[e]!)
-  const outline = { ...out, hasArcs }
+  if (hasArcs) {
+    i = 0
+    for (const loop of loops) {
+      for (const vertex of loop) {
+        if (isBulged(vertex)) curve(outline, i, next[i]!, vertex.bulge!)
+        i++
+      }
+    }
+  }
   const areas = loops.map((_, l) => loopArea(outline, l))
   const reversed = areas.map((area, l) => area > 0 !== (l === 0))
   reversed.forEach((turned, l) => {
@@ -66,8 +66,12 @@ export function readOutline(loops: readonly VertexLoop[]): ReadOutline {
   return { outline, reversed, areas }
 }
 
+function isBulged({ bulge }: Vertex): boolean {
+  return bulge !== undefined && Math.abs(bulge) >= STRAIGHT_BULGE
+}
+
 /** With chord c and bulge b: radius = c(1 + b²) / 4|b|, the centre c(1 − b²) / 4b to the left of the chord's middle. */
-function curve(out: Omit<Outline, 'hasArcs'>, e: number, n: number, bulge: number): void {
+function curve(out: Outline, e: number, n: number, bulge: number): void {
   const { x, y } = out
   const dx = x[n]! - x[e]!
   const dy = y[n]! - y[e]!
@@ -76,19 +80,19 @@ function curve(out: Omit<Outline, 'hasArcs'>, e: number, n: number, bulge: numbe
   out.cy[e] = (y[e]! + y[n]!) / 2 + dx * lift
   out.radius[e] = (Math.hypot(dx, dy) * (1 + bulge * bulge)) / (4 * Math.abs(bulge))
   out.sweep[e] = 4 * Math.atan(bulge)
+  out.arc[e] = 1
 }
 
 /** Closed loops of segments as they are, whichever way they run. */
 export function outlineOfLoops(loops: readonly Loop[]): Outline {
-  const out = emptyOutline(loops)
-  let hasArcs = false
+  const hasArcs = loops.some((loop) => loop.some(({ kind }) => kind === 'arc'))
+  const out = emptyOutline(loops, hasArcs)
   let i = 0
   for (const loop of loops) {
     for (const segment of loop) {
       out.x[i] = segment.from.x
       out.y[i] = segment.from.y
       if (segment.kind === 'arc') {
-        hasArcs = true
         out.arc[i] = 1
         out.cx[i] = segment.centre.x
         out.cy[i] = segment.centre.y
@@ -98,19 +102,23 @@ export function outlineOfLoops(loops: readonly Loop[]): Outline {
       i++
     }
   }
-  return { ...out, hasArcs }
+  return out
 }
 
-function emptyOutline(loops: readonly { readonly length: number }[]): Omit<Outline, 'hasArcs'> {
+function emptyOutline(loops: readonly { readonly length: number }[], hasArcs: boolean): Outline {
   const loopStart = new Int32Array(loops.length + 1)
   loops.forEach(({ length }, l) => (loopStart[l + 1] = loopStart[l]! + length))
   const count = loopStart[loops.length]!
   const next = new Int32Array(count)
   for (let e = 0; e < count; e++) next[e] = e + 1
   for (let l = 0; l < loops.length; l++) if (loops[l]!.length > 0) next[loopStart[l + 1]! - 1] = loopStart[l]!
-  const numbers = () => new Float64Array(count)
-  const [x, y, cx, cy, radius, sweep] = [numbers(), numbers(), numbers(), numbers(), numbers(), numbers()]
-  return { count, loopStart, next, x, y, arc: new Uint8Array(count), cx, cy, radius, sweep }
+  const [x, y] = [new Float64Array(count), new Float64Array(count)]
+  const arc = new Uint8Array(count)
+  // Without arcs one column of zeros stands for all that only arcs have.
+  const zeros = hasArcs ? null : new Float64Array(count)
+  const ofArcs = () => zeros ?? new Float64Array(count)
+  const [cx, cy, radius, sweep] = [ofArcs(), ofArcs(), ofArcs(), ofArcs()]
+  return { count, loopStart, next, x, y, arc, cx, cy, radius, sweep, hasArcs }
 }
 
 function turnRound(outline: Outline, l: number): void {

@@ -72,10 +72,9 @@ export function edgeProblems(outline: Outline): ProfileProblem[] {
       // A difference of two coordinates is finite only if both are (they are far from the largest number).
       const dx = x[n]! - x[i]!
       const dy = y[n]! - y[i]!
-      const at = () => ({ x: x[i]!, y: y[i]! })
       if (!(Math.abs(dx) + Math.abs(dy) < Infinity)) add('not-finite', l, i - first, null)
-      else if (arc[i] && !(radius[i]! < Infinity)) add('not-finite', l, i - first, at())
-      else if (dx === 0 && dy === 0) add('zero-edge', l, i - first, at())
+      else if (arc[i] && !(radius[i]! < Infinity)) add('not-finite', l, i - first, { x: x[i]!, y: y[i]! })
+      else if (dx === 0 && dy === 0) add('zero-edge', l, i - first, { x: x[i]!, y: y[i]! })
     }
   }
   return problems
@@ -116,7 +115,8 @@ function byPlace(a: ProfileProblem, b: ProfileProblem): number {
   )
 }
 
-function meetingsAtRest(outline: Outline, within: number): ProfileProblem[] {
+/** Edges that touch or cross other than where they must. */
+export function meetingsAtRest(outline: Outline, within: number): ProfileProblem[] {
   const { loopStart, x, y } = outline
   const starts = Array.from(loopStart.subarray(0, -1), (first) => ({ x: x[first]!, y: y[first]! }))
   const edges = nearbyOrder(starts).flatMap((l) => range(loopStart[l]!, loopStart[l + 1]!))
@@ -151,8 +151,9 @@ function restingChain(outline: Outline, edges: readonly number[], near: number):
     next: Int32Array.from(edges, (edge) => placeOf[outline.next[edge]!]!),
     x: Float64Array.from(edges, (edge) => outline.x[edge]!),
     y: Float64Array.from(edges, (edge) => outline.y[edge]!),
-    goX: new Float64Array(edges.length),
-    goY: new Float64Array(edges.length),
+    vx: new Float64Array(edges.length),
+    vy: new Float64Array(edges.length),
+    span: 0,
     advance: Uint16Array.from(edges, (edge) => edgeAdvance(outline, edge, near)),
     ownBox: outline.hasArcs ? ownBox : null,
     near,
@@ -193,12 +194,34 @@ export function meetingOf(outline: Outline, a: number, b: number, within: number
 
 /** Edges i < j. */
 function sharedPoint(outline: Outline, i: number, j: number, within: number): Point | null {
+  if (linesKeepApart(outline, i, j, within)) return null
   const a = segmentAt(outline, i)
   const b = segmentAt(outline, j)
   const follows = outline.next[i] === j
   const leads = outline.next[j] === i
   if (follows) return commonPointBesideCorner(a, b, leads, within)
   return leads ? commonPointBesideCorner(b, a, false, within) : commonPoint(a, b, within)
+}
+
+/** Told without an object: lines that follow one another and do not double back, or of which one lies beside the other. */
+function linesKeepApart(outline: Outline, i: number, j: number, within: number): boolean {
+  const { next, x, y, arc } = outline
+  if (arc[i] || arc[j]) return false
+  const ux = x[next[i]!]! - x[i]!
+  const uy = y[next[i]!]! - y[i]!
+  const vx = x[next[j]!]! - x[j]!
+  const vy = y[next[j]!]! - y[j]!
+  if (next[i] === j || next[j] === i) return ux * vx + uy * vy >= 0
+  const wx = x[j]! - x[i]!
+  const wy = y[j]! - y[i]!
+  const turn = ux * vy - uy * vx
+  const before = ux * wy - uy * wx
+  const apart = 2 * within * (Math.abs(ux) + Math.abs(uy))
+  if ((before > apart && before + turn > apart) || (before < -apart && before + turn < -apart)) return true
+  // The ends of edge i seen from edge j.
+  const other = wx * vy - wy * vx
+  const gap = 2 * within * (Math.abs(vx) + Math.abs(vy))
+  return (other > gap && other - turn > gap) || (other < -gap && other - turn < -gap)
 }
 
 /** An edge is no longer than this many times the largest coordinate: an arc's radius keeps within its chord and box. */

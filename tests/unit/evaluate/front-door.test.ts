@@ -77,7 +77,18 @@ describe('evaluate', () => {
     expect(answer.edges.map(({ jetTilts }) => jetTilts)).toEqual([[29], [29], [-1], [-1]])
     const [, corner] = answer.corners
     expect(tan(corner?.seamTilt ?? 0)).toBeCloseTo(tan(30) * Math.SQRT2, 9)
-    expect(tan(corner?.jetTilt ?? 0)).toBeCloseTo(tan(29) * Math.SQRT2, 9)
+    // The axis a of the jet stands at the taper to both walls, a·N = −sin τ. By symmetry a = (s, s, −√(1 − 2s²)), so
+    // s cos β − √(1 − 2s²) sin β = −sin τ, solved here by halving.
+    const sine = (degrees: number) => Math.sin((degrees * Math.PI) / 180)
+    const standsOff = (s: number) => s * sine(60) - Math.sqrt(1 - 2 * s * s) * sine(30) + sine(1)
+    let [low, high] = [0, 0.7]
+    for (let i = 0; i < 60; i++) {
+      const middle = (low + high) / 2
+      if (standsOff(middle) < 0) low = middle
+      else high = middle
+    }
+    const whole = (Math.asin(Math.SQRT2 * low) * 180) / Math.PI
+    expect(corner?.jetTilt).toBeCloseTo(whole, 9)
   })
 
   it('stops at the first event and says so', () => {
