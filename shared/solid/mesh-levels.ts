@@ -2,6 +2,7 @@ import { chordCount } from '../geometry/sample.ts'
 import type { Point } from '../geometry/types.ts'
 import {
   CornerMode,
+  blendsAt,
   makePlaces,
   place,
   radiusAt,
@@ -54,21 +55,42 @@ export function meshLevels(frame: Frame, from: number, to: number, chordToleranc
   return out
 }
 
-/** Chords that stand for each edge, the same at every level. */
+/**
+ * Chords that stand for each edge, the same at every level: of an arc by its sagitta, of a wall that blends also by its
+ * twist. A quad between two levels is a piece of a bilinear surface; cut into two triangles it departs from it by a
+ * quarter of its twist (top chord less bottom chord) at most, and n chords share the twist between them (derived).
+ */
 export function chordsPerEdge(
   frame: Frame,
   levels: readonly MeshLevel[],
   chordTolerance: number,
 ): Int32Array {
-  return Int32Array.from(frame.segments, (segment, g) =>
-    segment.kind === 'line'
-      ? 1
-      : Math.max(
-          ...levels.map(({ offsets, sweep }) =>
-            chordCount(Math.max(0, radiusAt(frame, g, offsets.start[g]!)), sweep[g]!, chordTolerance),
-          ),
-        ),
-  )
+  const count = new Int32Array(frame.count).fill(1)
+  for (let g = 0; g < frame.count; g++) {
+    const blends = blendsAt(frame, g)
+    if (frame.arc[g]) {
+      for (const { offsets, sweep } of levels) {
+        for (const offset of blends ? [offsets.start[g]!, offsets.end[g]!] : [offsets.start[g]!]) {
+          const radius = Math.max(0, radiusAt(frame, g, offset))
+          count[g] = Math.max(count[g]!, chordCount(radius, sweep[g]!, chordTolerance))
+        }
+      }
+    }
+    if (blends) count[g] = Math.max(count[g]!, Math.ceil(twistOf(levels, g) / (4 * chordTolerance)))
+  }
+  return count
+}
+
+/** The largest change of an edge's run from corner to corner between two neighbouring levels, mm. */
+function twistOf(levels: readonly MeshLevel[], g: number): number {
+  let most = 0
+  for (let i = 1; i < levels.length; i++) {
+    const [above, below] = [levels[i - 1]!.places, levels[i]!.places]
+    const x = below.ex[g]! - below.sx[g]! - (above.ex[g]! - above.sx[g]!)
+    const y = below.ey[g]! - below.sy[g]! - (above.ey[g]! - above.sy[g]!)
+    most = Math.max(most, Math.hypot(x, y))
+  }
+  return most
 }
 
 function levelAt(frame: Frame, depth: number, given: boolean): MeshLevel {

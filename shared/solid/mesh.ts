@@ -1,6 +1,7 @@
 import { triangulate } from '../geometry/triangulate.ts'
 import type { Point } from '../geometry/types.ts'
-import { CornerMode, frameOf, type Frame } from '../contours/frame.ts'
+import { CornerMode, blendsAt, frameOf, type Frame } from '../contours/frame.ts'
+import { spiralPoint } from '../contours/spiral.ts'
 import { chordsPerEdge, meshLevels, type LevelRuns, type MeshLevel } from './mesh-levels.ts'
 import { meshLines } from './mesh-lines.ts'
 import { soundRange } from '../events/range.ts'
@@ -34,8 +35,16 @@ function levelRuns(frame: Frame, { places, sweep }: MeshLevel, chords: Int32Arra
   return frame.segments.map((segment, g) => {
     const start = { x: places.sx[g]!, y: places.sy[g]! }
     const end = { x: places.ex[g]!, y: places.ey[g]! }
-    if (segment.kind === 'line') return [start, end]
+    if (segment.kind === 'line') return lineRun(start, end, chords[g]!)
     const { x: cx, y: cy } = segment.centre
+    if (blendsAt(frame, g)) {
+      const [fromRadius, toRadius] = [start, end].map(({ x, y }) => Math.hypot(x - cx, y - cy)) as [
+        number,
+        number,
+      ]
+      const spiral = { centre: segment.centre, from: start, to: end, fromRadius, toRadius, sweep: sweep[g]! }
+      return Array.from({ length: chords[g]! + 1 }, (_, i) => spiralPoint(spiral, i / chords[g]!))
+    }
     const radius = (Math.hypot(start.x - cx, start.y - cy) + Math.hypot(end.x - cx, end.y - cy)) / 2
     const heading = Math.atan2(start.y - cy, start.x - cx)
     const run = [start]
@@ -46,6 +55,17 @@ function levelRuns(frame: Frame, { places, sweep }: MeshLevel, chords: Int32Arra
     run.push(end)
     return run
   })
+}
+
+/** Both ends exactly, and the points between the chords of one that blends. */
+function lineRun(start: Point, end: Point, chords: number): readonly Point[] {
+  const run = [start]
+  for (let i = 1; i < chords; i++) {
+    const share = i / chords
+    run.push({ x: start.x + share * (end.x - start.x), y: start.y + share * (end.y - start.y) })
+  }
+  run.push(end)
+  return run
 }
 
 function addLid(sink: MeshSink, frame: Frame, runs: LevelRuns, depth: number, kind: 'top' | 'bottom'): void {
@@ -92,6 +112,17 @@ function addWall(
       face = sink.face({ kind: 'wall', loop, edge: frame.edgeOf[g]!, facet })
       faceFacet = facet
     }
+    const strip = {
+      top: runs[i - 1]![g]!,
+      topDepth: above.depth,
+      bottom: runs[i]![g]!,
+      bottomDepth: below.depth,
+    }
+    if (blendsAt(frame, g)) {
+      const centre = segment.kind === 'arc' ? segment.centre : null
+      addTwisted(sink, face, strip, centre && { centre, above: above.sweep[g]!, below: below.sweep[g]! })
+      continue
+    }
     const tilt = wall.facets[facet]!.tilt
     const normals = runs[i - 1]![g]!.map((point): Point => {
       if (segment.kind === 'line') return outward(segment.from, segment.to)
@@ -100,7 +131,7 @@ function addWall(
       const size = Math.hypot(dx, dy)
       return size > 0 ? { x: dx / size, y: dy / size } : outward(segment.from, segment.to)
     })
-    addStrip(sink, face, runs[i - 1]![g]!, above.depth, runs[i]![g]!, below.depth, normals, tilt)
+    addStrip(sink, face, strip, normals, tilt)
   }
 }
 
@@ -119,7 +150,13 @@ function addStep(sink: MeshSink, frame: Frame, g: number, levels: readonly MeshL
     if (isSpot(wide)) continue
     if (face < 0) face = sink.face({ kind: 'step', loop, vertex: frame.edgeOf[g]! })
     const normal = outward(...wide)
-    addStrip(sink, face, top, above.depth, bottom, below.depth, [normal, normal], 0)
+    addStrip(
+      sink,
+      face,
+      { top, topDepth: above.depth, bottom, bottomDepth: below.depth },
+      [normal, normal],
+      0,
+    )
   }
 }
 
@@ -127,17 +164,16 @@ function isSpot([a, b]: readonly [Point, Point]): boolean {
   return a.x === b.x && a.y === b.y
 }
 
-/** Quads between two runs of as many points, each cut into two triangles, counter-clockwise seen from outside. */
-function addStrip(
-  sink: MeshSink,
-  face: number,
-  top: readonly Point[],
-  topDepth: number,
-  bottom: readonly Point[],
-  bottomDepth: number,
-  normals: readonly Point[],
-  tilt: number,
-): void {
+/** Two runs of as many points, one above the other. */
+interface Strip {
+  readonly top: readonly Point[]
+  readonly topDepth: number
+  readonly bottom: readonly Point[]
+  readonly bottomDepth: number
+}
+
+function addStrip(sink: MeshSink, face: number, strip: Strip, normals: readonly Point[], tilt: number): void {
+  const { top, topDepth, bottom, bottomDepth } = strip
   const [cos, sin] = [Math.cos(tilt), Math.sin(tilt)]
   const first = sink.vertexCount
   for (let i = 0; i < top.length; i++) {
@@ -145,7 +181,55 @@ function addStrip(
     sink.vertex(top[i]!, topDepth, n.x * cos, n.y * cos, sin)
     sink.vertex(bottom[i]!, bottomDepth, n.x * cos, n.y * cos, sin)
   }
-  for (let i = 0; i + 1 < top.length; i++) {
+  addQuads(sink, face, first, top.length)
+}
+
+/**
+ * A wall that blends: at each point the normal is (n, w) of unit length, n square to the contour there and w how fast
+ * the wall moves along n with depth, the tangent of the local tilt. `arc`: its centre, and its sweep at both depths.
+ */
+function addTwisted(
+  sink: MeshSink,
+  face: number,
+  { top, topDepth, bottom, bottomDepth }: Strip,
+  arc: { readonly centre: Point; readonly above: number; readonly below: number } | null,
+): void {
+  const first = sink.vertexCount
+  for (let i = 0; i < top.length; i++) {
+    const [t, b] = [top[i]!, bottom[i]!]
+    const [dx, dy] = [(b.x - t.x) / (bottomDepth - topDepth), (b.y - t.y) / (bottomDepth - topDepth)]
+    for (const [run, depth, sweep] of [
+      [top, topDepth, arc?.above ?? 0],
+      [bottom, bottomDepth, arc?.below ?? 0],
+    ] as const) {
+      const n = arc ? outwardOfSpiral(run, i, arc.centre, sweep) : outward(run[0]!, run.at(-1)!)
+      const w = n.x * dx + n.y * dy
+      const size = Math.hypot(1, w)
+      sink.vertex(run[i]!, depth, n.x / size, n.y / size, w / size)
+    }
+  }
+  addQuads(sink, face, first, top.length)
+}
+
+/** Right of a spiral's travel: along it the radius changes by (r₁ − r₀)/sweep for each radian. */
+function outwardOfSpiral(run: readonly Point[], i: number, centre: Point, sweep: number): Point {
+  const [from, at, to] = [run[0]!, run[i]!, run.at(-1)!].map(({ x, y }) => ({
+    x: x - centre.x,
+    y: y - centre.y,
+  })) as [Point, Point, Point]
+  const radius = Math.hypot(at.x, at.y)
+  if (!(radius > 0)) return outward(run[0]!, run.at(-1)!)
+  const change = Math.hypot(to.x, to.y) - Math.hypot(from.x, from.y)
+  const [rx, ry] = [at.x / radius, at.y / radius]
+  return outward(
+    { x: 0, y: 0 },
+    { x: change * rx - sweep * radius * ry, y: change * ry + sweep * radius * rx },
+  )
+}
+
+/** Quads between the pairs of vertices laid down from `first`, each cut into two triangles, counter-clockwise seen from outside. */
+function addQuads(sink: MeshSink, face: number, first: number, pairs: number): void {
+  for (let i = 0; i + 1 < pairs; i++) {
     const [t0, b0, t1, b1] = [first + 2 * i, first + 2 * i + 1, first + 2 * i + 2, first + 2 * i + 3]
     sink.triangle(face, b0, b1, t1)
     sink.triangle(face, b0, t1, t0)
