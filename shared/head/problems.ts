@@ -47,7 +47,7 @@ export function travelProblems(
   path: JetPath,
   passes: readonly Pass[],
   head: HeadSpec,
-  { outer, inner, dwell }: Pick<AxisColumns, 'outer' | 'inner' | 'dwell'>,
+  { outer, inner, dwell, crossing }: AxisColumns,
 ): HeadProblem[] {
   const problems: HeadProblem[] = []
   const [outerName, innerName] = axisNames(head.kind)
@@ -58,6 +58,11 @@ export function travelProblems(
       note(outerOut, i, outer[i]!)
       if (dwell[i] !== 0) note(outerOut, i, outer[i]! - dwell[i]!)
       note(innerOut, i, inner[i]!)
+      const part = crossing[i]!
+      if (part !== 0) {
+        note(outerOut, i, outer[i]! + path.sweep[i]! * part)
+        note(outerOut, i, outer[i + 1]! - path.sweep[i]! * (1 - part))
+      }
       if (head.kind === 'A-B' && i < pass.last && path.sweep[i] !== 0) noteRound(path, i, outerOut, innerOut)
     }
     report(path, pass, outerName, outerOut, problems)

@@ -85,15 +85,20 @@ function findRuns(
   let open = false
   for (let i = first; i <= last; i++) {
     if (held[i]) {
+      // C goes on with a round move to the upright station, and comes with one from it: that needs travel as well.
+      if (open) widen(runs, runs.to[runs.count - 1]! + path.sweep[i - 1]!)
       open = false
       continue
     }
     let carried = 0
+    let arriving = i > first && held[i - 1] ? path.sweep[i - 1]! : 0
     if (open && !isSteady(path, i - 1)) {
       slopeRun(path, i - 1, shape)
       const turn = path.sweep[i - 1]!
       if (shape.flattest <= flat && shape.part > 0 && shape.part < 1) {
         crossing[i - 1] = shape.part
+        widen(runs, outer[i - 1]! + turn * shape.part)
+        arriving = turn * (1 - shape.part)
         carried = turn
         open = false
       } else {
@@ -106,15 +111,22 @@ function findRuns(
     else if (runs.count > 0) carried = path.sweep[runs.end[runs.count - 1]!]! + path.sweep[i - 1]!
     if (!open) {
       beginRun(runs, i, outer[i]!, carried)
+      widen(runs, outer[i]! - arriving)
       open = true
     }
     const r = runs.count - 1
     runs.end[r] = i
     runs.to[r] = outer[i]!
-    if (outer[i]! < runs.low[r]!) runs.low[r] = outer[i]!
-    if (outer[i]! > runs.high[r]!) runs.high[r] = outer[i]!
+    widen(runs, outer[i]!)
     if (inner[i]! > runs.steepest[r]!) runs.steepest[r] = inner[i]!
   }
+}
+
+/** Takes an angle into the range of the last run. */
+function widen(runs: TiltedRuns, c: number) {
+  const r = runs.count - 1
+  if (c < runs.low[r]!) runs.low[r] = c
+  if (c > runs.high[r]!) runs.high[r] = c
 }
 
 function beginRun(runs: TiltedRuns, i: number, c: number, carried: number) {

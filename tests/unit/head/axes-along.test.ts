@@ -72,6 +72,28 @@ describe('C-A: unwinding', () => {
     expect(problems.find(({ value }) => value < 0)!.unwindAt).toBe(-1)
   })
 
+  test('the round way to an upright station needs travel too', () => {
+    // From −90° the arc carries C on by 80°, and the turn to the next lean is made there.
+    const stations: Station[] = [
+      { x: 50, y: 0, tilt: 30, heading: 0, sweep: 80, centre: [0, 0] },
+      { x: 50 * Math.cos(80 * DEGREE), y: 50 * Math.sin(80 * DEGREE), tilt: 0 },
+      { x: 0, y: 90, tilt: 30, heading: 0 },
+    ]
+    const wide = plan(turning, stations)
+    near(wide.outer, [-90, -90, -90])
+    near(wide.dwell, [0, -80, 0])
+    // A travel that has −90° and 90° but no 80° beyond either: told at the upright station.
+    const axis = { speed: 180, from: -95, to: 95 }
+    expect(plan(headOf('C-A', { outer: axis }), stations).problems).toEqual([])
+    const narrow = plan(headOf('C-A', { outer: { ...axis, from: -92, to: -20 } }), stations).problems
+    expect(narrow).toHaveLength(1)
+    expect(narrow[0]).toMatchObject({ code: 'travel-exceeded', axis: 'C', station: 1 })
+    expect(narrow[0]!.value / DEGREE).toBeCloseTo(-10, 9)
+    // With the other branch open the run moves there rather than past the end.
+    const shifted = plan(headOf('C-A', { outer: { ...axis, from: -92, to: 175 } }), stations)
+    expect(shifted.problems).toEqual([])
+  })
+
   test('an axis that turns endlessly has no such problem', () => {
     const endless = headOf('C-A', { outer: { from: null, to: null, speed: 180 } })
     const axes = plan(endless, row(...Array.from({ length: 40 }, (_, i) => [30, 90 * i] as const)))
