@@ -2,7 +2,7 @@ import { CornerMode } from '../contours/frame.ts'
 import type { JetPath } from '../passes/types.ts'
 import { fallBeside, type JetCone } from './jet-cone.ts'
 import { isSteady, roundMove } from './moves.ts'
-import { BITE_TOLERANCE } from './types.ts'
+import { HALF, outsidePlane } from './plane.ts'
 import {
   bentCorner,
   cornerStray,
@@ -19,14 +19,8 @@ import {
  * on the other side. All are sufficient, none necessary; what no proof clears is searched.
  */
 
-/** A proof has two sides, the jet's and the wall's: each may miss by half of what counts, mm. */
-const HALF = BITE_TOLERANCE / 2
-
 /** Two centres, radii or slopes nearer than this are one, mm: what a few operations lose on coordinates of metres. */
 const SAME = 1e-9
-
-/** Turning moves are looked at this often and no oftener before the search takes over. */
-const MOST_LOOKS = 400
 
 export interface Scene {
   readonly cone: JetCone
@@ -38,7 +32,7 @@ export interface Scene {
 export function isClear(scene: Scene, i: number, f: number): boolean {
   const { path, band } = scene
   const { arc } = band.frame
-  if (!arc[f] && isPlane(band, f) && outsideWall(scene, i, f)) return true
+  if (outsideWall(scene, i, f)) return true
   if (path.sweep[i] !== 0) return isRoundClear(scene, i, f)
   const e = path.edge[i]!
   if (
@@ -55,81 +49,15 @@ export function isClear(scene: Scene, i: number, f: number): boolean {
   return outsideCorner(scene, i, f) || outsideCorner(scene, i, band.frame.next[f]!)
 }
 
-/** Whether a straight move keeps outside the endless plane of line f's wall within the band. */
+/** Whether f is a line and a straight move keeps outside the endless plane of its wall within the band. */
 export function outsideWall({ cone, path, band }: Scene, i: number, f: number): boolean {
-  if (path.sweep[i] !== 0) return false
+  if (path.sweep[i] !== 0 || !isPlane(band, f)) return false
   const nx = band.frame.uy[f]!
   const ny = -band.frame.ux[f]!
   const [high, low] = band.places
   const h0 = high.sx[f]! * nx + high.sy[f]! * ny
   const h1 = low.sx[f]! * nx + low.sy[f]! * ny
   return outsidePlane(cone, path, i, nx, ny, band.top, h0, band.bottom, h1)
-}
-
-/**
- * Whether a straight move keeps outside a plane of level normal n, which stands at height h0 along n at depth z0
- * and at h1 at z1. Against an endless plane the deepest bite at a depth is cos τ·r − sin τ·L·d − κ·gap; with a steady
- * slope that is even in d and along the move, so the four corners tell.
- */
-function outsidePlane(
-  cone: JetCone,
-  path: JetPath,
-  i: number,
-  nx: number,
-  ny: number,
-  z0: number,
-  h0: number,
-  z1: number,
-  h1: number,
-): boolean {
-  const { x, y, p, q } = path
-  const j = i + 1
-  const [p0, q0, p1, q1] = [p[i]!, q[i]!, p[j]!, q[j]!]
-  const a0 = x[i]! * nx + y[i]! * ny
-  const a1 = x[j]! * nx + y[j]! * ny
-  const c0 = p0 * nx + q0 * ny
-  const c1 = p1 * nx + q1 * ny
-  // Quickly out: the axis itself is behind the plane.
-  if (a0 + z0 * c0 < h0 || a0 + z1 * c0 < h1 || a1 + z0 * c1 < h0 || a1 + z1 * c1 < h1) return false
-  const bite = (a: number, c: number, square: number, z: number, h: number) =>
-    cone.cos * cone.radius - cone.sin * Math.sqrt(square) * z - fallBeside(cone, c, square) * (a + z * c - h)
-  const square0 = 1 + p0 * p0 + q0 * q0
-  const square1 = 1 + p1 * p1 + q1 * q1
-  if (!(bite(a0, c0, square0, z0, h0) <= HALF)) return false
-  if (!(bite(a0, c0, square0, z1, h1) <= HALF)) return false
-  if (!(bite(a1, c1, square1, z0, h0) <= HALF)) return false
-  if (!(bite(a1, c1, square1, z1, h1) <= HALF)) return false
-  const turn = Math.hypot(p1 - p0, q1 - q0)
-  const closing = Math.abs(c1 - c0)
-  const sin = Math.abs(cone.sin)
-  if (turn === 0 || (sin === 0 && closing === 0)) return true
-  if (sin * sin * Math.max(square0, square1) > LEAST_ROOT) return false
-  // Between looks a step apart the bite passes the higher one by at most bend·step²/8, bend a bound of its second derivative.
-  let looks = 0
-  for (const [z, h] of [
-    [z0, h0],
-    [z1, h1],
-  ] as const) {
-    const [g0, g1] = [a0 + z * c0 - h, a1 + z * c1 - h]
-    const bend =
-      z * sin * turn * turn +
-      2 * Math.abs(g1 - g0) * (closing + sin * turn) +
-      Math.max(g0, g1) * (2 * closing * closing + 4 * sin * turn * turn)
-    const biteOf = (u: number) => {
-      const [pu, qu] = [p0 + u * (p1 - p0), q0 + u * (q1 - q0)]
-      return bite(a0 + u * (a1 - a0), c0 + u * (c1 - c0), 1 + pu * pu + qu * qu, z, h)
-    }
-    const isBelow = (u0: number, f0: number, u1: number, f1: number): boolean => {
-      const step = u1 - u0
-      if (Math.max(f0, f1) + (bend * step * step) / 8 <= BITE_TOLERANCE) return true
-      if (++looks > MOST_LOOKS) return false
-      const u = (u0 + u1) / 2
-      const f = biteOf(u)
-      return f <= BITE_TOLERANCE && isBelow(u0, f0, u, f) && isBelow(u, f, u1, f1)
-    }
-    if (!isBelow(0, bite(a0, c0, square0, z, h), 1, bite(a1, c1, square1, z, h))) return false
-  }
-  return true
 }
 
 /**
@@ -147,9 +75,6 @@ function outsideCorner({ cone, path, band }: Scene, i: number, g: number): boole
   const h1 = low.sx[g]! * nx + low.sy[g]! * ny
   return outsidePlane(cone, path, i, nx, ny, band.top, h0, band.bottom, h1)
 }
-
-/** The bound of the second derivative holds where sin²τ·L² is below this: its root then stays near that of 1 + c². */
-const LEAST_ROOT = 0.1
 
 /** Whether wall f lies wholly behind the plane of line e's wall, within the band. */
 export function liesBehind(band: WallBand, f: number, e: number): boolean {

@@ -5,13 +5,13 @@ import type { Jet, Passes } from '../passes/types.ts'
 import { levelsOf } from '../walls/levels.ts'
 import type { Body } from '../walls/types.ts'
 import { facetIndexAt } from '../walls/wall.ts'
-import { isClear, type Scene } from './clear.ts'
+import { isClear, liesBehind, outsideWall, type Scene } from './clear.ts'
 import { deepestBite } from './deepest.ts'
 import { groundOf, mayMeet, moveMayMeet, movesByEdge, type MovesByEdge } from './ground.ts'
 import { jetCone } from './jet-cone.ts'
 import { rimsOf } from './rims.ts'
 import { BITE_TOLERANCE, type HeadShape, type Interference, type JetBite } from './types.ts'
-import { wallBand } from './wall-band.ts'
+import { isPlane, wallBand } from './wall-band.ts'
 
 export interface InterferenceOptions {
   /** The nozzle and head over the plate; left out, the jet alone is looked at. */
@@ -97,11 +97,18 @@ function lookAtAll(scene: Scene, owners: MovesByEdge, tally: Tally): void {
   const { previous, next } = frame
   const ground = groundOf(cone, path, owners, band)
   for (let g = 0; g < frame.count; g++) {
+    const before = previous[g]!
+    const after = next[g]!
+    // Beside a convex corner the neighbour lies behind the plane that the edge's own jets keep outside of.
+    const isLine = isPlane(band, g)
+    const beforeBehind = isLine && liesBehind(band, before, g)
+    const afterBehind = isLine && liesBehind(band, after, g)
     for (let k = owners.first[g]!; k < owners.first[g + 1]!; k++) {
       const i = owners.moves[k]!
-      tally.look(scene, i, g, g)
-      tally.look(scene, i, g, previous[g]!)
-      if (next[g] !== previous[g]) tally.look(scene, i, g, next[g]!)
+      const outside = outsideWall(scene, i, g)
+      if (!outside) tally.look(scene, i, g, g)
+      if (!(outside && beforeBehind)) tally.look(scene, i, g, before)
+      if (!(outside && afterBehind) && after !== before) tally.look(scene, i, g, after)
     }
   }
   const pair = (g: number, f: number) => {
