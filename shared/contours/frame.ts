@@ -114,7 +114,7 @@ export function frameFrom(body: Body, outline: Outline, table: WallTable): Frame
 }
 
 function compile(body: Body, outline: Outline, table: WallTable): Frame {
-  const { count, loopStart, next, x: px, y: py, arc, cx, cy, radius, sweep, hasArcs } = outline
+  const { count, loopStart } = outline
   const numbers = () => new Float64Array(count)
   const corners: Corners = {
     ux: numbers(),
@@ -151,35 +151,85 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
     else if (mode === CornerMode.step) hasSteps = true
     else if (mode === CornerMode.spike) hasSpikes = true
   }
-  let turn: Float64Array | null = null
-  let known: Mitres | null = null
-  const mitres = () => (known ??= mitresOf(outline, previous, corners))
-  return {
-    body,
+  const near = roundingOf(outlineBounds(outline))
+  const levels = levelsOfWalls(table.walls, body.thickness)
+  const drawn = {
     outline,
-    table,
-    levels: levelsOfWalls(table.walls, body.thickness),
-    near: roundingOf(outlineBounds(outline)),
-    count,
-    loopStart,
+    near,
     loopOf,
     edgeOf,
     previous,
-    next,
+    corners,
+    branches,
+    hasSteps,
+    hasSpikes,
+    allSegments,
+  }
+  return assemble(body, table, levels, drawn)
+}
+
+/**
+ * The same frame with other walls, for whoever has seen to it that neither the levels nor the modes of corners change.
+ * All columns that do not tell walls are shared.
+ */
+export function frameWithWalls(frame: Frame, body: Body, table: WallTable): Frame {
+  const rewalled = assemble(body, table, frame.levels, drawings.get(frame)!)
+  frames.set(body, rewalled)
+  return rewalled
+}
+
+/** What of a frame does not depend on the walls, but for the difference between smooth corners and steps. */
+interface Drawn {
+  readonly outline: Outline
+  readonly near: number
+  readonly loopOf: Int32Array
+  readonly edgeOf: Int32Array
+  readonly previous: Int32Array
+  readonly corners: Corners
+  readonly branches: ReadonlyMap<number, Branch>
+  readonly hasSteps: boolean
+  readonly hasSpikes: boolean
+  readonly allSegments: () => readonly Segment[]
+}
+
+const drawings = new WeakMap<Frame, Drawn>()
+
+function assemble(body: Body, table: WallTable, levels: readonly number[], drawn: Drawn): Frame {
+  const { outline, corners, previous } = drawn
+  let turn: Float64Array | null = null
+  let known: Mitres | null = null
+  const mitres = () => (known ??= mitresOf(outline, previous, corners))
+  const frame: Frame = {
+    body,
+    outline,
+    table,
+    levels,
+    near: drawn.near,
+    count: outline.count,
+    loopStart: outline.loopStart,
+    loopOf: drawn.loopOf,
+    edgeOf: drawn.edgeOf,
+    previous,
+    next: outline.next,
     get segments() {
-      return allSegments()
+      return drawn.allSegments()
     },
-    arc,
-    cx,
-    cy,
-    radius,
-    sweep,
-    px,
-    py,
-    ...corners,
+    arc: outline.arc,
+    cx: outline.cx,
+    cy: outline.cy,
+    radius: outline.radius,
+    sweep: outline.sweep,
+    px: outline.x,
+    py: outline.y,
+    ux: corners.ux,
+    uy: corners.uy,
+    length: corners.length,
+    turnSin: corners.turnSin,
+    turnCos: corners.turnCos,
     get turn() {
       return (turn ??= corners.turnSin.map((sin, g) => Math.atan2(sin, corners.turnCos[g]!)))
     },
+    mode: corners.mode,
     get mx() {
       return mitres().mx
     },
@@ -192,11 +242,13 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
     get ky() {
       return mitres().ky
     },
-    branches,
-    hasArcs,
-    hasSteps,
-    hasSpikes,
+    branches: drawn.branches,
+    hasArcs: outline.hasArcs,
+    hasSteps: drawn.hasSteps,
+    hasSpikes: drawn.hasSpikes,
   }
+  drawings.set(frame, drawn)
+  return frame
 }
 
 type Corners = {

@@ -56,15 +56,25 @@ const bands = new WeakMap<Frame, readonly Band[]>()
 export function bandsOf(frame: Frame): readonly Band[] {
   let known = bands.get(frame)
   if (!known) {
-    const { table, levels } = frame
+    const { levels } = frame
     known = levels.slice(1).map((to, i) => {
       const from = levels[i]!
-      const start = Float64Array.from(rowRates(table, table.start, from))
-      const end = table.blends ? Float64Array.from(rowRates(table, table.end, from)) : start
-      const rate = { start, end }
+      const rate = ratesAt(frame, from)
       return { from, to, rate, slides: slidesOf(frame, rate) }
     })
     bands.set(frame, known)
   }
   return known
+}
+
+/** The bands of a frame that has got other walls in place: what corners slide by is the caller's to put right. */
+export function rerateBands(frame: Frame, known: readonly Band[]): readonly Band[] {
+  const again = known.map((band) => ({ ...band, rate: ratesAt(frame, band.from) }))
+  bands.set(frame, again)
+  return again
+}
+
+function ratesAt({ table }: Frame, depth: number): RowFigures {
+  const start = Float64Array.from(rowRates(table, table.start, depth))
+  return { start, end: table.blends ? Float64Array.from(rowRates(table, table.end, depth)) : start }
 }
