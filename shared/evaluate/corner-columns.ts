@@ -26,8 +26,9 @@ export const CornerNote = { fillet: 1, over: 2, step: 4 } as const
 
 /** What all corners share. */
 export interface CornerRules {
-  /** Radians per side. */
+  /** Radians per side, and its sine. */
   readonly taper: number
+  readonly sine: number
   /** By band: the tangents of the tilts, their secants and squared jet slopes where edges run on smoothly, by row. */
   readonly bands: readonly BandRows[]
   /** Concave corners whose turn has a cosine below this keep a fillet worth a word; −2: none. */
@@ -65,6 +66,7 @@ export function cornerRules({ request, frame }: ReadRequest, lowest: number | nu
   })
   return {
     taper,
+    sine: Math.sin(taper),
     bands,
     filletCosine: kerf === undefined ? -2 : filletCosine(kerf),
     limitSlope: lowest === null ? Infinity : Math.tan(radians(Math.min(lowest, 89.999999))) ** 2,
@@ -87,7 +89,7 @@ export function cornerColumns(read: ReadRequest, rules: CornerRules): CornerColu
 }
 
 export function fillCorner(frame: Frame, g: number, rules: CornerRules, out: CornerColumns): void {
-  const { taper } = rules
+  const { taper, sine } = rules
   const { rowOfEdge } = frame.table
   const before = rowOfEdge[frame.previous[g]!]!
   const after = rowOfEdge[g]!
@@ -98,7 +100,6 @@ export function fillCorner(frame: Frame, g: number, rules: CornerRules, out: Cor
   if (mode === CornerMode.step) {
     seam = jet = -1
   } else {
-    const sine = Math.sin(taper)
     const sin = frame.turnSin[g]!
     const half = sin / (1 + frame.turnCos[g]!)
     for (let i = 0; i < rules.bands.length; i++) {

@@ -11,22 +11,42 @@ import { radians } from '../units/angle.ts'
 import { limitsOf, type Columns } from './columns.ts'
 import { CornerNote, interiorAngle, slopeDegrees } from './corner-columns.ts'
 import { cureEvent } from './event-cure.ts'
+import { nameOfMove, type JetWay } from './jet-way.ts'
+import { wayFindings } from './way-findings.ts'
+import type { CornerMove } from '../passes/types.ts'
 import type { ReadRequest } from './read.ts'
 
 /**
  * All findings, the gravest first; those of one severity by kind, then in the caller's order of places. What the
  * columns have marked is put into words here.
  */
-export function findingsOf(columns: Columns, contours: () => readonly Contour[]): Finding[] {
+export function findingsOf(
+  columns: Columns,
+  contours: () => readonly Contour[],
+  way: JetWay | null,
+): Finding[] {
   const all = [
     ...profileFindings(columns),
     ...eventFindings(columns),
     ...edgeFindings(columns),
-    ...cornerFindings(columns),
+    ...cornerFindings(columns).filter((finding) => !isTurnedElsewhere(columns, way, finding)),
     ...nozzleFindings(columns),
     ...holeFindings(columns, contours),
+    ...(way ? wayFindings(columns.read, way) : []),
   ]
   return findingSeverities.flatMap((severity) => all.filter((finding) => finding.severity === severity))
+}
+
+/** A seam past the limit is no matter where a person has chosen to turn in the waste or on the corner, and that works. */
+function isTurnedElsewhere({ read }: Columns, way: JetWay | null, { code, loop, vertex }: Finding): boolean {
+  if (code !== 'corner-over-working-limit' && code !== 'corner-over-mechanical-limit') return false
+  const chosen = read.request.passes?.corners?.find(
+    (choice) => choice.loop === loop && choice.vertex === vertex,
+  )
+  if (!chosen || chosen.move === 'lean' || !way?.cut) return false
+  const { frame, numbering } = read
+  const g = frame.loopStart[chosen.loop]! + numbering.cornerRef(chosen).vertex
+  return nameOfMove[way.cut.passes.cornerMoves[g] as CornerMove] === chosen.move
 }
 
 function profileFindings({ read }: Columns): Finding[] {
@@ -96,6 +116,7 @@ function wallsAt({ preps, frame, numbering }: ReadRequest, corner: number): [Edg
     loop,
     edge,
     facets: preps.list[preps.ofEdge[first + edge]!]!.facets,
+    length: frame.length[numbering.edge ? numbering.edge[first + edge]! : first + edge]!,
   })
   return [wall((vertex + n - 1) % n), wall(vertex)]
 }

@@ -1,7 +1,10 @@
 import * as z from 'zod'
 import { findingSchema } from '../findings/schema.ts'
 import { vertexLoopsSchema } from '../geometry/schema.ts'
+import { headMotionSchema } from '../head/schema.ts'
+import { cornerMoveNames, evaluatedPassSchema, passChoicesSchema } from '../passes/schema.ts'
 import { datumSchema, wallSchema } from '../walls/schema.ts'
+import { pieceWayOutSchema } from '../way-out/schema.ts'
 
 /** The front door's request and answer: mm, degrees from vertical, positive outward. */
 
@@ -15,6 +18,7 @@ export const jetSchema = z.strictObject({
 export const headLimitsSchema = z.strictObject({
   mechanicalLimit: z.number().gt(0).max(90).describe('degrees from vertical, never passed'),
   workingLimit: z.number().gt(0).max(90).nullable().optional().describe('degrees, approved by an engineer'),
+  motion: headMotionSchema.optional().describe('axes, travel and speeds; left out, they are not looked at'),
 })
 
 export const evaluationRequestSchema = z.strictObject({
@@ -24,6 +28,7 @@ export const evaluationRequestSchema = z.strictObject({
   walls: z.array(wallSchema).max(50_000).describe('unnamed edges are square'),
   jet: jetSchema.partial().optional(),
   head: headLimitsSchema.optional(),
+  passes: passChoicesSchema.optional().describe('what a person has settled about the way of the jet'),
 })
 
 const vertexOut = z.strictObject({ x: z.number(), y: z.number(), bulge: z.number().optional() })
@@ -50,6 +55,11 @@ export const evaluatedCornerSchema = z.strictObject({
     .nullable()
     .describe('largest angle of the seam from vertical, degrees; null at a step'),
   jetTilt: z.number().nullable().describe('the same for the jet, taper tilted away'),
+  move: z
+    .enum(cornerMoveNames)
+    .nullable()
+    .describe('how the freeing pass goes round it; null where there are no passes'),
+  offers: z.array(z.enum(cornerMoveNames)).describe('the ways round that work there'),
 })
 
 export const evaluatedContourSchema = z.strictObject({
@@ -84,6 +94,14 @@ export const evaluationSchema = z.strictObject({
     })
     .nullable()
     .describe('the largest jet tilt anywhere, and where'),
+  passes: z
+    .array(evaluatedPassSchema)
+    .nullable()
+    .describe('in the order of cutting; null without a kerf or where the walls are not sound'),
+  wayOut: z
+    .array(pieceWayOutSchema)
+    .nullable()
+    .describe('the part, then each slug; null where the walls are not sound'),
   findings: z.array(findingSchema),
 })
 

@@ -3,6 +3,9 @@ import type { Columns } from './columns.ts'
 import { contourVertices, soundContours } from './contours.ts'
 import { cornerKind, interiorAngle, slopeDegrees } from './corner-columns.ts'
 import { findingsOf } from './findings.ts'
+import { jetWayOf, movesIn, nameOfMove, type JetWay } from './jet-way.ts'
+import { passViews, wayOutViews } from './way-views.ts'
+import type { CornerMove } from '../passes/types.ts'
 import type { EvaluatedCorner, EvaluatedEdge, Evaluation } from './schema.ts'
 
 /**
@@ -13,10 +16,13 @@ export function evaluationOf(columns: Columns): Evaluation {
   const { read, range, volume, neededTilt } = columns
   const event = range?.event ?? null
   const edges = once(() => edgesOf(columns))
-  const corners = once(() => cornersOf(columns))
+  const corners = once(() => cornersOf(columns, way()))
   const contours = once(() => (range ? soundContours(read.body, range) : []))
   const contourViews = once(() => contours().map(contourVertices))
-  const findings = once(() => findingsOf(columns, contours))
+  const way = once(() => jetWayOf(read))
+  const findings = once(() => findingsOf(columns, contours, way()))
+  const passes = once(() => passViewsOf(way()))
+  const ways = once(() => waysViewOf(way()))
   return {
     get edges() {
       return edges()
@@ -36,10 +42,24 @@ export function evaluationOf(columns: Columns): Evaluation {
     },
     volume,
     neededTilt,
+    get passes() {
+      return passes()
+    },
+    get wayOut() {
+      return ways()
+    },
     get findings() {
       return findings()
     },
   }
+}
+
+function passViewsOf(way: JetWay | null) {
+  return way?.cut ? passViews(way.cut.passes) : null
+}
+
+function waysViewOf(way: JetWay | null) {
+  return way ? wayOutViews(way.ways) : null
 }
 
 function once<T>(make: () => T): () => T {
@@ -67,7 +87,8 @@ function edgesOf({ read, edges }: Columns): EvaluatedEdge[] {
 }
 
 /** Every corner in the caller's order. */
-function cornersOf({ read, corners }: Columns): EvaluatedCorner[] {
+function cornersOf({ read, corners }: Columns, way: JetWay | null): EvaluatedCorner[] {
+  const moves = way?.cut?.passes
   const { numbering, frame } = read
   return Array.from({ length: frame.count }, (_, c) => {
     const g = numbering.corner ? numbering.corner[c]! : c
@@ -78,6 +99,8 @@ function cornersOf({ read, corners }: Columns): EvaluatedCorner[] {
       interiorAngle: degrees(interiorAngle(frame, g)),
       seamTilt: slopeDegrees(corners.seam[g]!),
       jetTilt: slopeDegrees(corners.jet[g]!),
+      move: moves ? nameOfMove[moves.cornerMoves[g] as CornerMove] : null,
+      offers: moves ? movesIn(moves.cornerOffers[g]!) : [],
     }
   })
 }
