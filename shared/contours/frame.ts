@@ -165,7 +165,7 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
     hasSpikes,
     allSegments,
   }
-  return assemble(body, table, levels, drawn)
+  return new CompiledFrame(body, table, levels, drawn)
 }
 
 /**
@@ -173,7 +173,8 @@ function compile(body: Body, outline: Outline, table: WallTable): Frame {
  * All columns that do not tell walls are shared.
  */
 export function frameWithWalls(frame: Frame, body: Body, table: WallTable): Frame {
-  const rewalled = assemble(body, table, frame.levels, drawings.get(frame)!)
+  if (!(frame instanceof CompiledFrame)) throw new Error('frames are compiled here alone')
+  const rewalled = new CompiledFrame(body, table, frame.levels, frame.drawn)
   frames.set(body, rewalled)
   return rewalled
 }
@@ -192,63 +193,104 @@ interface Drawn {
   readonly allSegments: () => readonly Segment[]
 }
 
-const drawings = new WeakMap<Frame, Drawn>()
+/**
+ * A class only so that the columns few ask for can be made late without slowing down all the others: accessors on
+ * a plain object would turn it into a dictionary.
+ */
+class CompiledFrame implements Frame {
+  readonly body: Body
+  readonly outline: Outline
+  readonly table: WallTable
+  readonly levels: readonly number[]
+  readonly near: number
+  readonly count: number
+  readonly loopStart: Int32Array
+  readonly loopOf: Int32Array
+  readonly edgeOf: Int32Array
+  readonly previous: Int32Array
+  readonly next: Int32Array
+  readonly arc: Uint8Array
+  readonly cx: Float64Array
+  readonly cy: Float64Array
+  readonly radius: Float64Array
+  readonly sweep: Float64Array
+  readonly px: Float64Array
+  readonly py: Float64Array
+  readonly ux: Float64Array
+  readonly uy: Float64Array
+  readonly length: Float64Array
+  readonly turnSin: Float64Array
+  readonly turnCos: Float64Array
+  readonly mode: Uint8Array
+  readonly branches: ReadonlyMap<number, Branch>
+  readonly hasArcs: boolean
+  readonly hasSteps: boolean
+  readonly hasSpikes: boolean
+  readonly drawn: Drawn
+  private lateTurn: Float64Array | null = null
+  private lateMitres: Mitres | null = null
 
-function assemble(body: Body, table: WallTable, levels: readonly number[], drawn: Drawn): Frame {
-  const { outline, corners, previous } = drawn
-  let turn: Float64Array | null = null
-  let known: Mitres | null = null
-  const mitres = () => (known ??= mitresOf(outline, previous, corners))
-  const frame: Frame = {
-    body,
-    outline,
-    table,
-    levels,
-    near: drawn.near,
-    count: outline.count,
-    loopStart: outline.loopStart,
-    loopOf: drawn.loopOf,
-    edgeOf: drawn.edgeOf,
-    previous,
-    next: outline.next,
-    get segments() {
-      return drawn.allSegments()
-    },
-    arc: outline.arc,
-    cx: outline.cx,
-    cy: outline.cy,
-    radius: outline.radius,
-    sweep: outline.sweep,
-    px: outline.x,
-    py: outline.y,
-    ux: corners.ux,
-    uy: corners.uy,
-    length: corners.length,
-    turnSin: corners.turnSin,
-    turnCos: corners.turnCos,
-    get turn() {
-      return (turn ??= corners.turnSin.map((sin, g) => Math.atan2(sin, corners.turnCos[g]!)))
-    },
-    mode: corners.mode,
-    get mx() {
-      return mitres().mx
-    },
-    get my() {
-      return mitres().my
-    },
-    get kx() {
-      return mitres().kx
-    },
-    get ky() {
-      return mitres().ky
-    },
-    branches: drawn.branches,
-    hasArcs: outline.hasArcs,
-    hasSteps: drawn.hasSteps,
-    hasSpikes: drawn.hasSpikes,
+  constructor(body: Body, table: WallTable, levels: readonly number[], drawn: Drawn) {
+    const { outline, corners } = drawn
+    this.body = body
+    this.outline = outline
+    this.table = table
+    this.levels = levels
+    this.near = drawn.near
+    this.count = outline.count
+    this.loopStart = outline.loopStart
+    this.loopOf = drawn.loopOf
+    this.edgeOf = drawn.edgeOf
+    this.previous = drawn.previous
+    this.next = outline.next
+    this.arc = outline.arc
+    this.cx = outline.cx
+    this.cy = outline.cy
+    this.radius = outline.radius
+    this.sweep = outline.sweep
+    this.px = outline.x
+    this.py = outline.y
+    this.ux = corners.ux
+    this.uy = corners.uy
+    this.length = corners.length
+    this.turnSin = corners.turnSin
+    this.turnCos = corners.turnCos
+    this.mode = corners.mode
+    this.branches = drawn.branches
+    this.hasArcs = outline.hasArcs
+    this.hasSteps = drawn.hasSteps
+    this.hasSpikes = drawn.hasSpikes
+    this.drawn = drawn
   }
-  drawings.set(frame, drawn)
-  return frame
+
+  get segments(): readonly Segment[] {
+    return this.drawn.allSegments()
+  }
+
+  get turn(): Float64Array {
+    const { turnSin, turnCos } = this
+    return (this.lateTurn ??= turnSin.map((sin, g) => Math.atan2(sin, turnCos[g]!)))
+  }
+
+  get mx(): Float64Array {
+    return this.mitres.mx
+  }
+
+  get my(): Float64Array {
+    return this.mitres.my
+  }
+
+  get kx(): Float64Array {
+    return this.mitres.kx
+  }
+
+  get ky(): Float64Array {
+    return this.mitres.ky
+  }
+
+  private get mitres(): Mitres {
+    return (this.lateMitres ??= mitresOf(this.outline, this.previous, this.drawn.corners))
+  }
 }
 
 type Corners = {
