@@ -33,6 +33,12 @@ const FLATTEST_START = Math.PI / 6
 /** Corners and edges looked at, the best first. */
 const MOST_CANDIDATES = 8
 
+/**
+ * Scores nearer than this part of themselves are equal, so that a start does not depend on how the drawing lies:
+ * turning a drawing changes them by some 1e-15, a difference worth having by far more.
+ */
+const TIE = 1e-9
+
 /** Lengths to try, from wished to least, mm. */
 export function leadLengths(kerf: number, wished: number | undefined): readonly number[] {
   const most = wished ?? WISHED_KERFS * kerf
@@ -87,9 +93,10 @@ function bestOf({ frame, gone }: Level, loop: number, score: (g: number) => numb
   for (let g = frame.loopStart[loop]!; g < frame.loopStart[loop + 1]!; g++) {
     if (gone[g]) continue
     const own = score(g)
-    if (!(own > (scores[MOST_CANDIDATES - 1] ?? 0))) continue
+    const better = own * (1 - TIE)
+    if (!(better > (scores[MOST_CANDIDATES - 1] ?? 0))) continue
     let place = scores.length
-    while (place > 0 && scores[place - 1]! < own) place--
+    while (place > 0 && scores[place - 1]! < better) place--
     best.splice(place, 0, g)
     scores.splice(place, 0, own)
     if (best.length > MOST_CANDIDATES) {
