@@ -3,8 +3,10 @@ import type { CornerRef } from '../walls/types.ts'
 import { degrees } from '../units/angle.ts'
 import { formatAngle, formatNumber } from '../units/format.ts'
 import { cureCorner, type CornerWalls } from './corner-cure.ts'
+import { blendCure } from '../seams/blend-cure.ts'
+import { firstRise } from '../walls/reachability.ts'
 import { limitPassed, strictestLimit, type EdgeWall, type Limits } from './place.ts'
-import type { Finding } from './schema.ts'
+import type { Cure, Finding } from './schema.ts'
 
 /** Findings about one corner. */
 
@@ -49,7 +51,30 @@ export function smoothStep(corner: CornerRef, before: EdgeWall, after: EdgeWall)
   }
 }
 
-function stepCure(before: EdgeWall, after: EdgeWall) {
+/** The longer wall blends, where its length is known and a jet could still cut it; otherwise one wall takes the other's tilt. */
+function stepCure(before: EdgeWall, after: EdgeWall): Cure {
+  return blendedCure(before, after) ?? likeCure(before, after)
+}
+
+function blendedCure(before: EdgeWall, after: EdgeWall): Cure | null {
+  if (before.length === undefined || after.length === undefined) return null
+  const cure = blendCure({ ...before, length: before.length }, { ...after, length: after.length })
+  if (!cure) return null
+  const { facet, tilt, endTilt } = cure
+  const wall = cure.change === 'before' ? before : after
+  const facets = wall.facets.map(({ depth, ...tilts }, i) => ({
+    depth,
+    ...(i === facet ? { tilt, endTilt } : tilts),
+  }))
+  if (firstRise(facets) >= 0) return null
+  const which = facets.length > 1 ? `facet ${facet + 1} of ${edgeName(wall)}` : edgeName(wall)
+  return {
+    message: `Blend ${which} from ${formatAngle(tilt, { sign: true })} at its start to ${formatAngle(endTilt, { sign: true })} at its end, or give both edges the same prep.`,
+    set: { edges: [{ loop: wall.loop, edge: wall.edge }], facet, tilt, endTilt },
+  }
+}
+
+function likeCure(before: EdgeWall, after: EdgeWall): Cure {
   const message = `Give ${edgeName(before)} and ${edgeName(after)} the same prep.`
   const [one, two] = [before.facets[0], after.facets[0]]
   if (!one || !two || before.facets.length > 1 || after.facets.length > 1) return { message }

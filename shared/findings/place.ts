@@ -12,6 +12,8 @@ export interface FacetDegrees {
 /** An edge and its wall, from the top face down. */
 export interface EdgeWall extends EdgeRef {
   readonly facets: readonly FacetDegrees[]
+  /** Length of the edge in the drawing, mm, where it matters. */
+  readonly length?: number
 }
 
 export interface Limits {

@@ -43,12 +43,16 @@ export const findingSeverities = ['stop', 'warning', 'note'] as const
 
 export const cureSchema = z.strictObject({
   message: z.string(),
-  /** One number that is one click: the tilt to give to one facet of these edges. */
+  /** What is one click: the tilt to give to one facet of these edges. */
   set: z
     .strictObject({
       edges: z.array(z.strictObject({ loop: z.int(), edge: z.int() })),
       facet: z.int().describe('index of the facet, from the top'),
       tilt: z.number().describe('degrees from vertical, positive outward; rounded to the safe side'),
+      endTilt: z
+        .number()
+        .optional()
+        .describe("the tilt at the edge's end, where the wall is to blend; else it does not"),
       most: z.number().optional().describe('the largest tilt allowed there, unrounded'),
     })
     .optional(),

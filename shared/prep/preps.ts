@@ -205,19 +205,34 @@ export function wallsForThickness(walls: readonly WallSpec[], thickness: number)
   return moved.every((wall) => wall !== null) ? moved : null
 }
 
-/** A finding's one-click cure: another tilt for one facet of some edges; edges without a wall count as square. */
+/**
+ * A finding's one-click cure: another tilt for one facet of some edges, or with `endTilt` a blend; without it the facet
+ * keeps no blend. Edges without a wall count as square.
+ */
 export function applyTilt(
   walls: readonly WallSpec[],
-  set: { readonly edges: readonly EdgeRef[]; readonly facet: number; readonly tilt: number },
+  set: {
+    readonly edges: readonly EdgeRef[]
+    readonly facet: number
+    readonly tilt: number
+    readonly endTilt?: number | undefined
+  },
   thickness: number,
 ): WallSpec[] {
   const byEdge = new Map(walls.map((wall) => [edgeKey(wall), wall]))
   return set.edges.reduce<WallSpec[]>(
     (current, edge) => {
       const own = byEdge.get(edgeKey(edge))?.facets ?? [{ depth: thickness, tilt: 0 }]
-      const facets = own.map((facet, i) => (i === set.facet ? { ...facet, tilt: set.tilt } : facet))
+      const facets = own.map((facet, i) => (i === set.facet ? tilted(facet.depth, set) : facet))
       return applyPrep(current, [edge], facets)
     },
     [...walls],
   )
+}
+
+function tilted(
+  depth: number,
+  { tilt, endTilt }: { readonly tilt: number; readonly endTilt?: number | undefined },
+): FacetSpec {
+  return endTilt === undefined || endTilt === tilt ? { depth, tilt } : { depth, tilt, endTilt }
 }

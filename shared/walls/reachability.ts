@@ -6,12 +6,17 @@
  * Turning the plate over reverses the facets and their signs, and the rule is the same read backward: what the
  * through-going jet cannot cut from one face it cannot cut from the other (derived, and worked out anew below).
  * Only cuts that stop inside the plate could do more; `partDepth` says which ones, for whoever has such a process.
+ *
+ * Where a wall blends, reach goes evenly from one end of the edge to the other, and so does every figure here: what
+ * holds at both ends holds between them, and the most is at one of them.
  */
 
-/** A facet as every stage writes it. Depth in mm; tilt in radians, positive outward with depth. */
+/** A facet as every stage writes it. Depth in mm; tilts in radians, positive outward with depth. */
 interface FacetLine {
   readonly depth: number
   readonly tilt: number
+  /** At the edge's end, where the wall blends. */
+  readonly endTilt?: number | undefined
 }
 
 export type Reachability =
@@ -42,7 +47,9 @@ export function reachability(facets: readonly FacetLine[]): Reachability {
   const fromBottom: number[] = []
   let intoPart = 0
   facets.forEach((_, i) => {
-    const { above, below } = entryOf(facets, i)
+    const entries = endsOf(facets).map((section) => entryOf(section, i))
+    const above = Math.max(...entries.map((entry) => entry.above))
+    const below = Math.max(...entries.map((entry) => entry.below))
     intoPart = Math.max(intoPart, above, below)
     // A facet that is clear on both sides is cut with the first set-up.
     if (above === 0) fromTop.push(i)
@@ -58,20 +65,35 @@ export function reachability(facets: readonly FacetLine[]): Reachability {
   }
 }
 
-/** The same wall with the plate turned over about an axis along the edge: reversed order, reversed signs. */
+/** The wall as it stands at either end of its edge; one section where it does not blend. */
+function endsOf(facets: readonly FacetLine[]): readonly (readonly FacetLine[])[] {
+  if (facets.every(({ endTilt }) => endTilt === undefined)) return [facets]
+  return [facets, facets.map(({ depth, tilt, endTilt = tilt }) => ({ depth, tilt: endTilt }))]
+}
+
+/**
+ * The same wall with the plate turned over about an axis along the edge: reversed order, reversed signs. The edge is
+ * then travelled the other way, so that a blend's ends change places.
+ */
 export function turnedOver(facets: readonly FacetLine[]): FacetLine[] {
   const thickness = facets.at(-1)?.depth ?? 0
   return facets
-    .map(({ tilt }, i) => ({ depth: thickness - (facets[i - 1]?.depth ?? 0), tilt: -tilt }))
+    .map(({ tilt, endTilt }, i) => {
+      const depth = thickness - (facets[i - 1]?.depth ?? 0)
+      return endTilt === undefined ? { depth, tilt: -tilt } : { depth, tilt: -endTilt, endTilt: -tilt }
+    })
     .reverse()
 }
 
 /**
- * The first facet that leans further out than the one above it, −1 when tilt never increases with depth. Equal tilts
- * are one straight wall. Any unit of angle will do.
+ * The first facet that leans further out than the one above it at either end of the edge, −1 when tilt never increases
+ * with depth. Equal tilts are one straight wall. Any unit of angle will do.
  */
 export function firstRise(facets: readonly FacetLine[]): number {
-  return facets.findIndex(({ tilt }, i) => i > 0 && tilt > (facets[i - 1]?.tilt ?? tilt))
+  return facets.findIndex(({ tilt, endTilt = tilt }, i) => {
+    const above = facets[i - 1]
+    return above !== undefined && (tilt > above.tilt || endTilt > (above.endTilt ?? above.tilt))
+  })
 }
 
 /**

@@ -8,7 +8,7 @@ export function withCures(content: SaveSetup, cures: readonly Cure[]): SaveSetup
     const tilted =
       set === undefined
         ? before
-        : withFacets(before, set.edges, (facets) => withTilt(facets, set.facet, set.tilt))
+        : withFacets(before, set.edges, (facets) => withTilt(facets, set.facet, set.tilt, set.endTilt))
     return standoff === undefined ? tilted : { ...tilted, jet: { ...tilted.jet, standoff } }
   }, content)
 }

@@ -67,17 +67,25 @@ function wallsFrom(index: ReadonlyMap<string, Facets>): WallSpec[] {
 }
 
 export function isSquare(facets: Facets): boolean {
-  return facets.every(({ tilt }) => tilt === 0)
+  return facets.every(({ tilt, endTilt = tilt }) => tilt === 0 && endTilt === 0)
 }
 
 export function sameFacets(a: Facets, b: Facets): boolean {
   return (
-    a.length === b.length && a.every((facet, i) => facet.depth === b[i]!.depth && facet.tilt === b[i]!.tilt)
+    a.length === b.length &&
+    a.every(({ depth, tilt, endTilt = tilt }, i) => {
+      const other = b[i]!
+      return depth === other.depth && tilt === other.tilt && endTilt === (other.endTilt ?? other.tilt)
+    })
   )
 }
 
-export function withTilt(facets: Facets, facet: number, tilt: number): Facets {
-  return facets.map((each, i) => (i === facet ? { ...each, tilt } : each))
+/** One facet at another tilt, along the whole edge; with `endTilt` it blends from the one into the other. */
+export function withTilt(facets: Facets, facet: number, tilt: number, endTilt = tilt): Facets {
+  return facets.map(({ depth, ...tilts }, i) => {
+    if (i !== facet) return { depth, ...tilts }
+    return endTilt === tilt ? { depth, tilt } : { depth, tilt, endTilt }
+  })
 }
 
 /** Heights of the facets, from the top. */
