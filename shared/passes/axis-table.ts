@@ -23,12 +23,16 @@ export interface FacetFigures {
   readonly tilt: Float64Array
   readonly tan: Float64Array
   readonly sec: Float64Array
+  readonly sin: Float64Array
   /** How far the facet, prolonged to the top face, stands outside the drawing's outline, mm. */
   readonly wall: Float64Array
   /** The same of the jet's axis. */
   readonly axis: Float64Array
-  /** Outward slope of the jet that is square to the edge. */
+  /** Outward slope of the jet that is square to the edge, and 1 more than its square. */
   readonly slope: Float64Array
+  readonly square: Float64Array
+  /** cos² of the tilt less sin² of the taper. */
+  readonly narrow: Float64Array
 }
 
 export function axisTable(body: Body, table: WallTable, jet: Jet): AxisTable {
@@ -70,9 +74,12 @@ function figuresOf(body: Body, walls: readonly Wall[], firstFacet: Int32Array, j
     tilt: numbers(),
     tan: numbers(),
     sec: numbers(),
+    sin: numbers(),
     wall: numbers(),
     axis: numbers(),
     slope: numbers(),
+    square: numbers(),
+    narrow: numbers(),
   }
   let f = 0
   for (const given of walls) {
@@ -83,9 +90,12 @@ function figuresOf(body: Body, walls: readonly Wall[], firstFacet: Int32Array, j
       out.tilt[f] = tilt
       out.tan[f] = Math.tan(tilt)
       out.sec[f] = 1 / Math.cos(tilt)
+      out.sin[f] = Math.sin(tilt)
       out.wall[f] = reachAt(wall, top) - top * out.tan[f]! - datum
       out.axis[f] = out.wall[f]! + axisOffset(jet.kerf, tilt, jet.taper)
       out.slope[f] = sideSlope(tilt, jet.taper, 0)
+      out.square[f] = 1 + out.slope[f]! * out.slope[f]!
+      out.narrow[f] = Math.cos(tilt) ** 2 - Math.sin(jet.taper) ** 2
       top = depth
       f++
     }

@@ -1,7 +1,6 @@
-import { radiusAt } from '../contours/frame.ts'
 import type { Point } from '../geometry/types.ts'
 import type { JetLine } from './jet-at.ts'
-import { edgeAt, visitEdgesNear, type Room } from './room.ts'
+import { edgeAt, edgesNear, radiusOf, type Box, type Room } from './room.ts'
 import type { Jet } from './types.ts'
 
 /**
@@ -17,6 +16,21 @@ const ARC_PIECE = Math.PI / 24
 /** Share of the jet's own width that may go lost to rounding before two walls that just touch the jet count as hit. */
 const TOUCH = 1e-6
 
+/** A question: the move's ends at the top face, the first with the slope of both, and what it asks of the walls. */
+interface Question {
+  readonly from: JetLine
+  readonly to: Point
+  readonly jet: Jet
+  readonly margin: number
+  /** Length of the jet per mm of depth. */
+  readonly length: number
+}
+
+/** Half the jet's width across a level plane at a depth, along its lean, where it is widest. */
+function halfAt({ jet, length }: Question, depth: number): number {
+  return (jet.kerf / 2 - depth * length * Math.tan(jet.taper)) * length
+}
+
 /**
  * Distance is asked against jet half-width plus `margin`, mm, the jet narrowing down each band by its taper.
  * `from` and `to` lie at the top face and share the slope of `from`; walls of edges in `own` are left out.
@@ -30,54 +44,74 @@ export function moveIsClear(
   own: readonly number[],
 ): boolean {
   const thickness = room.depths.at(-1)!
-  const length = Math.sqrt(1 + from.p * from.p + from.q * from.q)
-  const half = (depth: number) => (jet.kerf / 2 - depth * length * Math.tan(jet.taper)) * length
-  const widest = Math.max(half(0), half(thickness)) + margin
-  const [dx, dy] = [from.p * thickness, from.q * thickness]
-  return visitEdgesNear(
-    room,
-    Math.min(from.x, to.x, from.x + dx, to.x + dx) - widest,
-    Math.min(from.y, to.y, from.y + dy, to.y + dy) - widest,
-    Math.max(from.x, to.x, from.x + dx, to.x + dx) + widest,
-    Math.max(from.y, to.y, from.y + dy, to.y + dy) + widest,
-    (g) => own.includes(g) || wallIsClear(room, g, from, to, half, margin),
-  )
+  const asked = { from, to, jet, margin, length: Math.sqrt(1 + from.p * from.p + from.q * from.q) }
+  const widest = Math.max(halfAt(asked, 0), halfAt(asked, thickness)) + margin
+  const dx = from.p * thickness
+  const dy = from.q * thickness
+  const box = {
+    minX: Math.min(from.x, to.x) + Math.min(0, dx) - widest,
+    minY: Math.min(from.y, to.y) + Math.min(0, dy) - widest,
+    maxX: Math.max(from.x, to.x) + Math.max(0, dx) + widest,
+    maxY: Math.max(from.y, to.y) + Math.max(0, dy) + widest,
+  }
+  for (const g of edgesNear(room, box)) {
+    if (own.includes(g)) continue
+    for (let k = 1; k < room.depths.length; k++) if (!wallIsClear(room, g, k, asked, box)) return false
+  }
+  return true
 }
 
 /** Pieces into which a band is cut where the jet narrows, so that each asks for little more than it needs. */
 const TAPER_PIECES = 12
 
-function wallIsClear(
-  room: Room,
-  g: number,
-  from: JetLine,
-  to: Point,
-  half: (depth: number) => number,
-  margin: number,
+/** One wall, from the depth of index k − 1 to that of index k. */
+function wallIsClear(room: Room, g: number, k: number, asked: Question, box: Box): boolean {
+  const { frame, depths } = room
+  const [above, below] = [depths[k - 1]!, depths[k]!]
+  const wall = bandOf(room, g, k)
+  if (!wall.arc && passesBy(wall, box)) return true
+  const chords = wall.arc ? Math.ceil(Math.abs(frame.sweep[g]!) / ARC_PIECE) + 1 : 1
+  const pad = Math.max(radiusOf(room, g, k - 1), radiusOf(room, g, k)) * (1 - Math.cos(ARC_PIECE / 2))
+  // First as if the jet kept its greatest width: mostly that is clear already.
+  if (bandIsClear(wall, chords, 1, above, below, pad, asked)) return true
+  return asked.jet.taper !== 0 && bandIsClear(wall, chords, TAPER_PIECES, above, below, pad, asked)
+}
+
+/** Whether a line's corners, which go evenly, all stay on one side of a box. */
+function passesBy({ above: a, below: b }: WallBand, box: Box): boolean {
+  return (
+    Math.max(a[0]!, a[2]!, b[0]!, b[2]!) < box.minX ||
+    Math.min(a[0]!, a[2]!, b[0]!, b[2]!) > box.maxX ||
+    Math.max(a[1]!, a[3]!, b[1]!, b[3]!) < box.minY ||
+    Math.min(a[1]!, a[3]!, b[1]!, b[3]!) > box.maxY
+  )
+}
+
+function bandIsClear(
+  wall: WallBand,
+  chords: number,
+  slices: number,
+  above: number,
+  below: number,
+  pad: number,
+  asked: Question,
 ): boolean {
-  const { frame, depths, offsets } = room
-  const chords = frame.arc[g] ? Math.ceil(Math.abs(frame.sweep[g]!) / ARC_PIECE) + 1 : 1
-  for (let k = 1; k < depths.length; k++) {
-    const [above, below] = [depths[k - 1]!, depths[k]!]
-    const wall = bandOf(room, g, k)
-    const widest = Math.max(
-      radiusAt(frame, g, offsets[k - 1]!.start[g]!),
-      radiusAt(frame, g, offsets[k]!.start[g]!),
-    )
-    const pad = widest * (1 - Math.cos(ARC_PIECE / 2))
-    const slices = half(above) === half(below) ? 1 : TAPER_PIECES
-    for (let s = 0; s < slices; s++) {
-      const [a, b] = [s / slices, (s + 1) / slices]
-      const deepA = above + a * (below - above)
-      const deepB = above + b * (below - above)
-      const need = Math.min(half(deepA), half(deepB)) * (1 - TOUCH) + margin + pad
-      for (let c = 0; c < chords; c++) {
-        pointOnWall(wall, a, c / chords, from, deepA, 0)
-        pointOnWall(wall, a, (c + 1) / chords, from, deepA, 2)
-        pointOnWall(wall, b, (c + 1) / chords, from, deepB, 4)
-        pointOnWall(wall, b, c / chords, from, deepB, 6)
-        if (distanceToPatch(from.x, from.y, to.x, to.y, patch) < need) return false
-      }
+  const { from, to, margin } = asked
+  for (let s = 0; s < slices; s++) {
+    const [a, b] = [s / slices, (s + 1) / slices]
+    const deepA = above + a * (below - above)
+    const deepB = above + b * (below - above)
+    const widest =
+      slices === 1
+        ? Math.max(halfAt(asked, deepA), halfAt(asked, deepB))
+        : Math.min(halfAt(asked, deepA), halfAt(asked, deepB))
+    const need = widest * (1 - TOUCH) + margin + pad
+    for (let c = 0; c < chords; c++) {
+      pointOnWall(wall, a, c / chords, from, deepA, 0)
+      pointOnWall(wall, a, (c + 1) / chords, from, deepA, 2)
+      pointOnWall(wall, b, (c + 1) / chords, from, deepB, 4)
+      pointOnWall(wall, b, c / chords, from, deepB, 6)
+      if (distanceToPatch(from.x, from.y, to.x, to.y, patch) < need) return false
     }
   }
   return true
@@ -94,7 +128,7 @@ interface WallBand {
 }
 
 function bandOf(room: Room, g: number, k: number): WallBand {
-  const { frame, offsets } = room
+  const { frame } = room
   const [cx, cy] = [frame.cx[g]!, frame.cy[g]!]
   const arc = frame.arc[g] === 1
   const ends = [k - 1, k].map((level) => {
@@ -109,7 +143,7 @@ function bandOf(room: Room, g: number, k: number): WallBand {
       )
     const sweep =
       frame.sweep[g]! - turned(frame.px[g]!, frame.py[g]!, start) + turned(frame.px[h]!, frame.py[h]!, end)
-    return [radiusAt(frame, g, offsets[level]!.start[g]!), heading, sweep]
+    return [radiusOf(room, g, level), heading, sweep]
   })
   const [above, below] = [ends[0]!, ends[1]!]
   if (arc) below[1]! -= 2 * Math.PI * Math.round((below[1]! - above[1]!) / (2 * Math.PI))
@@ -127,19 +161,25 @@ function pointOnWall(
   depth: number,
   at: number,
 ): void {
-  const mix = (i: number) => wall.above[i]! + part * (wall.below[i]! - wall.above[i]!)
+  const a = mixed(wall, 0, part)
+  const b = mixed(wall, 1, part)
+  const c = mixed(wall, 2, part)
   let x: number
   let y: number
   if (wall.arc) {
-    const heading = mix(1) + along * mix(2)
-    x = wall.cx + mix(0) * Math.cos(heading)
-    y = wall.cy + mix(0) * Math.sin(heading)
+    const heading = b + along * c
+    x = wall.cx + a * Math.cos(heading)
+    y = wall.cy + a * Math.sin(heading)
   } else {
-    x = mix(0) + along * (mix(2) - mix(0))
-    y = mix(1) + along * (mix(3) - mix(1))
+    x = a + along * (c - a)
+    y = b + along * (mixed(wall, 3, part) - b)
   }
   patch[at] = x - depth * p
   patch[at + 1] = y - depth * q
+}
+
+function mixed({ above, below }: WallBand, i: number, part: number): number {
+  return above[i]! + part * (below[i]! - above[i]!)
 }
 
 /** Distance of a stretch from a four-cornered patch, 0 where they share a point. */
@@ -166,8 +206,6 @@ function squareBetween(
   qx: number,
   qy: number,
 ): number {
-  const side = (ux: number, uy: number, vx: number, vy: number, x: number, y: number) =>
-    (vx - ux) * (y - uy) - (vy - uy) * (x - ux)
   if (
     side(ax, ay, bx, by, px, py) * side(ax, ay, bx, by, qx, qy) < 0 &&
     side(px, py, qx, qy, ax, ay) * side(px, py, qx, qy, bx, by) < 0
@@ -180,6 +218,11 @@ function squareBetween(
     pointToStretch(ax, ay, px, py, qx, qy),
     pointToStretch(bx, by, px, py, qx, qy),
   )
+}
+
+/** Twice the area of the triangle u, v, (x, y): positive where that point lies to the left of u → v. */
+function side(ux: number, uy: number, vx: number, vy: number, x: number, y: number): number {
+  return (vx - ux) * (y - uy) - (vy - uy) * (x - ux)
 }
 
 function pointToStretch(x: number, y: number, ax: number, ay: number, bx: number, by: number): number {

@@ -2,7 +2,7 @@ import { makeEdgePlan, planEdge, type EdgePlan } from './edge-plan.ts'
 import { turnAt, type Level } from './level.ts'
 import type { Start } from './starts.ts'
 import { bendAlong, putSquare, writeEnd, writeStart } from './stations.ts'
-import { writeStraightEdge } from './straight-edge.ts'
+import { writeStraightEdges } from './straight-edge.ts'
 import { CornerMove, MoveKind } from './types.ts'
 import { finish, put, type PathWriter } from './writer.ts'
 
@@ -22,8 +22,13 @@ export function writeClosedPass(
   const writeEdges = (from: number) => {
     let g = from
     do {
+      const { at } = w
+      g = writeStraightEdges(w, level, move, g, g0, firstStation)
+      if (g === g0 && w.at > at) return
       if (firstStation) firstStation[g] = w.at
-      writeEdge(w, level, move, g, plan)
+      planEdge(level, move, g, plan)
+      writeStart(w, level, plan)
+      writeEnd(w, level, plan)
       g = level.next[g]!
     } while (g !== g0)
   }
@@ -64,14 +69,6 @@ export function writeClosedPass(
       return
     }
   }
-}
-
-/** All stations of an edge, at the writer's place: from its corner up to the next edge's first. */
-export function writeEdge(w: PathWriter, level: Level, move: Uint8Array, g: number, plan: EdgePlan): void {
-  if (writeStraightEdge(w, level, move, g)) return
-  planEdge(level, move, g, plan)
-  writeStart(w, level, plan)
-  writeEnd(w, level, plan)
 }
 
 /** A station off the wall by `out`, its jet parallel to the one on the wall, so that it is clear of it at every depth. */

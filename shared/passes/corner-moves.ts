@@ -72,7 +72,7 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
   for (const g of frame.branches.keys()) {
     if (move[g] !== CornerMove.lean || gone[g]) continue
     const value = seamBend(level, g)
-    if (value > BEND_ALLOWED) problems.push({ ...cornerProblem(level, 'bent-seam', g), value })
+    if (value > BEND_TOLD) problems.push({ ...cornerProblem(level, 'bent-seam', g), value })
   }
   for (let g = 0; g < count; g++) {
     const cut = member[g] || member[previous[g]!]

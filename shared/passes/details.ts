@@ -35,6 +35,7 @@ export function followable(level: Level): Followed {
     turnSin: level.turnSin.slice(),
     turnCos: level.turnCos.slice(),
     mode: level.mode.slice(),
+    gaps: true,
   }
   const { previous, next, gone } = own
   const left: number[] = []
@@ -106,11 +107,22 @@ function lostProblem({ frame, axis, figure, level }: Level, loop: number): PassP
     : { code: 'detail-finer-than-jet', loop, at: -1, level, value: null }
 }
 
+/** The next edge that has not left; the way there is cut short for those who ask after. */
+function nextLeft({ gone, next }: Level, g: number): number {
+  let h = g
+  while (gone[h]) h = next[h]!
+  for (let at = g; gone[at]; ) {
+    const after = next[at]!
+    next[at] = h
+    at = after
+  }
+  return h
+}
+
 /** What the passing jet leaves on an edge that was left out: from its middle at the top face to the corner of the axis there, less the axis' own distance. */
 function leftAt(level: Level, g: number): number {
-  const { frame, axis, figure, gone } = level
-  let h = level.next[g]!
-  while (gone[h]) h = level.next[h]!
+  const { frame, axis, figure } = level
+  const h = nextLeft(level, g)
   const e = frame.next[g]!
   const wall = axis.start.wall[figure[g]!]!
   let x: number

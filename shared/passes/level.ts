@@ -19,10 +19,14 @@ export interface Level {
   readonly figure: Int32Array
   readonly facet: Uint8Array
   readonly member: Uint8Array
+  /** Every edge has the level's facet for its own. */
+  readonly whole: boolean
   /** Neighbours on the way of the axis: those of the frame, less the edges that the jet is too thick for. */
   readonly previous: Int32Array
   readonly next: Int32Array
   readonly gone: Uint8Array
+  /** Whether any edge is gone. */
+  readonly gaps: boolean
   /** Sine and cosine of the turn, and the kind, of every corner: the frame's, but where edges are gone. */
   readonly turnSin: Float64Array
   readonly turnCos: Float64Array
@@ -37,31 +41,18 @@ export interface Level {
 }
 
 export function makeLevel(frame: Frame, axis: AxisTable, jet: Jet, level: number): Level {
-  const { count, table } = frame
-  const figure = new Int32Array(count)
-  const facet = new Uint8Array(count)
-  const member = new Uint8Array(count)
-  for (let g = 0; g < count; g++) {
-    const row = table.rowOfEdge[g]!
-    const first = axis.firstFacet[row]!
-    const last = axis.firstFacet[row + 1]! - 1 - first
-    const wished = axis.root[row]! + level
-    facet[g] = wished < 0 ? 0 : wished > last ? last : wished
-    member[g] = facet[g] === wished ? 1 : 0
-    figure[g] = first + facet[g]!
-  }
+  const { count } = frame
   const numbers = () => new Float64Array(count)
   const out: Level = {
     frame,
     axis,
     jet,
     level,
-    figure,
-    facet,
-    member,
+    ...facetsOf(frame, axis, level),
     previous: frame.previous,
     next: frame.next,
     gone: new Uint8Array(count),
+    gaps: false,
     turnSin: frame.turnSin,
     turnCos: frame.turnCos,
     mode: frame.mode,
@@ -71,64 +62,101 @@ export function makeLevel(frame: Frame, axis: AxisTable, jet: Jet, level: number
     q: numbers(),
     unfit: new Uint8Array(count),
   }
-  fillCornerJets(out, 0, count)
+  fillCornerJets(out)
   return out
 }
 
-/** Works out the seam jets of corners from ≤ g < to, in place. */
-export function fillCornerJets(level: Level, from: number, to: number): void {
-  const { frame, axis, figure, previous, mode, x, y, p, q, unfit } = level
-  const { px, py, mx, my, kx, ky } = frame
+function facetsOf(
+  { count, table }: Frame,
+  axis: AxisTable,
+  level: number,
+): Pick<Level, 'figure' | 'facet' | 'member' | 'whole'> {
+  const { rowOfEdge } = table
+  const { firstFacet, root } = axis
+  const facet = new Uint8Array(count)
+  const member = new Uint8Array(count)
+  // Walls of one facet each: a figure per row, and every edge has level 0 for its own.
+  if (level === 0 && firstFacet.at(-1) === root.length) {
+    return { figure: rowOfEdge, facet, member: member.fill(1), whole: true }
+  }
+  const figure = new Int32Array(count)
+  let whole = true
+  for (let g = 0; g < count; g++) {
+    const row = rowOfEdge[g]!
+    const first = firstFacet[row]!
+    const last = firstFacet[row + 1]! - 1 - first
+    const wished = root[row]! + level
+    const own = wished < 0 ? 0 : wished > last ? last : wished
+    facet[g] = own
+    figure[g] = first + own
+    if (own === wished) member[g] = 1
+    else whole = false
+  }
+  return { figure, facet, member, whole }
+}
+
+/**
+ * Works out the seam jets of all corners, in place. Between two lines a figure that is a along the outward normal
+ * n₁ of the edge before and b along that of the edge after has (b − a)/sin φ + a·tan(φ/2) along the edge before.
+ */
+function fillCornerJets(level: Level): void {
+  const { frame, axis, figure, mode, x, y, p, q, unfit } = level
+  const { px, py, ux, uy, previous, turnSin, turnCos, count } = frame
   const sin = Math.sin(level.jet.taper)
-  const { start, end } = axis
-  for (let g = from; g < to; g++) {
-    const before = figure[previous[g]!]!
+  const { axis: axisBefore, tan: tanBefore, sec: secBefore } = axis.end
+  const { axis: axisAfter, tan: tanAfter, sec: secAfter } = axis.start
+  for (let g = 0; g < count; g++) {
+    if (mode[g] !== CornerMode.mitre) {
+      fillUnlikeCorner(level, g)
+      continue
+    }
+    const e = previous[g]!
+    const before = figure[e]!
     const after = figure[g]!
-    const o1 = end.axis[before]!
-    unfit[g] = 0
-    switch (mode[g]) {
-      case CornerMode.mitre: {
-        const o = start.axis[after]! - o1
-        x[g] = px[g]! + o1 * mx[g]! + o * kx[g]!
-        y[g] = py[g]! + o1 * my[g]! + o * ky[g]!
-        const w1 = end.tan[before]!
-        const w = start.tan[after]! - w1
-        const ax = w1 * mx[g]! + w * kx[g]!
-        const ay = w1 * my[g]! + w * ky[g]!
-        if (sin === 0) {
-          p[g] = ax
-          q[g] = ay
-          break
-        }
-        const c1 = end.sec[before]!
-        const c = start.sec[after]! - c1
-        const bx = c1 * mx[g]! + c * kx[g]!
-        const by = c1 * my[g]! + c * ky[g]!
-        const length = seamLength(sin, ax, ay, bx, by)
-        if (Number.isNaN(length)) {
-          unfit[g] = 1
-          p[g] = ax
-          q[g] = ay
-          break
-        }
-        p[g] = ax - sin * length * bx
-        q[g] = ay - sin * length * by
-        break
-      }
-      case CornerMode.branch:
-        branchJet(level, g, before, after)
-        break
-      case CornerMode.spike:
-        x[g] = px[g]!
-        y[g] = py[g]!
-        p[g] = q[g] = 0
-        unfit[g] = 1
-        break
-      default: // smooth and step: square to the edge before
-        x[g] = px[g]! + o1 * mx[g]!
-        y[g] = py[g]! + o1 * my[g]!
-        p[g] = end.slope[before]! * mx[g]!
-        q[g] = end.slope[before]! * my[g]!
+    const vx = ux[e]!
+    const vy = uy[e]!
+    const perSin = 1 / turnSin[g]!
+    const half = turnSin[g]! / (1 + turnCos[g]!)
+    const o = axisBefore[before]!
+    const ahead = (axisAfter[after]! - o) * perSin + o * half
+    x[g] = px[g]! + o * vy + ahead * vx
+    y[g] = py[g]! + ahead * vy - o * vx
+    let out = tanBefore[before]!
+    let along = (tanAfter[after]! - out) * perSin + out * half
+    if (sin !== 0) {
+      const c = secBefore[before]!
+      const d = (secAfter[after]! - c) * perSin + c * half
+      const length = seamLength(sin, out, along, c, d)
+      if (length === length) {
+        out -= sin * length * c
+        along -= sin * length * d
+      } else unfit[g] = 1
+    }
+    p[g] = out * vy + along * vx
+    q[g] = along * vy - out * vx
+  }
+}
+
+function fillUnlikeCorner(level: Level, g: number): void {
+  const { frame, axis, figure, x, y, p, q } = level
+  const before = figure[frame.previous[g]!]!
+  switch (level.mode[g]) {
+    case CornerMode.branch:
+      branchJet(level, g, before, figure[g]!)
+      return
+    case CornerMode.spike:
+      x[g] = frame.px[g]!
+      y[g] = frame.py[g]!
+      level.unfit[g] = 1
+      return
+    default: {
+      // Smooth and step: square to the edge before.
+      const top = cornerAt(frame, g, axis.end.axis[before]!, axis.end.axis[before]!)
+      const unit = cornerShift(frame, g, 1, 1)
+      x[g] = top.x
+      y[g] = top.y
+      p[g] = axis.end.slope[before]! * unit.x
+      q[g] = axis.end.slope[before]! * unit.y
     }
   }
 }
@@ -172,11 +200,21 @@ export function wallCornerAt(level: Level, g: number, depth: number): Point {
 
 /** Corner g when the edge before it stands at offset o1 and its own at o2; at a step, the end of the edge before. */
 export function cornerAt(frame: Frame, g: number, o1: number, o2: number): Point {
-  const branch = frame.branches.get(g)
-  if (branch) return branchPoint(branch, o1, o2)
-  const o = frame.mode[g] === CornerMode.mitre ? o2 - o1 : 0
-  return {
-    x: frame.px[g]! + o1 * frame.mx[g]! + o * frame.kx[g]!,
-    y: frame.py[g]! + o1 * frame.my[g]! + o * frame.ky[g]!,
-  }
+  if (frame.mode[g] === CornerMode.branch) return branchPoint(frame.branches.get(g)!, o1, o2)
+  const { x, y } = cornerShift(frame, g, o1, o2)
+  return { x: frame.px[g]! + x, y: frame.py[g]! + y }
+}
+
+/** By how much a corner that is no branch moves from the drawing. */
+function cornerShift(frame: Frame, g: number, o1: number, o2: number): Point {
+  if (frame.mode[g] === CornerMode.spike) return { x: 0, y: 0 }
+  const e = frame.previous[g]!
+  const sin = frame.turnSin[g]!
+  // Between lines without the frame's mitre vectors, which are only made for those who need them all.
+  if (frame.arc[e] || frame.arc[g]) return { x: o1 * frame.mx[g]!, y: o1 * frame.my[g]! }
+  const unlike = frame.mode[g] === CornerMode.mitre ? (o2 - o1) / sin : 0
+  const ahead = unlike + (o1 * sin) / (1 + frame.turnCos[g]!)
+  const ux = frame.ux[e]!
+  const uy = frame.uy[e]!
+  return { x: o1 * uy + ahead * ux, y: ahead * uy - o1 * ux }
 }

@@ -1,103 +1,136 @@
 import { CornerMode, radiusAt, type Frame } from '../contours/frame.ts'
 import type { Point } from '../geometry/types.ts'
-import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
+import { rowOffsets } from '../walls/wall-table.ts'
 import { cornerAt } from './level.ts'
 
 /**
- * The walls of a body as things that a jet must keep off, ready for many questions. Edges follow each other, so
- * boxes round short runs of them are index enough: a question reads one box per run, and places only the edges
- * of the runs that it meets.
+ * The walls of a body as things that a jet must keep off. Edges follow each other, so boxes round short runs of them,
+ * and boxes round runs of those boxes, are index enough. They are made with the first question.
  */
 export interface Room {
   readonly frame: Frame
-  /** Depths between which no wall changes tilt, with every edge's offset there. */
+  /** Depths between which no wall changes tilt, with the offset of every distinct wall there. */
   readonly depths: readonly number[]
-  readonly offsets: readonly EdgeEnds[]
-  /** minX, minY, maxX, maxY of every run of `RUN` edges over all depths. */
-  readonly boxes: Float64Array
+  readonly offsets: readonly RowOffsets[]
+  boxes: readonly Float64Array[] | null
 }
 
-/** Edges per box. */
-const RUN = 8
+/** Per row of the wall table. */
+interface RowOffsets {
+  readonly start: readonly number[]
+  readonly end: readonly number[]
+}
+
+/** Edges per box, and boxes per box of the next layer, as a power of two. */
+const RUN_BITS = 3
+const RUN = 1 << RUN_BITS
 
 export function roomOf(frame: Frame): Room {
-  const depths = depthsOf(frame)
-  const offsets = depths.map((depth) => {
-    const out = makeEdgeEnds(frame.table)
-    fillOffsets(frame.table, depth, out)
-    return out
+  const { table, levels } = frame
+  const offsets = levels.map((depth): RowOffsets => {
+    const start = rowOffsets(table, table.start, depth)
+    return { start, end: table.blends ? rowOffsets(table, table.end, depth) : start }
   })
+  return { frame, depths: levels, offsets, boxes: null }
+}
+
+/** minX, minY, maxX, maxY of every run of `RUN` edges over all depths, then of every run of those, and so on. */
+function boxesOf({ frame, offsets }: Room): Float64Array[] {
   // The farthest that any wall stands from the drawing, at any depth, and the most that two of them differ by.
   let [least, most] = [0, 0]
   for (const { start, end } of offsets) {
-    for (const column of start === end ? [start] : [start, end]) {
-      for (let g = 0; g < frame.count; g++) {
-        const own = column[g]!
-        if (own < least) least = own
-        if (own > most) most = own
-      }
+    for (const own of start === end ? start : [...start, ...end]) {
+      if (own < least) least = own
+      if (own > most) most = own
     }
   }
-  const boxes = new Float64Array(4 * Math.ceil(frame.count / RUN))
-  for (let b = 0; b < boxes.length / 4; b++) {
-    fillBox(frame, Math.max(most, -least), most - least, offsets, boxes, b)
+  const first = new Float64Array(4 * Math.ceil(frame.count / RUN))
+  for (let b = 0; 4 * b < first.length; b++) {
+    fillBox(frame, Math.max(most, -least), most - least, offsets, first, b)
   }
-  return { frame, depths, offsets, boxes }
-}
-
-/** Told by the distinct walls, so that it does not read every edge. */
-function depthsOf({ table, body }: Frame): number[] {
-  const depths = new Set([0, body.thickness])
-  for (const { facets } of table.walls) {
-    for (const { depth } of facets) if (depth < body.thickness) depths.add(depth)
+  const layers = [first]
+  for (let below = first; below.length > 4 * RUN; ) {
+    const own = new Float64Array(4 * Math.ceil(below.length / 4 / RUN))
+    for (let at = 0; at < own.length; at += 4) {
+      own[at] = own[at + 1] = Infinity
+      own[at + 2] = own[at + 3] = -Infinity
+      for (let b = at * RUN; b < Math.min(below.length, (at + 4) * RUN); b += 4) {
+        own[at] = Math.min(own[at]!, below[b]!)
+        own[at + 1] = Math.min(own[at + 1]!, below[b + 1]!)
+        own[at + 2] = Math.max(own[at + 2]!, below[b + 2]!)
+        own[at + 3] = Math.max(own[at + 3]!, below[b + 3]!)
+      }
+    }
+    layers.push(own)
+    below = own
   }
-  return [...depths].sort((a, b) => a - b)
+  return layers
 }
 
 /**
- * Drawn corners, widened by the farthest that a corner of the run can move: offset times its mitre vector, and the
- * difference of two offsets times the vector for unlike ones. Corners beside arcs are placed at every depth.
+ * Drawn corners, widened by the farthest that a corner of the run can move: offset times its mitre vector, of length
+ * √(2 / (1 + cos φ)), and the difference of two offsets times the vector for unlike ones, of length 1 / |sin φ|.
+ * Corners beside arcs are placed at every depth.
  */
 function fillBox(
   frame: Frame,
   farthest: number,
   unlike: number,
-  offsets: readonly EdgeEnds[],
+  offsets: readonly RowOffsets[],
   boxes: Float64Array,
   b: number,
 ): void {
-  const { px, py, mx, my, kx, ky, arc, mode, next, previous } = frame
-  let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity]
-  let square = 0
-  let unlikeSquare = 0
+  const { px, py, turnSin, turnCos, arc, mode, next } = frame
+  let minX = Infinity
+  let minY = Infinity
+  let maxX = -Infinity
+  let maxY = -Infinity
+  // The sharpest turn of the run, and the one nearest to straight or back of those between unlike walls.
+  let sharpest = 2
+  let flattest = 1
   let pad = 0
-  const include = (x: number, y: number) => {
-    if (x < minX) minX = x
-    if (x > maxX) maxX = x
-    if (y < minY) minY = y
-    if (y > maxY) maxY = y
-  }
-  const corner = (g: number) => {
-    include(px[g]!, py[g]!)
-    square = Math.max(square, mx[g]! * mx[g]! + my[g]! * my[g]!)
-    unlikeSquare = Math.max(unlikeSquare, kx[g]! * kx[g]! + ky[g]! * ky[g]!)
-    if (mode[g] !== CornerMode.branch) return
-    for (const { start, end } of offsets) {
-      const { x, y } = cornerAt(frame, g, end[previous[g]!]!, start[g]!)
-      include(x, y)
+  const last = Math.min(frame.count, (b + 1) * RUN) - 1
+  for (let g = b * RUN; g <= last; g++) {
+    const h = next[g]!
+    // The end of an edge is mostly the start of the next one.
+    for (let k = g; ; k = h) {
+      const x = px[k]!
+      const y = py[k]!
+      if (x < minX) minX = x
+      if (x > maxX) maxX = x
+      if (y < minY) minY = y
+      if (y > maxY) maxY = y
+      if (mode[k] === CornerMode.mitre) {
+        const sin = Math.abs(turnSin[k]!)
+        if (sin < flattest) flattest = sin
+        if (1 + turnCos[k]! < sharpest) sharpest = 1 + turnCos[k]!
+      } else if (mode[k] === CornerMode.branch) {
+        for (let d = 0; d < offsets.length; d++) {
+          const at = cornerAt(frame, k, before(frame, offsets[d]!, k), after(frame, offsets[d]!, k))
+          minX = Math.min(minX, at.x)
+          maxX = Math.max(maxX, at.x)
+          minY = Math.min(minY, at.y)
+          maxY = Math.max(maxY, at.y)
+        }
+      }
+      if (k === h || (h === g + 1 && g < last)) break
     }
+    if (arc[g]) for (const at of offsets) pad = Math.max(pad, bulge(frame, g, after(frame, at, g)))
   }
-  const last = Math.min(frame.count, (b + 1) * RUN)
-  for (let g = b * RUN; g < last; g++) {
-    corner(g)
-    if (next[g] !== g + 1 || g + 1 === last) corner(next[g]!)
-    if (arc[g]) for (const { start } of offsets) pad = Math.max(pad, bulge(frame, g, start[g]!))
-  }
-  pad += farthest * Math.sqrt(square) + unlike * Math.sqrt(unlikeSquare)
+  pad += farthest * Math.sqrt(2 / sharpest) + unlike / flattest
   boxes[4 * b] = minX - pad
   boxes[4 * b + 1] = minY - pad
   boxes[4 * b + 2] = maxX + pad
   boxes[4 * b + 3] = maxY + pad
+}
+
+/** Offset of the edge after a corner, and of the one before it. */
+function after({ table }: Frame, { start }: RowOffsets, corner: number): number {
+  return start[table.rowOfEdge[corner]!]!
+}
+
+function before({ table, previous }: Frame, { end }: RowOffsets, corner: number): number {
+  return end[table.rowOfEdge[previous[corner]!]!]!
 }
 
 /** How far an arc stands off its chord at an offset: its sagitta, or where it turns more than a quarter its whole width. */
@@ -110,27 +143,44 @@ function bulge(frame: Frame, g: number, offset: number): number {
 
 /** Start and end of edge g at the depth of index k. */
 export function edgeAt({ frame, offsets }: Room, g: number, k: number): readonly [Point, Point] {
-  const { start, end } = offsets[k]!
+  const at = offsets[k]!
   const h = frame.next[g]!
+  const own = after(frame, at, g)
   // At a step the edge's own start stands at its own offset.
-  const before = frame.mode[g] === CornerMode.step ? start[g]! : end[frame.previous[g]!]!
-  return [cornerAt(frame, g, before, start[g]!), cornerAt(frame, h, end[g]!, start[h]!)]
+  const prior = frame.mode[g] === CornerMode.step ? own : before(frame, at, g)
+  return [cornerAt(frame, g, prior, own), cornerAt(frame, h, before(frame, at, h), after(frame, at, h))]
 }
 
-/** Calls `visit` for every edge whose run's box shares a point with the given one, until it says false. */
-export function visitEdgesNear(
-  room: Room,
-  minX: number,
-  minY: number,
-  maxX: number,
-  maxY: number,
-  visit: (g: number) => boolean,
-): boolean {
-  const { boxes, frame } = room
-  for (let b = 0; b < boxes.length; b += 4) {
-    if (boxes[b]! > maxX || boxes[b + 2]! < minX || boxes[b + 1]! > maxY || boxes[b + 3]! < minY) continue
-    const last = Math.min(frame.count, (b / 4 + 1) * RUN)
-    for (let g = (b / 4) * RUN; g < last; g++) if (!visit(g)) return false
+/** Radius of arc g at the depth of index k. */
+export function radiusOf({ frame, offsets }: Room, g: number, k: number): number {
+  return radiusAt(frame, g, after(frame, offsets[k]!, g))
+}
+
+/** A box to be looked into. */
+export interface Box {
+  readonly minX: number
+  readonly minY: number
+  readonly maxX: number
+  readonly maxY: number
+}
+
+/** Edges whose run's box shares a point with the given one, by number. */
+export function edgesNear(room: Room, box: Box): number[] {
+  room.boxes ??= boxesOf(room)
+  const found: number[] = []
+  collect(room, room.boxes.length - 1, 0, room.boxes.at(-1)!.length / 4, box, found)
+  return found
+}
+
+function collect(room: Room, layer: number, first: number, end: number, box: Box, found: number[]): void {
+  const boxes = room.boxes![layer]!
+  const size = layer > 0 ? room.boxes![layer - 1]!.length / 4 : room.frame.count
+  for (let b = first; b < end; b++) {
+    const at = 4 * b
+    if (boxes[at]! > box.maxX || boxes[at + 2]! < box.minX) continue
+    if (boxes[at + 1]! > box.maxY || boxes[at + 3]! < box.minY) continue
+    const last = Math.min(size, (b + 1) << RUN_BITS)
+    if (layer > 0) collect(room, layer - 1, b << RUN_BITS, last, box, found)
+    else for (let g = b << RUN_BITS; g < last; g++) found.push(g)
   }
-  return true
 }
