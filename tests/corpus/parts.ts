@@ -2,6 +2,7 @@ import type { EvaluationRequest } from '../../shared/evaluate/schema.ts'
 import type { Vertex } from '../../shared/geometry/types.ts'
 import type { FacetSpec } from '../../shared/walls/schema.ts'
 import { circle, rectangle, regular, seeded, star } from '../support/plates.ts'
+import { rounded, slot, spiky, toothed } from './shapes.ts'
 
 /** Named parts that once were, or might be, hard. Every fault that is found becomes a part here. */
 
@@ -45,41 +46,6 @@ function part(
 }
 
 const tilted = (thickness: number, tilt: number): readonly FacetSpec[] => [{ depth: thickness, tilt }]
-
-/** A rectangle with round corners, counter-clockwise from the start of its lower side. */
-function rounded(width: number, height: number, radius: number): Vertex[] {
-  const bulge = Math.tan(Math.PI / 8)
-  return [
-    { x: radius, y: 0 },
-    { x: width - radius, y: 0, bulge },
-    { x: width, y: radius },
-    { x: width, y: height - radius, bulge },
-    { x: width - radius, y: height },
-    { x: radius, y: height, bulge },
-    { x: 0, y: height - radius },
-    { x: 0, y: radius, bulge },
-  ]
-}
-
-/** A slot as a hole: two straight sides and two half circles, clockwise. */
-function slot(x: number, y: number, length: number, width: number): Vertex[] {
-  const r = width / 2
-  return [
-    { x, y: y - r },
-    { x, y: y + r, bulge: 0 },
-    { x: x + length, y: y + r, bulge: -1 },
-    { x: x + length, y: y - r },
-  ].map((vertex, i) => (i === 0 ? { ...vertex, bulge: -1 } : vertex))
-}
-
-/** Teeth round a circle: four corners each. */
-function toothed(teeth: number, inner: number, outer: number): Vertex[] {
-  return Array.from({ length: 4 * teeth }, (_, i) => {
-    const radius = i % 4 === 1 || i % 4 === 2 ? outer : inner
-    const heading = (2 * Math.PI * (i + 0.15 * (i % 2))) / (4 * teeth)
-    return { x: radius * Math.cos(heading), y: radius * Math.sin(heading) }
-  })
-}
 
 const doubleBevel: readonly FacetSpec[] = [
   { depth: 8, tilt: 35 },
@@ -242,5 +208,98 @@ export const corpus: readonly CorpusPart[] = [
     [rectangle(0, 0, 160, 110)],
     (_, edge) => (edge % 2 === 0 ? doubleBevel : null),
     { datum: 'root' },
+  ),
+  part(
+    'thin-web-holds',
+    'a web of half a millimetre between two holes that just stays',
+    20,
+    [rectangle(0, 0, 140, 70), circle(45, 35, 18, true), circle(83.25, 35, 18, true)],
+    (loop) => (loop === 0 ? null : tilted(20, loop === 1 ? -3 : -2)),
+  ),
+  part(
+    'slot-across',
+    'slots with walls that lean toward each other and away',
+    25,
+    [rectangle(0, 0, 150, 90), slot(35, 30, 70, 14), slot(35, 60, 70, 9)],
+    (loop) => (loop === 1 ? tilted(25, 12) : loop === 2 ? tilted(25, -12) : tilted(25, 5)),
+  ),
+  part(
+    'arcs-at-a-hair',
+    'lines and arcs that meet at a tenth of a degree, tilts unlike',
+    10,
+    [
+      rounded(160, 100, 30).map((v, i) =>
+        v.bulge === undefined ? v : { ...v, bulge: Math.tan(Math.PI / 8 + (i < 4 ? 4e-4 : -4e-4)) },
+      ),
+    ],
+    (_, edge) => tilted(10, edge % 2 === 0 ? 8 : 8.01),
+    { head: { mechanicalLimit: 88, workingLimit: null } },
+  ),
+  part(
+    'tiny-notch',
+    'edges of 0.01 mm inside a notch that the jet cannot follow',
+    8,
+    [
+      [
+        { x: 0, y: 0 },
+        { x: 60, y: 0 },
+        { x: 60, y: 40 },
+        { x: 30.01, y: 40 },
+        { x: 30.01, y: 39.99 },
+        { x: 30, y: 39.99 },
+        { x: 30, y: 40 },
+        { x: 0, y: 40 },
+      ],
+    ],
+    () => tilted(8, 10),
+  ),
+  part('spiky-star', 'sharp points and deep hollows, all inward', 5, [spiky(9, 30, 80)], () =>
+    tilted(5, -12),
+  ),
+  part(
+    'ring-double-bevel',
+    'a narrow ring with a double bevel inside and out',
+    24,
+    [circle(0, 0, 80), circle(0, 0, 46, true)],
+    () => [
+      { depth: 10, tilt: 30 },
+      { depth: 13, tilt: 0 },
+      { depth: 24, tilt: -30 },
+    ],
+  ),
+  part(
+    'tiny-hole-tilted',
+    'a hole of 4 mm whose wall leans: the jet has hardly room',
+    6,
+    [rectangle(0, 0, 60, 40), circle(20, 20, 2, true), circle(42, 20, 2, true)],
+    (loop) => (loop === 0 ? null : tilted(6, loop === 1 ? 8 : -20)),
+  ),
+  part(
+    'slides-out',
+    'walls that lean the same way: the part slides out along them',
+    20,
+    [rectangle(0, 0, 100, 70), circle(50, 35, 15, true)],
+    (loop, edge) => (loop > 0 ? null : edge === 0 ? tilted(20, 30) : edge === 2 ? tilted(20, -35) : null),
+  ),
+  part('trapped', 'double bevel all round: no single way leads out', 16, [rectangle(0, 0, 90, 60)], () => [
+    { depth: 7, tilt: 35 },
+    { depth: 9, tilt: 0 },
+    { depth: 16, tilt: -35 },
+  ]),
+  part(
+    'sheet-0.5-steep',
+    'half a millimetre with walls to 80°',
+    0.5,
+    [regular(5, 40)],
+    (_, edge) => tilted(0.5, edge % 2 === 0 ? 80 : 78),
+    { head: { mechanicalLimit: 90, workingLimit: null } },
+  ),
+  part(
+    'block-450-slow',
+    'the thickest, cut so slowly that the kerf does not close',
+    450,
+    [rectangle(0, 0, 500, 400), circle(250, 200, 90, true)],
+    (loop, edge) => tilted(450, loop === 1 ? 2 : edge % 2 === 0 ? 6 : -5),
+    { jet: { ...JET, taper: -0.02 } },
   ),
 ]

@@ -39,7 +39,12 @@ export function pictureOf(part: CorpusPart): string {
     glass ?? '',
     text({ x: 40, y: top }, walls(sections.length, shown.length), { class: 'head' }),
     ...shown.map((section, i) =>
-      drawSection(scene, section, 24 + (i % perRow) * PANEL.width, top + 12 + Math.floor(i / perRow) * PANEL.height),
+      drawSection(
+        scene,
+        section,
+        24 + (i % perRow) * PANEL.width,
+        top + 12 + Math.floor(i / perRow) * PANEL.height,
+      ),
     ),
   ]
   const size = { width: PAGE, height: figure(bottom), viewBox: `0 0 ${PAGE} ${figure(bottom)}` }
@@ -64,7 +69,8 @@ function viewOf(box: Box): { readonly view: View; readonly height: number } {
 function finestPlace({ range, interference, body }: Scene): { readonly at: Point; readonly what: string } {
   if (range.event) return { at: range.event.at, what: range.event.kind }
   const bite = interference.bites[0]
-  if (bite) return { at: bite, what: `bite of ${bite.bite.toPrecision(2)} mm at depth ${bite.depth.toPrecision(3)}` }
+  if (bite)
+    return { at: bite, what: `bite of ${bite.bite.toPrecision(2)} mm at depth ${bite.depth.toPrecision(3)}` }
   let least = Infinity
   let at: Point = { x: 0, y: 0 }
   for (const { from, to } of body.loops.flat()) {
@@ -80,7 +86,9 @@ function glassOf(scene: Scene, view: View, left: number, top: number): string | 
   const across = Math.min(8 * scene.jet.kerf, GLASS / view.scale / 3)
   const middle = onPage(view, at)
   const side = across * view.scale
-  const box = [middle.x - side / 2, middle.y - side / 2, side, side].map((value) => figure(value, 6)).join(' ')
+  const box = [middle.x - side / 2, middle.y - side / 2, side, side]
+    .map((value) => figure(value, 6))
+    .join(' ')
   const square = { x: left, y: figure(top), width: GLASS, height: GLASS }
   return [
     element('rect', { ...square, fill: colours.paper }),
@@ -98,12 +106,18 @@ function wordsOf(scene: Scene): { readonly svg: string; readonly height: number 
     if (mark) rows.push(mark)
     y += WORDS.step
   }
-  const sample = (name: string) => line({ x: WORDS.left, y: y - 5 }, { x: WORDS.left + 34, y: y - 5 }, { class: name })
+  const sample = (name: string) =>
+    line({ x: WORDS.left, y: y - 5 }, { x: WORDS.left + 34, y: y - 5 }, { class: name })
   const { part, body, passes, interference, evaluation, jet } = scene
   row(`${body.thickness} mm thick, drawing = ${body.datum}`, 'head')
   row(`kerf ${round(jet.kerf)} mm, taper ${round(jet.taper / DEGREE)}°`)
-  if (part.request.head) row(`head to ${part.request.head.mechanicalLimit}°, needs ${round(evaluation.neededTilt?.tilt ?? 0)}°`)
-  row(evaluation.volume === null ? 'no volume: ends above the bottom' : `${round(evaluation.volume / 1000)} cm³`)
+  if (part.request.head)
+    row(`head to ${part.request.head.mechanicalLimit}°, needs ${round(evaluation.neededTilt?.tilt ?? 0)}°`)
+  row(
+    evaluation.volume === null
+      ? 'no volume: ends above the bottom'
+      : `${round(evaluation.volume / 1000)} cm³`,
+  )
   y += 8
   row('contour at the top', undefined, sample('contour top'))
   row('contour at the bottom', undefined, sample('contour bottom'))
@@ -112,7 +126,11 @@ function wordsOf(scene: Scene): { readonly svg: string; readonly height: number 
   row('jet’s axis at the top face', undefined, sample('axis-top'))
   row('jet’s axis at the bottom', undefined, sample('axis-bottom'))
   row('lead', undefined, sample('axis-top lead'))
-  row('pierce, with the pass’ number', undefined, circle({ x: WORDS.left + 17, y: y - 5 }, 3.5, { class: 'pierce' }))
+  row(
+    'pierce, with the pass’ number',
+    undefined,
+    circle({ x: WORDS.left + 17, y: y - 5 }, 3.5, { class: 'pierce' }),
+  )
   y += 8
   const count = (kind: number) => Array.from(passes.cornerMoves).filter((move) => move === kind).length
   for (const [kind, name] of [
@@ -141,7 +159,8 @@ function wordsOf(scene: Scene): { readonly svg: string; readonly height: number 
   for (const { code } of evaluation.findings) tell(code)
   for (const { code } of passes.problems) tell(`passes: ${code}`)
   for (const [code, times] of told) row(`${code}${times > 1 ? ` × ${times}` : ''}`, 'alarm')
-  if (interference.pairs > 0) row(`bites: ${interference.pairs}, worst ${interference.bites[0]!.bite.toPrecision(3)} mm`, 'alarm')
+  if (interference.pairs > 0)
+    row(`bites: ${interference.pairs}, worst ${interference.bites[0]!.bite.toPrecision(3)} mm`, 'alarm')
   if (interference.undecided > 0) row(`undecided: ${interference.undecided}`, 'alarm')
   return { svg: rows.join('\n'), height: y - PLAN.top }
 }

@@ -51,7 +51,8 @@ export function planLines(scene: Scene, view: View): string {
 
 function contourLines({ contours, body, range }: Scene, view: View): string {
   const top = contours[0]
-  const metal = top && top.loops.map((loop) => `M${points(pointsOf(loop).map((p) => onPage(view, p)))}Z`).join('')
+  const metal =
+    top && top.loops.map((loop) => `M${points(pointsOf(loop).map((p) => onPage(view, p)))}Z`).join('')
   const drawn = contours.flatMap(({ depth, loops }) => {
     const face = depth === 0 ? ' top' : depth === body.thickness ? ' bottom' : ''
     const atEvent = range.event && depth === range.event.depth ? ' at-event' : ''
@@ -67,7 +68,11 @@ function contourLines({ contours, body, range }: Scene, view: View): string {
   // The faces last, so that they lie over the levels between.
   const faces = drawn.filter((one) => /class="contour (top|bottom)/.test(one))
   const levels = drawn.filter((one) => !faces.includes(one))
-  return group('contours', [...(metal ? [element('path', { class: 'metal', d: metal })] : []), ...levels, ...faces])
+  return group('contours', [
+    ...(metal ? [element('path', { class: 'metal', d: metal })] : []),
+    ...levels,
+    ...faces,
+  ])
 }
 
 /** From the corner at the top to the corner at the bottom, through every depth that is drawn. */
@@ -124,7 +129,12 @@ function passLines({ passes: { path, passes }, body, jet }: Scene, view: View): 
 
 /** Marks and words, which keep their size: corner moves, pierce points with the pass' number, events, bites, ways out. */
 export function planMarks(scene: Scene, view: View): string {
-  return [cornerMarks(scene, view), wayMarks(scene, view), pierceMarks(scene, view), alarms(scene, view)].join('\n')
+  return [
+    cornerMarks(scene, view),
+    wayMarks(scene, view),
+    pierceMarks(scene, view),
+    alarms(scene, view),
+  ].join('\n')
 }
 
 /** Half the size of a corner's mark. */
@@ -171,11 +181,15 @@ function polygon(corners: readonly Point[]): string {
   return element('polygon', { class: 'move', points: points(corners) })
 }
 
-function pierceMarks({ passes: { path, passes } }: Scene, view: View): string {
+function pierceMarks({ passes: { path, passes }, body }: Scene, view: View): string {
   const taken: Point[] = []
   const spots = passes.map(({ first }) => onPage(view, { x: path.x[first]!, y: path.y[first]! }))
   const drawn = spots.flatMap((at, i) => {
-    const label = freeSpot(at, [...spots, ...taken])
+    const { first } = passes[i]!
+    const lead = jetsAlong(path, first).flatMap((jet) =>
+      [0, body.thickness].map((d) => onPage(view, axisAt(jet, d))),
+    )
+    const label = freeSpot(at, [...spots, ...taken, ...lead])
     taken.push(label)
     return [
       circle(at, 3.5, { class: 'pierce' }),
@@ -200,26 +214,73 @@ function freeSpot(at: Point, taken: readonly Point[]): Point {
   return best
 }
 
-function wayMarks({ body, waysOut }: Scene, view: View): string {
-  const pieces = [waysOut.part, ...waysOut.slugs]
-  const drawn = pieces.flatMap(({ loop, withinKerf: { verdict, direction } }) => {
-    const corners = body.loops[loop]!.map(({ from }) => onPage(view, from))
-    const middle = {
-      x: corners.reduce((sum, { x }) => sum + x, 0) / corners.length,
-      y: corners.reduce((sum, { y }) => sum + y, 0) / corners.length,
-    }
-    // The part's word stands low, so that a hole in its middle keeps its own.
-    const at = loop === 0 ? { x: middle.x, y: Math.max(...corners.map(({ y }) => y)) - 34 } : middle
-    const word = verdict === 'slides' ? `slides ${direction!.z > 0 ? 'up' : 'down'}` : verdict
-    const label = text(at, loop === 0 ? `part ${word}` : word, { class: 'way-word', 'text-anchor': 'middle' })
+function wayMarks(scene: Scene, view: View): string {
+  const { body, waysOut, contours } = scene
+  const top = contours[0]?.loops.map((loop) => pointsOf(loop).map((point) => onPage(view, point)))
+  const drawn = [waysOut.part, ...waysOut.slugs].flatMap(({ loop, withinKerf: { verdict, direction } }) => {
+    // The part's word stands where there is most metal, a slug's in the middle of its hole.
+    const spot = top && roomiest(loop === 0 ? top : [top[loop]!])
+    if (!spot) return []
+    // Where a hole is too small for its word, the word stands below it.
+    const at =
+      loop === 0 || spot.room > WORD_ROOM ? spot.at : { x: spot.at.x, y: lowestOf(scene, view, loop) + 16 }
+    const way = verdict === 'slides' ? `slides ${direction!.z > 0 ? 'up' : 'down'}` : verdict
+    const word = body.loops.length > 1 ? `${loop === 0 ? 'part' : `slug ${loop}`} ${way}` : way
+    const label = text({ x: at.x, y: at.y + 5 }, word, { class: 'way-word', 'text-anchor': 'middle' })
     return direction && direction.heading !== null ? [label, arrow(at, direction.heading)] : [label]
   })
   return group('ways-out', drawn)
 }
 
+/** Half the room that a word needs. */
+const WORD_ROOM = 52
+
+/** The lowest place on the page that a loop comes to at any depth. */
+function lowestOf({ contours }: Scene, view: View, loop: number): number {
+  return Math.max(
+    ...contours.flatMap(({ loops }) => pointsOf(loops[loop]!).map((point) => onPage(view, point).y)),
+  )
+}
+
+/** Places looked at in each direction; odd, so that the middle is one. */
+const GRID = 29
+
+/** The place inside closed runs of points that is farthest from all of them; of nearly equal ones the one nearest the middle. */
+function roomiest(runs: readonly (readonly Point[])[]): { readonly at: Point; readonly room: number } | null {
+  const all = runs.flat()
+  const [xs, ys] = [all.map(({ x }) => x), all.map(({ y }) => y)]
+  const [left, top] = [Math.min(...xs), Math.min(...ys)]
+  const [width, height] = [Math.max(...xs) - left, Math.max(...ys) - top]
+  let best: { readonly at: Point; readonly room: number } | null = null
+  let most = -Infinity
+  for (let k = 0; k < GRID * GRID; k++) {
+    const at = {
+      x: left + ((k % GRID) + 0.5) * (width / GRID),
+      y: top + (Math.floor(k / GRID) + 0.5) * (height / GRID),
+    }
+    let inside = false
+    let room = Infinity
+    for (const run of runs) {
+      for (let i = 1; i < run.length; i++) {
+        const [a, b] = [run[i - 1]!, run[i]!]
+        if (a.y > at.y !== b.y > at.y && at.x < a.x + ((at.y - a.y) / (b.y - a.y)) * (b.x - a.x))
+          inside = !inside
+        const square = (b.x - a.x) ** 2 + (b.y - a.y) ** 2
+        const along = square > 0 ? ((at.x - a.x) * (b.x - a.x) + (at.y - a.y) * (b.y - a.y)) / square : 0
+        const part = Math.min(1, Math.max(0, along))
+        room = Math.min(room, Math.hypot(a.x + part * (b.x - a.x) - at.x, a.y + part * (b.y - a.y) - at.y))
+      }
+    }
+    const score = room - 0.05 * Math.hypot(at.x - left - width / 2, at.y - top - height / 2)
+    if (inside && score > most) [best, most] = [{ at, room }, score]
+  }
+  return best
+}
+
+/** Beside the word, away from it. */
 function arrow({ x, y }: Point, heading: number): string {
   const [c, s] = [Math.cos(heading), -Math.sin(heading)]
-  const tail = { x, y: y + 18 }
+  const tail = { x: x + 78 * c, y: y + 20 * s }
   const tip = { x: tail.x + 46 * c, y: tail.y + 46 * s }
   const barb = (side: number) => ({ x: tip.x - 11 * c - side * 6 * s, y: tip.y - 11 * s + side * 6 * c })
   return element('polyline', { class: 'way', points: points([tail, tip, barb(1), tip, barb(-1)]) })
@@ -235,7 +296,9 @@ function alarms({ range: { event }, interference }: Scene, view: View): string {
   for (const { x, y } of interference.bites.slice(0, 12)) {
     const at = onPage(view, { x, y })
     for (const side of [1, -1]) {
-      drawn.push(line({ x: at.x - 5, y: at.y - 5 * side }, { x: at.x + 5, y: at.y + 5 * side }, { class: 'bite' }))
+      drawn.push(
+        line({ x: at.x - 5, y: at.y - 5 * side }, { x: at.x + 5, y: at.y + 5 * side }, { class: 'bite' }),
+      )
     }
   }
   return group('alarms', drawn)

@@ -7,7 +7,7 @@ import type { EdgeEnd, Wall } from '../../shared/walls/types.ts'
 import { blends, facetTilt, reachAt } from '../../shared/walls/wall.ts'
 import { DEGREE } from '../support/plates.ts'
 import type { Scene } from './scene.ts'
-import { element, group, line, points, text } from './svg.ts'
+import { element, figure, group, line, points, text } from './svg.ts'
 
 /** A cross-section of every distinct wall, metal on the left, with the jets that cut its facets. */
 
@@ -50,7 +50,10 @@ export function drawSection(scene: Scene, section: Section, left: number, top: n
   const reaches = outlines.flat().map(({ x }) => x)
   const [least, most] = [Math.min(...reaches), Math.max(...reaches)]
   const body0 = Math.max(0.35 * t, 0.25 * (most - least))
-  const scale = Math.min((PANEL.drawing - 40) / t, (PANEL.width - 90) / (most - least + body0 + 2 * scene.jet.kerf))
+  const scale = Math.min(
+    (PANEL.drawing - 40) / t,
+    (PANEL.width - 90) / (most - least + body0 + 2 * scene.jet.kerf),
+  )
   const at = ({ x, y }: Point) => ({
     x: left + 16 + scale * (x - least + body0),
     y: top + 22 - scale * y,
@@ -62,7 +65,9 @@ export function drawSection(scene: Scene, section: Section, left: number, top: n
       class: 'metal',
       points: points([{ x: inner, y: 0 }, ...metal, { x: inner, y: -t }].map(at)),
     }),
-    ...[0, -t].map((y) => line(at({ x: inner, y }), at({ x: metal.find((p) => p.y === y)!.x, y }), { class: 'face' })),
+    ...[0, -t].map((y) =>
+      line(at({ x: inner, y }), at({ x: metal.find((p) => p.y === y)!.x, y }), { class: 'face' }),
+    ),
     ...jetsOf(scene, section, (point) => at(point), scale),
     ...outlines.map((outline, i) =>
       element('polyline', { class: i === 0 ? 'wall' : 'wall blend', points: points(outline.map(at)) }),
@@ -76,7 +81,10 @@ export function drawSection(scene: Scene, section: Section, left: number, top: n
   const label = words.map((word, i) =>
     text({ x: left + 16, y: top + below + i * 18 }, word, { class: i === 0 ? 'head' : 'note' }),
   )
-  return group('section', [...drawn, ...label])
+  // A page of its own cuts off jets that run far to the side.
+  const frame = { x: left, y: top, width: PANEL.width - 16, height: below - 18 }
+  const box = [frame.x, frame.y, frame.width, frame.height].map((value) => figure(value)).join(' ')
+  return group('section', [element('svg', { ...frame, viewBox: box }, drawn.join('\n')), ...label])
 }
 
 function tilts(facet: Wall['facets'][number], ends: readonly EdgeEnd[]): string {
@@ -92,7 +100,12 @@ function shortList(edges: readonly number[]): string {
 }
 
 /** For each facet a jet that cuts it, halfway along its move, square to the edge: body and axis, from the path itself. */
-function jetsOf(scene: Scene, { wall, edges }: Section, at: (point: Point) => Point, scale: number): string[] {
+function jetsOf(
+  scene: Scene,
+  { wall, edges }: Section,
+  at: (point: Point) => Point,
+  scale: number,
+): string[] {
   const { body, jet, passes } = scene
   const { path } = passes
   const t = body.thickness
@@ -123,7 +136,10 @@ function jetsOf(scene: Scene, { wall, edges }: Section, at: (point: Point) => Po
     const lean = Math.atan(slope)
     const [above, below] = [-Math.min(0.12 * t, 20 / scale), t + Math.min(0.12 * t, 14 / scale)]
     const side = (sign: number, depth: number) => ({
-      x: out + sign * axisOffset(jet.kerf, lean - sign * jet.taper, jet.taper) + depth * Math.tan(lean - sign * jet.taper),
+      x:
+        out +
+        sign * axisOffset(jet.kerf, lean - sign * jet.taper, jet.taper) +
+        depth * Math.tan(lean - sign * jet.taper),
       y: -depth,
     })
     return [
@@ -131,7 +147,9 @@ function jetsOf(scene: Scene, { wall, edges }: Section, at: (point: Point) => Po
         class: 'jet',
         points: points([side(-1, above), side(1, above), side(1, below), side(-1, below)].map(at)),
       }),
-      line(at({ x: out + above * slope, y: -above }), at({ x: out + below * slope, y: -below }), { class: 'side' }),
+      line(at({ x: out + above * slope, y: -above }), at({ x: out + below * slope, y: -below }), {
+        class: 'side',
+      }),
     ]
   })
 }

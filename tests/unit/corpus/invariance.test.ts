@@ -9,6 +9,9 @@ import { recorded } from '../../corpus/recorded.ts'
  * was found when the part came in, and how far the answers drift; the bounds may only be tightened.
  */
 
+/** Ten evaluations, some of parts on which the search for bites works hard. */
+const TIMEOUT = 60_000
+
 test('the corpus is not empty, and every part of it is recorded', () => {
   expect(corpus.length).toBeGreaterThanOrEqual(15)
   expect(Object.keys(recorded).sort()).toEqual(corpus.map(({ name }) => name).sort())
@@ -23,11 +26,15 @@ describe.each(corpus)('$name: $why', ({ name, request }) => {
       volume: known.volume === null ? null : expect.closeTo(known.volume, 3),
       event: known.event && { kind: known.event.kind, depth: expect.closeTo(known.event.depth, 8) },
       neededTilt: expect.closeTo(known.neededTilt, 8),
+      passes: known.passes && { count: known.passes.count, length: expect.closeTo(known.passes.length, 4) },
+      wayOut: known.wayOut,
       findings: known.findings,
     })
   })
 
-  test('changes only as it must', () => {
-    expect(worstDrift(request)).toBeLessThanOrEqual(known.drift)
+  test('changes only as it must', { timeout: TIMEOUT }, () => {
+    const { walls, passes } = worstDrift(request)
+    expect(walls).toBeLessThanOrEqual(known.drift.walls)
+    expect(passes).toBeLessThanOrEqual(known.drift.passes)
   })
 })
