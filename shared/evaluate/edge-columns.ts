@@ -35,14 +35,25 @@ export function edgeColumns(read: ReadRequest, range: SoundRange | null, limits:
   const taper = request.jet?.taper ?? 0
   const { thickness } = request.plate
   const figures = preps.list.map((prep) => prepFigures(prep, thickness, taper, limits))
-  const sound = (depth: number) => range !== null && !range.empty && range.from <= depth && depth <= range.to
   if (isPlain(frame)) {
-    const lengths = range ? plainLengths(frame) : []
-    const at = (depth: number, level: number) => (sound(depth) ? lengths.at(level)! : null)
-    return { preps: figures, top: at(0, 0), bottom: at(thickness, -1), lengths }
+    return { preps: figures, ...soundLengths(read, range, range ? plainLengths(frame) : []) }
   }
-  const at = (depth: number) => (sound(depth) ? contourLengths(read, depth) : null)
+  const at = (depth: number) => (isSound(range, depth) ? contourLengths(read, depth) : null)
   return { preps: figures, top: at(0), bottom: at(thickness), lengths: [] }
+}
+
+/** What of the lengths of a plain body at all levels may be told. */
+export function soundLengths(
+  { request }: ReadRequest,
+  range: SoundRange | null,
+  lengths: readonly Float64Array[],
+): Omit<EdgeColumns, 'preps'> {
+  const at = (depth: number, level: number) => (isSound(range, depth) ? lengths.at(level)! : null)
+  return { top: at(0, 0), bottom: at(request.plate.thickness, -1), lengths }
+}
+
+function isSound(range: SoundRange | null, depth: number): boolean {
+  return range !== null && !range.empty && range.from <= depth && depth <= range.to
 }
 
 export function prepFigures(

@@ -33,7 +33,8 @@ export interface JetWay {
 export function jetWayOf(read: ReadRequest): JetWay | null {
   const { body, problems, event, preps, request } = read
   if (problems.length > 0 || event) return null
-  if (preps.list.some(({ wall }) => reachability(wall.facets).kind === 'blocked')) return null
+  const blocked = preps.list.map(({ wall }) => reachability(wall.facets).kind === 'blocked')
+  if (preps.ofEdge.some((prep) => blocked[prep])) return null
   const { kerf, taper = 0, standoff, nozzleDiameter } = request.jet ?? {}
   const ways = wayOut(body, kerf ?? 0)
   if (kerf === undefined) return { cut: null, ways }

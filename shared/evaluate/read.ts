@@ -87,7 +87,8 @@ function bodyTable(
   return tableOf(walls, rowOfEdge, plate)
 }
 
-function lazyBody(
+/** A body whose loops and walls become objects when first asked for. */
+export function lazyBody(
   outline: Outline,
   { walls: rows, rowOfEdge }: WallTable,
   plate: Pick<Body, 'thickness' | 'datum'>,

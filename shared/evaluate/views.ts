@@ -10,17 +10,18 @@ import type { EvaluatedCorner, EvaluatedEdge, Evaluation } from './schema.ts'
 
 /**
  * The answer as its schema has it. What is long is made into objects when it is first read, and kept; to everyone else
- * (JSON, copying, spreading) the properties look like any other.
+ * (JSON, copying, spreading) the properties look like any other. `late`: the columns as they stand when read, for an
+ * editor that changes them in place.
  */
-export function evaluationOf(columns: Columns): Evaluation {
+export function evaluationOf(columns: Columns, late: () => Columns = () => columns): Evaluation {
   const { read, range, volume, neededTilt } = columns
   const event = range?.event ?? null
-  const edges = once(() => edgesOf(columns))
-  const corners = once(() => cornersOf(columns, way()))
-  const contours = once(() => (range ? soundContours(read.body, range) : []))
+  const edges = once(() => edgesOf(late()))
+  const corners = once(() => cornersOf(late(), way()))
+  const contours = once(() => (range ? soundContours(late().read.body, range) : []))
   const contourViews = once(() => contours().map(contourVertices))
-  const way = once(() => jetWayOf(read))
-  const findings = once(() => findingsOf(columns, contours, way()))
+  const way = once(() => jetWayOf(late().read))
+  const findings = once(() => findingsOf(late(), contours, way()))
   const passes = once(() => passViewsOf(way()))
   const ways = once(() => waysViewOf(way()))
   return {

@@ -66,12 +66,8 @@ export function plainMarch(frame: Frame, edges: EdgeOrder, stretch: PlainStretch
   const [x, y, size] = start ? [numbers(), numbers(), numbers()] : [frame.px, frame.py, frame.length]
   const [vx, vy] = [numbers(), numbers()]
   if (start) {
-    for (let g = 0; g < count; g++) moveCorner(frame, g, start.offset, start.slides, x, y)
-    for (let g = 0; g < count; g++) {
-      x[g] = x[g]! + frame.px[g]!
-      y[g] = y[g]! + frame.py[g]!
-      size[g] = frame.length[g]! + start.slides.ahead[frame.next[g]!]! - start.slides.back[g]!
-    }
+    for (let g = 0; g < count; g++) startCorner(frame, g, start, x, y)
+    for (let g = 0; g < count; g++) size[g] = startSize(frame, g, start)
   }
   for (let g = 0; g < count; g++) moveCorner(frame, g, rate, slides, vx, vy)
   const { at, next, advance } = edges
@@ -185,15 +181,35 @@ function offerPoint({ frame, rate, x, y, vx, vy }: PlainMarch, e: number, f: num
 
 /** Works out anew what depends on some corners: they, the edges on both sides, and the boxes round them. */
 export function remarch(march: PlainMarch, corners: readonly number[]): void {
-  const { frame, rate, slides, vx, vy, edges, tree } = march
+  const { frame, rate, slides, start, x, y, vx, vy, size, edges, tree } = march
+  const { chain } = tree
+  const placeOf = (g: number) => (edges.placeOf ? edges.placeOf[g]! : g)
   const places: number[] = []
   for (const g of corners) {
+    const p = frame.previous[g]!
+    const place = placeOf(g)
+    if (start) {
+      startCorner(frame, g, start, x, y)
+      for (const e of [p, g]) size[e] = startSize(frame, e, start)
+      chain.x[place] = x[g]!
+      chain.y[place] = y[g]!
+    }
     moveCorner(frame, g, rate, slides, vx, vy)
-    const place = edges.placeOf ? edges.placeOf[g]! : g
-    const before = edges.placeOf ? edges.placeOf[frame.previous[g]!]! : frame.previous[g]!
-    tree.chain.vx[place] = vx[g]!
-    tree.chain.vy[place] = vy[g]!
-    places.push(place, before)
+    chain.vx[place] = vx[g]!
+    chain.vy[place] = vy[g]!
+    places.push(place, placeOf(p))
   }
   refresh(tree, places)
+}
+
+type Start = NonNullable<PlainStretch['start']>
+
+function startCorner(frame: Frame, g: number, start: Start, x: Float64Array, y: Float64Array): void {
+  moveCorner(frame, g, start.offset, start.slides, x, y)
+  x[g] = x[g]! + frame.px[g]!
+  y[g] = y[g]! + frame.py[g]!
+}
+
+function startSize({ length, next }: Frame, g: number, { slides }: Start): number {
+  return length[g]! + slides.ahead[next[g]!]! - slides.back[g]!
 }
