@@ -1,6 +1,6 @@
 import { branchPoint } from '../contours/branch.ts'
 import { CornerMode } from '../contours/frame.ts'
-import { makeAxisEdge, readAxisEdge } from './axis-edges.ts'
+import { makeAxisEdge, readAxisEdge, type AxisEdge } from './axis-edges.ts'
 import { turnAt, wallCorner, wallCornerAt, type Level } from './level.ts'
 import { CornerMove, LeanRefusal, type PassChoices, type PassLimits, type PassProblem } from './types.ts'
 
@@ -24,6 +24,9 @@ const LIMIT_ROUNDING = 1e-11
  */
 const BEND_ALLOWED = 1e-3
 
+/** A bend is told from here, mm: what a set-up without a word about it promises (a millionth of a millimetre). */
+const BEND_TOLD = 1e-6
+
 /** Past this turn of an arc's prolongation a run out along it would come back to the part, radians: our choice. */
 const WIDEST_ARC_RUN_OUT = Math.PI / 4
 
@@ -32,38 +35,44 @@ const WIDEST_ARC_RUN_OUT = Math.PI / 4
  * pivot. A lean beside an edge that is too short for it gives way, which can shorten no other edge's room.
  */
 export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassChoices): CornerMoves {
-  const { frame, previous, gone, member, mode, turnSin } = level
-  const { count } = frame
+  const { frame, previous, gone, member, mode, turnSin, unfit, p, q } = level
+  const { count, arc } = frame
   const move = new Uint8Array(count)
   const offers = new Uint8Array(count)
   const refusals = new Uint8Array(count)
   const problems: PassProblem[] = []
   const steepest = limits.tilt === null ? Infinity : Math.tan(limits.tilt + LIMIT_ROUNDING) ** 2
+  let stuck = false
   for (let g = 0; g < count; g++) {
-    if (gone[g] || !(member[g] || member[previous[g]!])) continue
-    if (mode[g] === CornerMode.smooth || mode[g] === CornerMode.step) {
-      move[g] = mode[g] === CornerMode.smooth ? CornerMove.none : CornerMove.step
+    const e = previous[g]!
+    if (gone[g] || !(member[g] || member[e])) continue
+    const kind = mode[g]
+    if (kind === CornerMode.smooth || kind === CornerMode.step) {
+      move[g] = kind === CornerMode.smooth ? CornerMove.none : CornerMove.step
       offers[g] = 1 << move[g]!
       refusals[g] = LeanRefusal.noSeam
       continue
     }
-    const steep = level.p[g]! * level.p[g]! + level.q[g]! * level.q[g]!
-    if (mode[g] === CornerMode.spike) refusals[g] = LeanRefusal.noSeam
-    else if (level.unfit[g]) refusals[g] = LeanRefusal.noJet
-    else if (steep > steepest) refusals[g] = LeanRefusal.overLimit
-    else if (turnSin[g]! > 0 && seamBend(level, g) > BEND_ALLOWED) refusals[g] = LeanRefusal.bent
-    else offers[g] = 1 << CornerMove.lean
-    if (turnSin[g]! > 0 && previous[g] === frame.previous[g]) {
-      offers[g]! |= 1 << CornerMove.pivot
-      if (canRunOut(level, g)) offers[g]! |= 1 << CornerMove.runOut
+    const convex = turnSin[g]! > 0
+    let offer = 0
+    if (kind === CornerMode.spike) refusals[g] = LeanRefusal.noSeam
+    else if (unfit[g]) refusals[g] = LeanRefusal.noJet
+    else if (p[g]! * p[g]! + q[g]! * q[g]! > steepest) refusals[g] = LeanRefusal.overLimit
+    else if (kind === CornerMode.branch && convex && seamBend(level, g) > BEND_ALLOWED) {
+      refusals[g] = LeanRefusal.bent
+    } else offer = 1 << CornerMove.lean
+    if (convex && e === frame.previous[g]) {
+      offer |= 1 << CornerMove.pivot
+      if (!(arc[e] || arc[g]) || canRunOut(level, g)) offer |= 1 << CornerMove.runOut
     }
-    const endsRun = member[g] !== member[previous[g]!]
-    move[g] = endsRun && turnSin[g]! > 0 ? CornerMove.runOut : firstOffer(offers[g]!)
+    offers[g] = offer
+    if (offer === 0) stuck = true
+    move[g] = convex && member[g] !== member[e] ? CornerMove.runOut : firstOffer(offer)
   }
   for (const [g, wished] of choices.corners ?? []) {
     if (g >= 0 && g < count && !gone[g] && offers[g]! & (1 << wished)) move[g] = wished
   }
-  yieldLeans(level, move, offers, refusals)
+  if (yieldLeans(level, move, offers, refusals)) stuck = true
   for (const [g, wished] of choices.corners ?? []) {
     if (level.level === 0 && g >= 0 && g < count && !gone[g] && move[g] !== wished) {
       problems.push(cornerProblem(level, 'choice-refused', g))
@@ -74,7 +83,7 @@ export function cornerMovesOf(level: Level, limits: PassLimits, choices: PassCho
     const value = seamBend(level, g)
     if (value > BEND_TOLD) problems.push({ ...cornerProblem(level, 'bent-seam', g), value })
   }
-  for (let g = 0; g < count; g++) {
+  for (let g = 0; stuck && g < count; g++) {
     const cut = member[g] || member[previous[g]!]
     if (!gone[g] && cut && offers[g] === 0) problems.push(cornerProblem(level, 'no-corner-move', g))
   }
@@ -95,35 +104,39 @@ function firstOffer(offers: number): CornerMove {
 
 /**
  * Takes back leans beside edges that are too short: where the other end is met square, the jet's bottom must
- * still go forward. Giving one up can only bring the next edge's turn, so each corner changes once.
+ * still go forward. Giving one up can only bring the next edge's turn, so each corner changes once. Says whether any
+ * was taken back.
  */
-function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals: Uint8Array): void {
-  const { frame, previous, next, gone, member } = level
-  const t = frame.body.thickness
+function yieldLeans(level: Level, move: Uint8Array, offers: Uint8Array, refusals: Uint8Array): boolean {
+  const { previous, next, gone, member, frame } = level
   const edge = makeAxisEdge()
-  const waiting: number[] = []
-  const look = (g: number) => {
-    if (!member[g]) return
-    const h = next[g]!
-    const leansAtStart = move[g] === CornerMove.lean
-    const leansAtEnd = move[h] === CornerMove.lean
-    if (leansAtStart === leansAtEnd) return
-    const { length, alongStart, alongEnd } = readAxisEdge(level, g, edge)
-    const left = leansAtStart ? length - t * alongStart : length + t * alongEnd
-    if (left > 0) return
-    const corner = leansAtStart ? g : h
-    if (refusals[corner] === LeanRefusal.none) refusals[corner] = LeanRefusal.edgeTooShort
-    offers[corner]! &= ~(1 << CornerMove.lean)
-    const instead = firstOffer(offers[corner]!)
-    if (instead === CornerMove.lean) return
-    move[corner] = instead
-    waiting.push(leansAtStart ? previous[g]! : h)
+  let any = false
+  for (let from = 0; from < frame.count; from++) {
+    const leans = move[from] === CornerMove.lean
+    if (leans === (move[next[from]!] === CornerMove.lean) || gone[from]) continue
+    // On to the edges on the far side, as long as one lean after another is given up.
+    for (let g = from; member[g];) {
+      const h = next[g]!
+      const leansAtStart = move[g] === CornerMove.lean
+      if (leansAtStart === (move[h] === CornerMove.lean) || hasRoom(level, g, leansAtStart, edge)) break
+      const corner = leansAtStart ? g : h
+      any = true
+      if (refusals[corner] === LeanRefusal.none) refusals[corner] = LeanRefusal.edgeTooShort
+      offers[corner]! &= ~(1 << CornerMove.lean)
+      const instead = firstOffer(offers[corner]!)
+      if (instead === CornerMove.lean) break
+      move[corner] = instead
+      g = leansAtStart ? previous[g]! : h
+    }
   }
-  for (let g = 0; g < frame.count; g++) {
-    if (gone[g] || !member[g]) continue
-    look(g)
-    while (waiting.length > 0) look(waiting.pop()!)
-  }
+  return any
+}
+
+/** Whether the jet's bottom goes forward along an edge with a lean at one of its ends. */
+function hasRoom(level: Level, g: number, leansAtStart: boolean, edge: AxisEdge): boolean {
+  const t = level.frame.body.thickness
+  const { length, alongStart, alongEnd } = readAxisEdge(level, g, edge)
+  return (leansAtStart ? length - t * alongStart : length + t * alongEnd) > 0
 }
 
 /** How far the straight jet at a corner beside an arc stands off the bent seam of the axes, half way down, mm. */

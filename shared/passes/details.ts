@@ -9,7 +9,7 @@ export interface Followed {
   readonly level: Level
   readonly problems: readonly PassProblem[]
   /** Loops of which nothing is left to follow. */
-  readonly lost: readonly number[]
+  readonly lost: ReadonlySet<number>
 }
 
 /** Material left by less than this is not worth a word, mm: as with fillets (common practice, no source). */
@@ -25,8 +25,20 @@ export function followable(level: Level): Followed {
   const { frame } = level
   const edge = makeAxisEdge()
   const waiting: number[] = []
-  for (let g = 0; g < frame.count; g++) if (shrinksAway(level, g, edge)) waiting.push(g)
-  if (waiting.length === 0) return { level, problems: [], lost: [] }
+  const { x, y, p, q, next: after, mode: kind } = level
+  const { ux, uy, arc } = frame
+  const t = frame.body.thickness
+  for (let g = 0; g < frame.count; g++) {
+    const h = after[g]!
+    if (!arc[g] && kind[g] === CornerMode.mitre && kind[h] === CornerMode.mitre) {
+      // What `shrinksAway` asks, for the usual edge.
+      const length = (x[h]! - x[g]!) * ux[g]! + (y[h]! - y[g]!) * uy[g]!
+      const gain = (p[h]! - p[g]!) * ux[g]! + (q[h]! - q[g]!) * uy[g]!
+      if (length > 0 && length + t * gain > 0) continue
+    }
+    if (shrinksAway(level, g, edge)) waiting.push(g)
+  }
+  if (waiting.length === 0) return { level, problems: [], lost: new Set() }
 
   const own: Level = {
     ...level,
@@ -73,7 +85,7 @@ export function followable(level: Level): Followed {
     problems.push({ code: 'detail-finer-than-jet', loop, at: g, level: level.level, value })
   }
   for (const loop of lost) gone.fill(1, frame.loopStart[loop], frame.loopStart[loop + 1])
-  return { level: own, problems, lost: [...lost] }
+  return { level: own, problems, lost }
 }
 
 /** Whether the axis would go backward along an edge, at the top face or at the bottom. */
@@ -111,7 +123,7 @@ function lostProblem({ frame, axis, figure, level }: Level, loop: number): PassP
 function nextLeft({ gone, next }: Level, g: number): number {
   let h = g
   while (gone[h]) h = next[h]!
-  for (let at = g; gone[at]; ) {
+  for (let at = g; gone[at];) {
     const after = next[at]!
     next[at] = h
     at = after

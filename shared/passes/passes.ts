@@ -10,26 +10,27 @@ import { writeOpenPass } from './open-pass.ts'
 import { roomOf } from './room.ts'
 import { followable } from './details.ts'
 import { levelsOffRoot, runsOf, type Run } from './runs.ts'
-import type {
-  Jet,
-  Pass,
-  PassChoices,
-  Passes,
-  PassLimits,
-  PassProblem,
-  PassProblemCode,
-  PassReason,
+import {
+  CornerMove,
+  type Jet,
+  type Pass,
+  type PassChoices,
+  type Passes,
+  type PassLimits,
+  type PassProblem,
+  type PassProblemCode,
+  type PassReason,
 } from './types.ts'
 import { makeWriter, pathOf } from './writer.ts'
 
-/** Stations per edge to begin with: square and lean at both ends. */
-const STATIONS_PER_EDGE = 4
+/** Run outs, leads and the like; where it is too few the columns grow. */
+const STATIONS_PER_LOOP = 8
 
 interface Layer {
   readonly level: Level
   readonly moves: CornerMoves
   readonly problems: readonly PassProblem[]
-  readonly lost: readonly number[]
+  readonly lost: ReadonlySet<number>
 }
 
 /**
@@ -48,7 +49,7 @@ export function passesOf(body: Body, jet: Jet, limits: PassLimits, choices: Pass
   })
   const ground = layers.at(-1)!
   const problems = layers.flatMap((layer) => layer.problems)
-  const w = makeWriter(STATIONS_PER_EDGE * frame.count + 16)
+  const w = makeWriter(stationsExpected(layers, jet))
   const firstStation = new Int32Array(frame.count).fill(-1)
   const passes: Pass[] = []
 
@@ -96,10 +97,24 @@ export function passesOf(body: Body, jet: Jet, limits: PassLimits, choices: Pass
   }
 }
 
+/** A cut for every edge, at every lean one station on both sides and with taper one within; and what a pass takes besides. */
+function stationsExpected(layers: readonly Layer[], jet: Jet): number {
+  const perLean = jet.taper > 0 ? 4 : 2
+  let count = 0
+  for (const { level, moves } of layers) {
+    const { member } = level
+    for (let g = 0; g < member.length; g++) {
+      if (member[g]) count += moves.move[g] === CornerMove.lean ? 1 + perLean : 1
+    }
+    count += STATIONS_PER_LOOP * level.frame.body.loops.length
+  }
+  return count
+}
+
 /** Open runs first, then those that go all the way round, then the freeing pass along the roots. */
 function runsInOrder(layers: readonly Layer[], loop: number): { readonly layer: Layer; readonly run: Run }[] {
   const all = layers
-    .filter(({ lost }) => !lost.includes(loop))
+    .filter(({ lost }) => !lost.has(loop))
     .flatMap((layer) => runsOf(layer.level, loop).map((run) => ({ layer, run })))
   const rank = ({ layer, run }: (typeof all)[number]) => (layer.level.level === 0 ? 2 : run.closed ? 1 : 0)
   return all.sort((a, b) => rank(a) - rank(b))

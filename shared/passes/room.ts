@@ -49,7 +49,7 @@ function boxesOf({ frame, offsets }: Room): Float64Array[] {
     fillBox(frame, Math.max(most, -least), most - least, offsets, first, b)
   }
   const layers = [first]
-  for (let below = first; below.length > 4 * RUN; ) {
+  for (let below = first; below.length > 4 * RUN;) {
     const own = new Float64Array(4 * Math.ceil(below.length / 4 / RUN))
     for (let at = 0; at < own.length; at += 4) {
       own[at] = own[at + 1] = Infinity

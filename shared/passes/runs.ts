@@ -12,10 +12,16 @@ export interface Run {
 /** The longest runs of a loop, in the order of its edges. */
 export function runsOf(level: Level, loop: number): Run[] {
   const { frame, member, previous, next, gone } = level
+  const end = frame.loopStart[loop + 1]!
+  if (level.whole && !level.gaps) {
+    return end > frame.loopStart[loop]!
+      ? [{ loop, first: end - 1, last: previous[end - 1]!, closed: true }]
+      : []
+  }
   const runs: Run[] = []
   let any = -1
   let first = -1
-  for (let g = frame.loopStart[loop]!; g < frame.loopStart[loop + 1]!; g++) {
+  for (let g = frame.loopStart[loop]!; g < end; g++) {
     if (gone[g] || !member[g]) continue
     any = g
     if (member[previous[g]!]) continue
