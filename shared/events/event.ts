@@ -4,6 +4,7 @@ import { nearbyOrder } from '../geometry/order.ts'
 import { roundingOf } from '../geometry/rounding.ts'
 import { chainOf, type Chain } from './chain.ts'
 import { marchOf, type March } from './march.ts'
+import { offerCornerFolds } from './corner-fold.ts'
 import { First } from './first.ts'
 import { frameOf, type Frame } from '../contours/frame.ts'
 import { levelsOf } from '../walls/levels.ts'
@@ -67,6 +68,7 @@ function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: n
   const run = marchOf(chain, offset, rate, length)
   const first = new First(length)
   offerVanishings(run, first)
+  if (chain.hasChords) offerCornerFolds(run, first)
   offerMeetings(run, near, first)
   return first.found
 }

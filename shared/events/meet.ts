@@ -3,7 +3,7 @@ import { quadraticRoots } from '../geometry/roots.ts'
 import { PieceKind, centreOf, isStraight, startsAtCorner, type Chain } from './chain.ts'
 import { pointStray, pointX, pointY, sweepOf, type March } from './march.ts'
 import type { First } from './first.ts'
-import { firstZero } from './first-zero.ts'
+import { everyZero, type Gap } from './every-zero.ts'
 
 /**
  * Where pieces of the moving contour run into each other. The first contact of sound outlines is a point on a
@@ -115,12 +115,6 @@ function offerUnevenPoint(march: March, e: number, f: number, near: number, firs
   )
 }
 
-/** A measure that is zero where a point meets the whole line or circle, and how far it can stray over a span from its middle. */
-interface Gap {
-  readonly gap: (t: number) => number
-  readonly stray: (from: number, to: number) => number
-}
-
 /** Distance of point e from a line that keeps its direction, or from a circle. */
 function distanceGap(march: March, e: number, f: number): Gap {
   const { chain } = march
@@ -168,28 +162,6 @@ function turningEnds(march: March, f: number, t: number, x: number, y: number) {
   return { cross: dx * ly - dy * lx, length: Math.hypot(lx, ly), apart: Math.hypot(dx, dy) }
 }
 
-/** Looks at the zeros of a gap in turn, until `take` accepts one. */
-function everyZero(
-  march: March,
-  gap: (t: number) => number,
-  slack: (from: number, to: number) => number,
-  first: First,
-  take: (t: number) => boolean,
-): void {
-  let start = 0
-  const end = Math.min(first.until, march.length)
-  while (start < end) {
-    const from = start
-    const t = firstZero(
-      (s) => gap(from + s),
-      (a, b) => slack(from + a, from + b),
-      end - from,
-    )
-    if (t === null || take(from + t)) return
-    start = from + t + end * PAST_CROSSING
-  }
-}
-
 /** A bound below every distance: the span is dropped. */
 const NO_CONTACT = -1
 
@@ -233,9 +205,6 @@ function farFromPiece(x: number, y: number, sx: number, sy: number, ex: number, 
   const along = square > 0 ? Math.min(1, Math.max(0, ((x - sx) * lx + (y - sy) * ly) / square)) : 0
   return Math.hypot(x - sx - along * lx, y - sy - along * ly)
 }
-
-/** Where a crossing beside the piece was passed over, the search goes on this share of the march later. */
-const PAST_CROSSING = 1e-6
 
 /** Two curves touch between their ends: the distance of centre and line, or of two centres, says when. */
 function offerTouch(march: March, e: number, f: number, near: number, first: First): void {
