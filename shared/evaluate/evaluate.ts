@@ -1,7 +1,8 @@
 import { meshOf } from '../solid/mesh.ts'
 import type { Body } from '../walls/types.ts'
 import type { BodyMesh } from '../solid/types.ts'
-import { columnsOf } from './columns.ts'
+import { columnsOf, type Columns } from './columns.ts'
+import { jetWayOf, type JetWay } from './jet-way.ts'
 import { readRequest, type ReadRequest } from './read.ts'
 import type { Evaluation, EvaluationRequest } from './schema.ts'
 import { evaluationOf } from './views.ts'
@@ -16,6 +17,19 @@ import { evaluationOf } from './views.ts'
  */
 export function evaluate(request: EvaluationRequest): Evaluation {
   return evaluationOf(columnsOf(readRequest(request)))
+}
+
+/** Everything that an evaluation can be asked for, worked out but not put into objects and texts. */
+export interface WorkedOut {
+  readonly columns: Columns
+  /** Null where there is nothing sound to cut. */
+  readonly way: JetWay | null
+}
+
+/** The same as `evaluate`, all of it at once: for whoever wants the figures and not their form. Throws `EvaluationError`. */
+export function workOut(request: EvaluationRequest): WorkedOut {
+  const read = readRequest(request)
+  return { columns: columnsOf(read), way: jetWayOf(read) }
 }
 
 /** Both at once, for a screen that needs both: the request is read and its first event looked for once. */

@@ -1,4 +1,4 @@
-import { jetClearanceUnknown, jetCutsWall } from '../findings/clearance.ts'
+import { jetClearanceUnknown, jetCutsWall, jetMayGraze } from '../findings/clearance.ts'
 import { axisOutOfTravel } from '../findings/head.ts'
 import {
   cornerChoiceRefused,
@@ -12,6 +12,7 @@ import {
 } from '../findings/passes.ts'
 import type { Finding } from '../findings/schema.ts'
 import { pieceTrapped } from '../findings/way-out.ts'
+import { GRAZE } from '../interference/types.ts'
 import { LeanRefusal, type PassProblem, type Passes } from '../passes/types.ts'
 import { degrees } from '../units/angle.ts'
 import type { CornerRef, EdgeRef } from '../walls/types.ts'
@@ -27,8 +28,9 @@ export function wayFindings(read: ReadRequest, { cut, ways }: JetWay): Finding[]
     findings.push(...passFindings(read, passes))
     for (const { edge, hit, depth, bite } of interference.bites) {
       const cutting = edgeRef(read, edge)
-      findings.push(jetCutsWall({ cutting, hit: edgeRef(read, hit), depth, bite }))
+      findings.push(jetCutsWall({ cutting, hit: edgeRef(read, hit), depth, bite }, GRAZE))
     }
+    if (interference.grazing > 0) findings.push(jetMayGraze(interference.grazing, GRAZE))
     if (interference.undecided > 0) findings.push(jetClearanceUnknown(interference.undecided))
     for (const { code, axis, edge, value, limit, unwindAt } of axes?.problems ?? []) {
       if (code !== 'travel-exceeded' || axis === null) continue

@@ -43,6 +43,6 @@ function wayView({ verdict, direction }: WayOut): EvaluatedWayOut {
     verdict,
     upward: direction && direction.z > 0,
     angle: direction && degrees(direction.angle),
-    heading: direction?.heading == null ? null : degrees(direction.heading),
+    heading: direction === null || direction.heading === null ? null : degrees(direction.heading),
   }
 }

@@ -14,18 +14,33 @@ export interface Bite {
   readonly bite: number
 }
 
-export function jetCutsWall({ cutting, hit, depth, bite }: Bite): Finding {
+/** Below `graze` (mm) it is a note: no cut shows it. */
+export function jetCutsWall({ cutting, hit, depth, bite }: Bite, graze: number): Finding {
   const [own, other] = [edgeName(cutting), edgeName(hit)]
   const wall = own === other ? 'its own wall' : `wall ${other}`
   return {
     code: 'jet-cuts-wall',
-    severity: 'stop',
+    severity: bite < graze ? 'note' : 'stop',
     loop: hit.loop,
     edge: hit.edge,
     value: bite,
     limit: 0,
-    message: `The jet on its way along ${own} enters ${wall} by ${formatNumber(bite)} mm, ${formatNumber(depth)} mm deep.`,
+    message: `The jet on its way along ${own} enters ${wall} by ${biteText(bite)}, ${formatNumber(depth)} mm deep.`,
     cure: { message: `Lessen the tilt of ${own}, widen the gap there, or use a jet with a narrower kerf.` },
+  }
+}
+
+function biteText(bite: number): string {
+  return bite < 0.01 ? 'less than 0.01 mm' : `${formatNumber(bite)} mm`
+}
+
+/** Pairs of walls whose jets touch each other’s walls, if at all, by less than anyone can see. */
+export function jetMayGraze(pairs: number, graze: number): Finding {
+  return {
+    code: 'jet-may-graze',
+    severity: 'note',
+    value: pairs,
+    message: `In ${pairs} places the jet runs so close along a wall that a touch of up to ${formatNumber(graze)} mm could not be ruled out.`,
   }
 }
 

@@ -33,6 +33,7 @@ export const findingCodes = [
   'seam-bends',
   'loose-before-last-pass',
   'jet-cuts-wall',
+  'jet-may-graze',
   'jet-clearance-unknown',
   // the way out
   'part-trapped',

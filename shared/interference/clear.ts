@@ -23,6 +23,8 @@ import {
 const SAME = 1e-9
 
 export interface Scene {
+  /** Looks that the searches of one evaluation may still take together. */
+  readonly budget: { left: number }
   readonly cone: JetCone
   readonly path: JetPath
   readonly band: WallBand

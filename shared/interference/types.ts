@@ -11,6 +11,9 @@ export const BITE_TOLERANCE = 1e-6
 /** How exactly a bite's depth is told once it counts, mm: a tenth of a micrometre, finer than any cut. */
 export const BITE_ACCURACY = 1e-4
 
+/** A bite that no cut shows, mm: less than what heads repeat to (0.025 mm, common practice, no source). */
+export const GRAZE = 0.02
+
 /** Wall and jet of the worst of the bites that one edge's jet takes out of another edge's wall. */
 export interface JetBite {
   /** Station whose move bites. */
@@ -64,6 +67,8 @@ export interface Interference {
   readonly pairs: number
   /** Pairs for which neither a bite nor its absence could be shown: too many looks. Treat them as not known. */
   readonly undecided: number
+  /** Pairs for which only this could be shown: the bite, if there is one, is below `GRAZE`. */
+  readonly grazing: number
   /** One for each rim of the head that was told; empty without a head or without passes. */
   readonly rims: readonly RimClearance[]
 }

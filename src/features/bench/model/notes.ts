@@ -71,6 +71,7 @@ const gathered: Record<FindingCode, { one: string; say: string; length?: true }>
   'seam-bends': { one: 'corners', say: 'have a bent seam', length: true },
   'loose-before-last-pass': { one: 'loops', say: 'are free before their last pass' },
   'jet-cuts-wall': { one: 'walls', say: 'are entered by the jet of another', length: true },
+  'jet-may-graze': { one: 'places', say: 'are grazed by the jet at most' },
   'jet-clearance-unknown': { one: 'places', say: 'could not be looked at to the end' },
   'part-trapped': { one: 'parts', say: 'are trapped in the sheet' },
   'slug-trapped': { one: 'slugs', say: 'are trapped in the part' },
