@@ -8,7 +8,7 @@ export interface Spread {
 }
 
 export function spreadOf(values: readonly number[]): Spread {
-  const sorted = [...values].sort((a, b) => a - b)
+  const sorted = values.filter((value) => !Number.isNaN(value)).sort((a, b) => a - b)
   const at = (share: number) => sorted[Math.round(share * (sorted.length - 1))]!
   return { median: at(0.5), low: at(0.25), high: at(0.75) }
 }
@@ -26,24 +26,36 @@ export function timed(job: () => number): number {
   return performance.now() - start
 }
 
-export interface Rounds {
-  readonly warmup: number
-  readonly least: number
-  readonly most: number
-  /** No further round once so long has gone by, ms. */
+export interface Job {
+  readonly run: () => number
+  /** No further run of this job once it has taken so long in all, ms; it has one at least. */
   readonly budget: number
 }
 
-/** Every job once a round, in an order that turns; the times of each, one a round. */
-export function interleaved(jobs: readonly (() => number)[], rounds: Rounds): number[][] {
-  for (let i = 0; i < rounds.warmup; i++) for (const job of jobs) timed(job)
+/** Enough to have the code compiled, for jobs that are quick; slow ones warm up in their first run. */
+const WARM_UP_MS = 400
+const WARM_UP_RUNS = 200
+const LEAST_RUNS = 1
+
+/**
+ * Every job once a round, in an order that turns; the times of each by round, NaN where it sat a round out because its
+ * budget was used up. The rounds end when all budgets are, or after `most`.
+ */
+export function interleaved(jobs: readonly Job[], most: number): number[][] {
+  for (const { run } of jobs) {
+    const start = performance.now()
+    for (let i = 0; i < WARM_UP_RUNS && performance.now() - start < WARM_UP_MS; i++) timed(run)
+  }
+  const spent = jobs.map(() => 0)
   const times: number[][] = jobs.map(() => [])
-  const start = performance.now()
-  for (let round = 0; round < rounds.most; round++) {
-    if (round >= rounds.least && performance.now() - start > rounds.budget) break
+  for (let round = 0; round < most; round++) {
+    const waiting = jobs.map(({ budget }, i) => round < LEAST_RUNS || spent[i]! < budget)
+    if (!waiting.includes(true)) break
     for (let i = 0; i < jobs.length; i++) {
       const at = (i + round) % jobs.length
-      times[at]!.push(timed(jobs[at]!))
+      const time = waiting[at] ? timed(jobs[at]!.run) : NaN
+      times[at]!.push(time)
+      if (waiting[at]) spent[at]! += time
     }
   }
   return times

@@ -49,17 +49,17 @@ function holed(random: () => number): Vertex[][] {
 test('random edits of plates of straight edges, holes either way round', () => {
   let withEvent = 0
   let edits = 0
-  for (let seed = 1; seed <= 30; seed++) {
+  for (let seed = 1; seed <= 15; seed++) {
     const random = seeded(seed)
     const loops = seed % 3 === 0 ? [star(random, 40, 60, 90)] : holed(random)
     const request = plate(loops, tilted([10, 5, 0, -5], 8), 8, { jet: JET, head: HEAD })
-    withEvent += editsAgreeWith(request, seed, 20, seed % 2 === 0 ? 20 : 60)
-    edits += 20
+    withEvent += editsAgreeWith(request, seed, 12, seed % 2 === 0 ? 20 : 60)
+    edits += 12
   }
   // Both kinds must come up often.
   expect(withEvent).toBeGreaterThan(edits / 20)
   expect(edits - withEvent).toBeGreaterThan(edits / 4)
-})
+}, 30_000)
 
 test('random edits of whatever else a plate may be: arcs, steps, facets, any datum', () => {
   for (let seed = 1; seed <= 8; seed++) {
