@@ -31,6 +31,8 @@ export interface FacetFigures {
   /** Outward slope of the jet that is square to the edge, and 1 more than its square. */
   readonly slope: Float64Array
   readonly square: Float64Array
+  /** sin of the tilt less slope times its cosine: sin τ per length of that jet. */
+  readonly facing: Float64Array
   /** cos² of the tilt less sin² of the taper. */
   readonly narrow: Float64Array
 }
@@ -79,6 +81,7 @@ function figuresOf(body: Body, walls: readonly Wall[], firstFacet: Int32Array, j
     axis: numbers(),
     slope: numbers(),
     square: numbers(),
+    facing: numbers(),
     narrow: numbers(),
   }
   let f = 0
@@ -95,6 +98,7 @@ function figuresOf(body: Body, walls: readonly Wall[], firstFacet: Int32Array, j
       out.axis[f] = out.wall[f]! + axisOffset(jet.kerf, tilt, jet.taper)
       out.slope[f] = sideSlope(tilt, jet.taper, 0)
       out.square[f] = 1 + out.slope[f]! * out.slope[f]!
+      out.facing[f] = Math.sin(jet.taper) * Math.sqrt(out.square[f]!)
       out.narrow[f] = Math.cos(tilt) ** 2 - Math.sin(jet.taper) ** 2
       top = depth
       f++

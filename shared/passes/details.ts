@@ -52,10 +52,7 @@ export function followable(level: Level): Followed {
   const { previous, next, gone } = own
   const left: number[] = []
   const lost = new Set<number>()
-  const edgesOf = Int32Array.from(
-    frame.body.loops,
-    (_, loop) => frame.loopStart[loop + 1]! - frame.loopStart[loop]!,
-  )
+  const edgesOf = frame.loopStart.slice(1).map((end, loop) => end - frame.loopStart[loop]!)
   for (let i = 0; i < waiting.length; i++) {
     const g = waiting[i]!
     const loop = frame.loopOf[g]!

@@ -1,7 +1,7 @@
 import type { EdgePlan } from './edge-plan.ts'
 import { sideSlope, sideSlopeRate } from './jet-lines.ts'
 import type { Level } from './level.ts'
-import { MoveKind } from './types.ts'
+import { MoveKind, type Jet } from './types.ts'
 import { put, type PathWriter } from './writer.ts'
 
 /**
@@ -19,9 +19,14 @@ const LEAN_STAND_OFF = 0.005
 /** More pieces than this per lean are not worth their length. */
 const MOST_PIECES = 32
 
+/**
+ * What a straight move may enter before it takes a station in between, mm: half of what counts as on the wall in the
+ * tests (1e-9), a thousand times a double's rounding.
+ */
+const LEAN_ENTERS = 5e-10
+
 /** What the leans of a level have in common. */
 export interface LeanKnots {
-  readonly sinTaper: number
   readonly cosTaper: number
   readonly tanTaper: number
   /** Half the kerf, mm. */
@@ -34,11 +39,10 @@ export interface LeanKnots {
 export function leanKnots({ jet, frame }: Level): LeanKnots {
   const tanTaper = Math.tan(jet.taper)
   return {
-    sinTaper: Math.sin(jet.taper),
     cosTaper: Math.cos(jet.taper),
     tanTaper,
     half: jet.kerf / 2,
-    none: 0,
+    none: mostStraight(jet, frame.body.thickness),
     single: 1 / piecesPerTurn(jet.taper, frame.body.thickness) ** 2,
   }
 }
@@ -61,6 +65,7 @@ export function writeLean(
   const [bendFrom, bendTo] = [Math.asinh(alongFrom), Math.asinh(alongTo)]
   const pieces = leanPieces(level, bendTo - bendFrom)
   const knots = leanKnots(level)
+  if (taper > 0 && (alongTo - alongFrom) ** 2 <= knots.none) return
   const putAt = (along: number, side: number) => {
     const at = from + ((along - alongFrom) / (alongTo - alongFrom)) * (to - from)
     const facing = Math.sin(tilt) - side * Math.cos(tilt)
@@ -107,12 +112,13 @@ export function clearAtTop(
   square: number,
 ): number {
   const length = Math.sqrt(square)
-  const sinFacing = facing / length
-  const cosFacing = Math.sqrt(1 - sinFacing * sinFacing)
-  // Downward part of the way from the axis to that line; then the axis' length at which the line is at depth 0.
-  const down = (sinTilt * length - sinFacing) / cosFacing
-  const rim = (-half * down) / (1 - tanTaper * down)
-  const short = half * (cosFacing - cosTaper) - rim * (tanTaper * cosFacing - sinFacing)
+  // The axis' length per mm of depth, times the cosine of φ.
+  const across = Math.sqrt(square - facing * facing)
+  // Downward part of the way from the axis to that line; −half·down/(across − tan τ·down) is then the axis' length
+  // at which the line is at depth 0.
+  const down = sinTilt * square - facing
+  const rise = (down * (tanTaper * across - facing)) / (across - tanTaper * down)
+  const short = (half * (across - cosTaper * length + rise)) / length
   return short > 0 ? short * sec : 0
 }
 
@@ -123,6 +129,15 @@ export function clearAtTop(
 function leanPieces(level: Level, change: number): number {
   const pieces = Math.ceil(Math.abs(change) * piecesPerTurn(level.jet.taper, level.frame.body.thickness))
   return Math.min(MOST_PIECES, Math.max(1, pieces))
+}
+
+/**
+ * Square of the greatest change of slope along the edge that a straight move may make. |s″| is at most tan τ (at
+ * a = 0), so that a chord is off by tan τ·Δ²/8 per mm of depth at most, and at the top face the cone, turned by as
+ * much, comes nearer by that times half a kerf (derived).
+ */
+function mostStraight({ kerf, taper }: Jet, thickness: number): number {
+  return (8 * LEAN_ENTERS) / (Math.tan(Math.abs(taper)) * (thickness + kerf / 2))
 }
 
 function piecesPerTurn(taper: number, thickness: number): number {

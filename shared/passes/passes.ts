@@ -1,4 +1,4 @@
-import { frameOf } from '../contours/frame.ts'
+import { frameOf, type Frame } from '../contours/frame.ts'
 import { nearbyOrder } from '../geometry/order.ts'
 import type { Body } from '../walls/types.ts'
 import { axisTable } from './axis-table.ts'
@@ -53,7 +53,7 @@ export function passesOf(body: Body, jet: Jet, limits: PassLimits, choices: Pass
   const firstStation = new Int32Array(frame.count).fill(-1)
   const passes: Pass[] = []
 
-  for (const loop of cuttingOrder(body)) {
+  for (const loop of cuttingOrder(frame)) {
     const ordered = runsInOrder(layers, loop)
     const freeing = ordered.findIndex(({ run }) => run.closed)
     for (const [i, { layer, run }] of ordered.entries()) {
@@ -106,7 +106,7 @@ function stationsExpected(layers: readonly Layer[], jet: Jet): number {
     for (let g = 0; g < member.length; g++) {
       if (member[g]) count += moves.move[g] === CornerMove.lean ? 1 + perLean : 1
     }
-    count += STATIONS_PER_LOOP * level.frame.body.loops.length
+    count += STATIONS_PER_LOOP * (level.frame.loopStart.length - 1)
   }
   return count
 }
@@ -121,7 +121,12 @@ function runsInOrder(layers: readonly Layer[], loop: number): { readonly layer: 
 }
 
 /** Holes in a near order, the outer loop last. */
-function cuttingOrder(body: Body): number[] {
-  const holes = body.loops.slice(1).map((loop) => loop[0]?.from ?? { x: 0, y: 0 })
-  return body.loops.length > 0 ? [...nearbyOrder(holes).map((hole) => hole + 1), 0] : []
+function cuttingOrder({ loopStart, px, py }: Frame): number[] {
+  const loops = loopStart.length - 1
+  if (loops < 1) return []
+  const holes = Array.from({ length: loops - 1 }, (_, hole) => {
+    const g = loopStart[hole + 1]!
+    return { x: px[g] ?? 0, y: py[g] ?? 0 }
+  })
+  return [...nearbyOrder(holes).map((hole) => hole + 1), 0]
 }

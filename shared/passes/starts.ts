@@ -54,20 +54,12 @@ export function* startsOf(
   choices: PassChoices,
   lengths: readonly number[],
 ): Generator<Start> {
-  const { turnSin, turnCos, mode } = level
   const { kerf } = level.jet
-  const corners = bestOf(level, loop, (g) =>
-    mode[g] !== CornerMode.spike &&
-    turnSin[g]! > 0 &&
-    moves.offers[g]! & (1 << CornerMove.runOut) &&
-    (choices.corners?.get(g) ?? CornerMove.runOut) === CornerMove.runOut
-      ? Math.cos(FLATTEST_START) - turnCos[g]!
-      : 0,
-  )
+  const corners = bestCorners(level, moves, loop, choices)
   for (const leadIn of lengths) for (const g of corners) yield { kind: 'corner', g, leadIn }
   const leadOut = choices.leadOut ?? kerf
   const overlap = choices.overlap ?? kerf
-  const longest = bestOf(level, loop, (g) => edgeLength(level, g))
+  const longest = longestEdges(level, loop)
   const plan = makeEdgePlan()
   for (const leadIn of lengths) {
     for (const g of longest) {
@@ -86,23 +78,55 @@ export function* startsOf(
   }
 }
 
-/** The few edges (or corners) of a loop with the highest positive scores, the best first; of equals the first. */
-function bestOf({ frame, gone }: Level, loop: number, score: (g: number) => number): number[] {
-  const best: number[] = []
-  const scores: number[] = []
-  for (let g = frame.loopStart[loop]!; g < frame.loopStart[loop + 1]!; g++) {
-    if (gone[g]) continue
-    const own = score(g)
-    const better = own * (1 - TIE)
-    if (!(better > (scores[MOST_CANDIDATES - 1] ?? 0))) continue
-    let place = scores.length
-    while (place > 0 && scores[place - 1]! < better) place--
-    best.splice(place, 0, g)
-    scores.splice(place, 0, own)
-    if (best.length > MOST_CANDIDATES) {
-      best.pop()
-      scores.pop()
-    }
+/** The few of a loop's corners at which a run out works, the sharpest first. */
+function bestCorners(level: Level, { offers }: CornerMoves, loop: number, choices: PassChoices): number[] {
+  const { frame, gone, turnSin, turnCos, mode } = level
+  const flattest = Math.cos(FLATTEST_START)
+  const best = makeBest()
+  const end = frame.loopStart[loop + 1]!
+  for (let g = frame.loopStart[loop]!; g < end; g++) {
+    const score = flattest - turnCos[g]!
+    if (!(score > best.least) || !(turnSin[g]! > 0) || !(offers[g]! & (1 << CornerMove.runOut))) continue
+    if (gone[g] || mode[g] === CornerMode.spike) continue
+    const wished = choices.corners?.get(g)
+    if (wished === undefined || wished === CornerMove.runOut) offer(best, g, score)
   }
-  return best
+  return best.found
+}
+
+function longestEdges(level: Level, loop: number): number[] {
+  const { frame, gone } = level
+  const best = makeBest()
+  const end = frame.loopStart[loop + 1]!
+  for (let g = frame.loopStart[loop]!; g < end; g++) {
+    if (!gone[g]) offer(best, g, edgeLength(level, g))
+  }
+  return best.found
+}
+
+/** The few with the highest positive scores, the best first; of equals the first. */
+interface Best {
+  readonly found: number[]
+  readonly scores: number[]
+  /** Scores up to this one are of no use. */
+  least: number
+}
+
+function makeBest(): Best {
+  return { found: [], scores: [], least: 0 }
+}
+
+function offer(best: Best, g: number, score: number): void {
+  const { found, scores } = best
+  const better = score * (1 - TIE)
+  if (!(better > best.least)) return
+  let place = scores.length
+  while (place > 0 && scores[place - 1]! < better) place--
+  found.splice(place, 0, g)
+  scores.splice(place, 0, score)
+  if (found.length > MOST_CANDIDATES) {
+    found.pop()
+    scores.pop()
+  }
+  best.least = scores[MOST_CANDIDATES - 1] ?? 0
 }

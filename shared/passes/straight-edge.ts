@@ -24,10 +24,10 @@ export function writeStraightEdges(
   const { frame, axis, next, figure, jet } = level
   if (axis.start !== axis.end) return from
   const { ux, uy, arc, body } = frame
-  const { slope, sin, sec, square, narrow } = axis.start
+  const { slope, sin, sec, square, narrow, facing } = axis.start
   const t = body.thickness
   const knots = leanKnots(level)
-  const { sinTaper, cosTaper, none, single } = knots
+  const { cosTaper, none, single } = knots
   let { x, y, p, q, edge, move: kind, facet } = w
   let i = w.at
   let g = from
@@ -65,8 +65,7 @@ export function writeStraightEdges(
         // The tangents at both ends meet at the square jet's slope, this share of the way from it.
         const share = cosTaper / (cosTaper + Math.sqrt(cosTaper * cosTaper + narrow[f]! * squareFrom))
         const along = share * alongFrom
-        const facing = sinTaper * Math.sqrt(square[f]!)
-        const clear = clearAtTop(knots, sin[f]!, sec[f]!, facing, square[f]! + along * along)
+        const clear = clearAtTop(knots, sin[f]!, sec[f]!, facing[f]!, square[f]! + along * along)
         const at = (1 - share) * leanFrom
         kind[i] = MoveKind.lean
         setOn(x, y, p, q, i++, sx, sy, vx, vy, at, clear, along, side)
@@ -83,8 +82,7 @@ export function writeStraightEdges(
       if (jet.taper > 0 && squareTo > none) {
         const share = cosTaper / (cosTaper + Math.sqrt(cosTaper * cosTaper + narrow[f]! * squareTo))
         const along = share * alongTo
-        const facing = sinTaper * Math.sqrt(square[f]!)
-        const clear = clearAtTop(knots, sin[f]!, sec[f]!, facing, square[f]! + along * along)
+        const clear = clearAtTop(knots, sin[f]!, sec[f]!, facing[f]!, square[f]! + along * along)
         kind[i] = MoveKind.lean
         setOn(x, y, p, q, i++, sx, sy, vx, vy, cut + share * leanTo, clear, along, side)
       }
