@@ -27,7 +27,6 @@ export interface Chain {
   /** 1 for points that do not move evenly: bent ones, and those between chords of an arc with a bent end. */
   readonly uneven: Uint8Array
   readonly hasUneven: boolean
-  readonly hasChords: boolean
   /** 1 for lines that blend and for chords. */
   readonly rotates: Uint8Array
   /** Of a chord: the share of its arc's sweep at which it starts. */
@@ -121,7 +120,6 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
     bent,
     uneven,
     hasUneven,
-    hasChords: chords?.some((n) => n > 0) ?? false,
     rotates,
     share,
     firstOf,

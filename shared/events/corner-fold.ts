@@ -5,16 +5,18 @@ import { everyZero, type Gap } from './every-zero.ts'
 import { headingSpread, pointStray, pointX, pointY, sweepOf, type March } from './march.ts'
 
 /**
- * Where a blended arc folds onto its neighbour at their corner: their tangents there come to lie opposite, T₁ × T₂ = 0
- * with T₁ · T₂ < 0, and from then on the curves cross just beside the corner. The chords that stand for the arc elsewhere
- * are too coarse to see that begin.
+ * Where an arc and its neighbour, one of which blends, fold onto each other at their corner: their tangents there come
+ * to lie opposite, T₁ × T₂ = 0 with T₁ · T₂ < 0, and from then on they cross just beside the corner. No end touches
+ * anything when that begins, and the chords that stand for a blended arc are too coarse to see it.
  */
 export function offerCornerFolds(march: March, first: First): void {
   const { chain } = march
-  const { kind, previous, edge } = chain
+  const { kind, previous, edge, rotates } = chain
   for (let e = 0; e < chain.count; e++) {
     const p = previous[e]!
-    if (kind[e] !== PieceKind.chord && kind[p] !== PieceKind.chord) continue
+    if (!rotates[e] && !rotates[p]) continue
+    // Two lines lie opposite all along at once, which their ends tell.
+    if (kind[e] === PieceKind.line && kind[p] === PieceKind.line) continue
     if (!startsAtCorner(chain, e) || kind[e] === PieceKind.step || kind[p] === PieceKind.step) continue
     const before = tangentOf(march, p, e)
     const after = tangentOf(march, e, e)

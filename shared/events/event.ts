@@ -68,7 +68,7 @@ function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: n
   const run = marchOf(chain, offset, rate, length)
   const first = new First(length)
   offerVanishings(run, first)
-  if (chain.hasChords) offerCornerFolds(run, first)
+  if (chain.frame.table.blends && chain.frame.hasArcs) offerCornerFolds(run, first)
   offerMeetings(run, near, first)
   return first.found
 }
