@@ -27,6 +27,8 @@ export interface Chain {
   /** 1 for points that do not move evenly: bent ones, and those between chords of an arc with a bent end. */
   readonly uneven: Uint8Array
   readonly hasUneven: boolean
+  /** Whether any of the latter are there. */
+  readonly hasLoose: boolean
   /** 1 for lines that blend and for chords. */
   readonly rotates: Uint8Array
   /** Of a chord: the share of its arc's sweep at which it starts. */
@@ -65,6 +67,7 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
   const firstOf = new Int32Array(frame.count)
   const bent: (Branch | undefined)[] = new Array<Branch | undefined>(count).fill(undefined)
   let hasUneven = false
+  let hasLoose = false
   let e = 0
   for (const loop of loopOrder) {
     const first = e
@@ -91,6 +94,7 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
           rotates[e] = 1
           share[e] = i / pieces
           if (i > 0 && loose) uneven[e] = 1
+          hasLoose ||= loose
         }
         continue
       }
@@ -120,6 +124,7 @@ export function chainOf(frame: Frame, loopOrder: readonly number[]): Chain {
     bent,
     uneven,
     hasUneven,
+    hasLoose,
     rotates,
     share,
     firstOf,

@@ -3,7 +3,7 @@ import { boundsOf } from '../geometry/loop.ts'
 import { nearbyOrder } from '../geometry/order.ts'
 import { roundingOf } from '../geometry/rounding.ts'
 import { chainOf, type Chain } from './chain.ts'
-import { marchOf, type March } from './march.ts'
+import { marchOf, type March, type Window } from './march.ts'
 import { offerCornerFolds } from './corner-fold.ts'
 import { First } from './first.ts'
 import { frameOf, type Frame } from '../contours/frame.ts'
@@ -75,15 +75,31 @@ function firstHappening(chain: Chain, { length, offset, rate }: Stretch, near: n
 
 /** Only pairs whose boxes overlap at the same moment are looked at, and only up to the first happening so far. */
 function offerMeetings(march: March, near: number, first: First): void {
-  const span = Math.min(first.until, march.length)
   const boxes = new Float64Array(march.chain.count * BOX_STRIDE)
-  fillMotionBoxes(march, span, near, boxes)
-  visitMeetingPairs(
-    boxTree(boxes),
-    () => (span > 0 ? first.until / span : 1),
-    (e, f) => offerMeeting(march, e, f, near, first),
-  )
+  for (const window of windowsOf(march, Math.min(first.until, march.length))) {
+    const { from, to } = window
+    if (from > first.until) return
+    fillMotionBoxes(march, window, near, boxes)
+    visitMeetingPairs(
+      boxTree(boxes),
+      () => (to > from ? (first.until - from) / (to - from) : 1),
+      (e, f) => offerMeeting({ ...march, window }, e, f, near, first),
+    )
+  }
 }
+
+/**
+ * The whole span at once; where points of blended arcs slide along them, piece by piece, as such a point has one box
+ * for all the places where it goes. A corner slides with the square root of the time left before its curves part, so
+ * that windows which shrink toward the end see it slide evenly.
+ */
+function windowsOf({ chain }: March, end: number): readonly Window[] {
+  const count = chain.hasLoose ? LOOSE_WINDOWS : 1
+  const at = (k: number) => (k === count ? end : end * (1 - (1 - k / count) ** 2))
+  return Array.from({ length: count }, (_, k) => ({ from: at(k), to: at(k + 1) }))
+}
+
+const LOOSE_WINDOWS = 16
 
 function* stretchesOf(frame: Frame): Generator<Stretch> {
   const { body, table } = frame

@@ -8,7 +8,7 @@ export interface Gap {
   readonly stray: (from: number, to: number) => number
 }
 
-/** Looks at the zeros of a gap in turn, until `take` accepts one. */
+/** Looks at the zeros of a gap in turn, within the march's window, until `take` accepts one. */
 export function everyZero(
   march: March,
   gap: (t: number) => number,
@@ -16,8 +16,8 @@ export function everyZero(
   first: First,
   take: (t: number) => boolean,
 ): void {
-  let start = 0
-  const end = Math.min(first.until, march.length)
+  let start = march.window.from
+  const end = Math.min(first.until, march.window.to)
   while (start < end) {
     const from = start
     const t = firstZero(
@@ -26,7 +26,7 @@ export function everyZero(
       end - from,
     )
     if (t === null || take(from + t)) return
-    start = from + t + end * PAST_CROSSING
+    start = from + t + march.length * PAST_CROSSING
   }
 }
 

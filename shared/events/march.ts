@@ -29,6 +29,13 @@ export interface March {
   readonly sweep: Float64Array
   /** The last answers about uneven points, which are asked for again and again at the same moment. */
   readonly memo: Memo
+  /** The stretch of it that is being searched. */
+  readonly window: Window
+}
+
+export interface Window {
+  readonly from: number
+  readonly to: number
 }
 
 interface Memo {
@@ -58,7 +65,8 @@ export function marchOf(chain: Chain, offset: EdgeEnds, rate: EdgeEnds, length: 
   const places = makePlaces(frame.count)
   place(frame, offset, places)
   const memo = emptyMemo(chain.hasUneven ? count : 0)
-  const march = { memo, chain, length, offset, rate, x, y, vx, vy, radius, radiusRate, sweep }
+  const window = { from: 0, to: length }
+  const march = { memo, window, chain, length, offset, rate, x, y, vx, vy, radius, radiusRate, sweep }
   for (let e = 0; e < count; e++) {
     const g = edge[e]!
     const p = frame.previous[g]!

@@ -1,28 +1,38 @@
 import { arcBounds } from '../geometry/segment.ts'
 import { BOX_STRIDE } from '../geometry/boxes.ts'
 import { PieceKind, centreOf, drawnStart } from './chain.ts'
-import { bentRange, headingSpread, looseRadii, looseSpread, type March } from './march.ts'
+import {
+  bentRange,
+  headingSpread,
+  looseRadii,
+  looseSpread,
+  pointX,
+  pointY,
+  sweepOf,
+  type March,
+  type Window,
+} from './march.ts'
 
 /**
- * A moving box round every piece from t = 0 to `span`, widened by `pad`. Even motion keeps between the boxes
+ * A moving box round every piece over a window of the march, widened by `pad`. Even motion keeps between the boxes
  * of both ends, of a line that turns as well; where a point moves unevenly, one box of everywhere that it goes stands for both.
  */
-export function fillMotionBoxes(march: March, span: number, pad: number, out: Float64Array): void {
+export function fillMotionBoxes(march: March, window: Window, pad: number, out: Float64Array): void {
   const { chain, x, y, vx, vy } = march
   const { count, kind, next, uneven } = chain
   for (let e = 0; e < count; e++) {
     const f = next[e]!
     const at = e * BOX_STRIDE
     if (kind[e] === PieceKind.arc) {
-      fillArc(march, e, span, out, at)
+      fillArc(march, e, window, out, at)
     } else if (uneven[e] || uneven[f]) {
       empty(out, at)
-      cover(march, e, span, out, at)
-      cover(march, f, span, out, at)
+      cover(march, e, window, out, at)
+      cover(march, f, window, out, at)
       out.copyWithin(at + 4, at, at + 4)
     } else {
       for (let end = 0; end < 2; end++) {
-        const t = end * span
+        const t = end === 0 ? window.from : window.to
         const ax = x[e]! + t * vx[e]!
         const ay = y[e]! + t * vy[e]!
         const bx = x[f]! + t * vx[f]!
@@ -62,9 +72,9 @@ function include(
 }
 
 /** Adds everywhere that point e goes. */
-function cover(march: March, e: number, span: number, out: Float64Array, at: number): void {
+function cover(march: March, e: number, { from, to }: Window, out: Float64Array, at: number): void {
   if (!march.chain.uneven[e]) {
-    for (const t of [0, span]) {
+    for (const t of [from, to]) {
       const x = march.x[e]! + t * march.vx[e]!
       const y = march.y[e]! + t * march.vy[e]!
       include(out, at, x, y, x, y)
@@ -72,8 +82,8 @@ function cover(march: March, e: number, span: number, out: Float64Array, at: num
     return
   }
   const branch = march.chain.bent[e]
-  if (!branch) return coverLoose(march, e, span, out, at)
-  const { radii, headings } = bentRange(march, e, branch, 0, span)
+  if (!branch) return coverLoose(march, e, { from, to }, out, at)
+  const { radii, headings } = bentRange(march, e, branch, from, to)
   for (const radius of radii) {
     const box = arcBounds(branch.centre, radius, headings[0], headings[1] - headings[0])
     include(out, at, box.minX, box.minY, box.maxX, box.maxY)
@@ -81,33 +91,40 @@ function cover(march: March, e: number, span: number, out: Float64Array, at: num
 }
 
 /** A point between chords of an arc with a bent end. */
-function coverLoose(march: March, e: number, span: number, out: Float64Array, at: number): void {
+function coverLoose(march: March, e: number, { from, to }: Window, out: Float64Array, at: number): void {
   const centre = centreOf(march.chain, e)
-  const spread = Math.min(Math.PI, looseSpread(march, e, 0, span))
-  const heading = Math.atan2(march.y[e]! - centre.y, march.x[e]! - centre.x)
-  for (const radius of looseRadii(march, e, 0, span)) {
+  const spread = Math.min(Math.PI, looseSpread(march, e, from, to))
+  const heading = Math.atan2(pointY(march, e, from) - centre.y, pointX(march, e, from) - centre.x)
+  for (const radius of looseRadii(march, e, from, to)) {
     const box = arcBounds(centre, radius, heading - spread, 2 * spread)
     include(out, at, box.minX, box.minY, box.maxX, box.maxY)
   }
 }
 
 /** An arc between smooth ends keeps its headings; a bent end may widen them, by no more than it turns. */
-function fillArc(march: March, e: number, span: number, out: Float64Array, at: number): void {
+function fillArc(march: March, e: number, window: Window, out: Float64Array, at: number): void {
   const { chain } = march
   const f = chain.next[e]!
   const centre = centreOf(chain, e)
   const bent = chain.bent[e] ?? chain.bent[f]
-  let from = bent ? Math.atan2(march.y[e]! - centre.y, march.x[e]! - centre.x) : drawnStart(chain, e)
-  let sweep = march.sweep[e]!
+  let from = bent
+    ? Math.atan2(pointY(march, e, window.from) - centre.y, pointX(march, e, window.from) - centre.x)
+    : drawnStart(chain, e)
+  let sweep = bent ? sweepOf(march, e, window.from) : march.sweep[e]!
   if (bent) {
     const way = Math.sign(sweep)
-    const before = headingSpread(march, e, e, 0, span)
-    const after = headingSpread(march, e, f, 0, span)
+    const before = headingSpread(march, e, e, window.from, window.to)
+    const after = headingSpread(march, e, f, window.from, window.to)
     from -= way * before
     sweep += way * (before + after)
   }
   for (let end = 0; end < 2; end++) {
-    const box = arcBounds(centre, march.radius[e]! + end * span * march.radiusRate[e]!, from, sweep)
+    const box = arcBounds(
+      centre,
+      march.radius[e]! + (end === 0 ? window.from : window.to) * march.radiusRate[e]!,
+      from,
+      sweep,
+    )
     empty(out, at + 4 * end)
     include(out, at + 4 * end, box.minX, box.minY, box.maxX, box.maxY)
   }
