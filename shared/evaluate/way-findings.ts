@@ -5,6 +5,7 @@ import {
   cornerWithoutWay,
   detailFinerThanJet,
   holeTooSmallForTilt,
+  kerfCloses,
   looseBeforeLastPass,
   noRoomToPierce,
   seamBends,
@@ -17,12 +18,14 @@ import { LeanRefusal, type PassProblem, type Passes } from '../passes/types.ts'
 import { degrees } from '../units/angle.ts'
 import type { CornerRef, EdgeRef } from '../walls/types.ts'
 import type { PieceWayOut } from '../way-out/types.ts'
-import type { JetWay } from './jet-way.ts'
+import { kerfClosesAt, type JetWay } from './jet-way.ts'
 import type { ReadRequest } from './read.ts'
 
 /** Findings about the jet's way and the way out, in the caller's numbering. */
 export function wayFindings(read: ReadRequest, { cut, ways }: JetWay): Finding[] {
   const findings: Finding[] = []
+  const closes = kerfClosesAt(read)
+  if (closes !== null) findings.push(kerfCloses(closes, read.body.thickness))
   if (cut) {
     const { passes, interference, axes } = cut
     findings.push(...passFindings(read, passes))

@@ -5,6 +5,18 @@ import type { Finding } from './schema.ts'
 
 /** Findings about the way of the jet. mm; the caller's numbering. */
 
+/** The taper closes the cut before the jet is through. `at`: mm of its path; `path`: mm through the plate. */
+export function kerfCloses(at: number, path: number): Finding {
+  return {
+    code: 'kerf-closes',
+    severity: 'stop',
+    value: at,
+    limit: path,
+    message: `With this taper the kerf has closed after ${formatNumber(at)} mm; the jet’s way through the plate is ${formatNumber(path)} mm.`,
+    cure: { message: 'Measure kerf and taper on a coupon of this thickness, or cut more slowly.' },
+  }
+}
+
 /** Why no way round a corner works. */
 export type CornerHindrance = 'over-limit' | 'edge-too-short' | 'no-jet'
 

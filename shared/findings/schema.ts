@@ -25,6 +25,7 @@ export const findingCodes = [
   'profile-crosses-itself',
   'loop-outside-part',
   // the way of the jet
+  'kerf-closes',
   'corner-without-way-round',
   'corner-choice-refused',
   'no-room-to-pierce',

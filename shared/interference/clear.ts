@@ -23,8 +23,8 @@ import {
 const SAME = 1e-9
 
 export interface Scene {
-  /** Looks that the searches of one evaluation may still take together. */
-  readonly budget: { left: number }
+  /** Looks that the searches of one evaluation may still take together, and each by itself. */
+  readonly budget: { left: number; readonly each: number }
   readonly cone: JetCone
   readonly path: JetPath
   readonly band: WallBand

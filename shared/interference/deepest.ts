@@ -25,9 +25,6 @@ export interface Deepest {
 /** Nothing deeper than the floor; or the search gave up, when it cannot be said. */
 export type Search = Deepest | 'none' | 'undecided'
 
-/** Looks after which one search gives up: several times what a touch at an angle takes. */
-const MOST_LOOKS = 600
-
 /** Golden section: the share of a bracket that stays. */
 const GOLDEN = (Math.sqrt(5) - 1) / 2
 
@@ -191,7 +188,7 @@ function turningBite(scene: Scene, i: number, f: number, round: RoundMove | null
   }
   const pieces = [0, 1]
   for (let looks = 0; pieces.length > 0; looks++) {
-    if (looks > MOST_LOOKS || scene.budget.left-- <= 0) {
+    if (looks > scene.budget.each || scene.budget.left-- <= 0) {
       if (best.bite <= floor) return 'undecided'
       break
     }
@@ -275,7 +272,7 @@ function bentBite(scene: Scene, i: number, f: number, round: RoundMove | null, f
     const u1 = pieces.pop()!
     const u0 = pieces.pop()!
     if (bound <= Math.max(floor, best.bite + BITE_ACCURACY)) continue
-    if ((looks += 2) > MOST_LOOKS || (scene.budget.left -= 2) <= 0) {
+    if ((looks += 2) > scene.budget.each || (scene.budget.left -= 2) <= 0) {
       if (best.bite <= floor) return 'undecided'
       break
     }

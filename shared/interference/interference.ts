@@ -18,6 +18,13 @@ export interface InterferenceOptions {
   readonly head?: HeadShape | undefined
   /** Look only at pairs in which one of these edges cuts or is cut (numbered through all loops). */
   readonly only?: ReadonlySet<number> | undefined
+  /**
+   * The passes are those of `passesOf`, which tells of bent seams and steps itself and keeps to smooth walls: there the
+   * two walls are not looked at against each other's jets.
+   */
+  readonly seamsTold?: boolean | undefined
+  /** Looks that all searches together may take; more settle more places, and take longer. */
+  readonly looks?: number | undefined
   /** Most bites that are told in full. */
   readonly most?: number | undefined
 }
@@ -27,6 +34,9 @@ export interface InterferenceOptions {
  * person who types never waits for a hopeless place.
  */
 const LOOKS_IN_ALL = 8_000
+
+/** One search may take the share of one in so many. */
+const SEARCHES = 12
 
 /** Bites told in full where nothing else is asked: more than a person reads. */
 const MOST_BITES = 100
@@ -47,11 +57,12 @@ export function interferencesOf(
   const cone = jetCone(jet.kerf, jet.taper)
   const owners = movesByEdge(path, frame.count)
   const tally = new Tally(frame.count)
-  const budget = { left: LOOKS_IN_ALL }
+  const looks = options.looks ?? LOOKS_IN_ALL
+  const budget = { left: looks, each: looks / SEARCHES }
   for (const [top, bottom] of bandsOf(body)) {
     const scene = { cone, path, band: wallBand(frame, top, bottom), budget }
     if (options.only) lookAtSome(scene, owners, options.only, tally)
-    else lookAtAll(scene, owners, tally)
+    else lookAtAll(scene, owners, tally, options.seamsTold ?? false)
   }
   const bites = [...tally.worst.values()].sort((a, b) => b.bite - a.bite || a.edge - b.edge || a.hit - b.hit)
   return {
@@ -107,7 +118,7 @@ class Tally {
 }
 
 /** Every edge against itself and its neighbours, which it always touches, then the pairs that a tree of boxes leaves. */
-function lookAtAll(scene: Scene, owners: MovesByEdge, tally: Tally): void {
+function lookAtAll(scene: Scene, owners: MovesByEdge, tally: Tally, seamsTold: boolean): void {
   const { cone, path, band } = scene
   const { frame } = band
   const { previous, next } = frame
@@ -123,7 +134,7 @@ function lookAtAll(scene: Scene, owners: MovesByEdge, tally: Tally): void {
     for (let k = owners.first[g]!; k < owners.first[g + 1]!; k++) {
       const i = owners.moves[k]!
       const outside = outsideWall(scene, i, g)
-      const onWall = path.move[i] === MoveKind.cut || path.move[i] === MoveKind.lean
+      const onWall = seamsTold && (path.move[i] === MoveKind.cut || path.move[i] === MoveKind.lean)
       // What the jet takes or leaves beside a bent seam or a step is told of that corner, and the walls of a spiral are
       // followed by round jets only nearly: none of it is another wall.
       const bentStart = onWall && (told(scene, g) || spiral[g] === 1 || spiral[before] === 1)

@@ -106,14 +106,14 @@ describe('walls that the jet is meant to touch', () => {
 
 describe('random plates against a dense sampler that shares no formula', () => {
   const seeds = Array.from({ length: 24 }, (_, k) => k + 1)
-  it.each(seeds)('plate %i: every bite told is there, and none is missing', (seed) => {
+  it.each(seeds)('plate %i: every bite told is there, and none is missing', { timeout: 60_000 }, (seed) => {
     const body = randomPlate(seed)
     const random = seeded(seed + 1000)
     const jet = { kerf: 0.6 + random(), taper: (1.5 * random() - 0.5) * DEGREE }
     const { from, to, empty } = soundRange(body)
     if (empty || to - from < 0.1) return
     const passes = alongWalls(body, jet)
-    const result = interferencesOf(body, passes, jet, { most: 10_000 })
+    const result = interferencesOf(body, passes, jet, { most: 10_000, looks: 300_000 })
     // A touch between bent walls may need more looks than a search has; it must stay rare, and is never told as clear.
     expect(result.undecided).toBeLessThanOrEqual(1)
     expect(biteProblems(body, passes.path, jet, result)).toEqual([])
@@ -163,7 +163,7 @@ describe('moves that turn, and jets that stray', () => {
   it('only some edges: the same bites as of all, where one of them is in the pair', () => {
     const body = randomPlate(3)
     const passes = alongWalls(body, plain)
-    const all = interferencesOf(body, passes, plain, { most: 10_000 })
+    const all = interferencesOf(body, passes, plain, { most: 10_000, looks: 300_000 })
     const only = new Set([0, 3])
     const some = interferencesOf(body, passes, plain, { most: 10_000, only })
     expect(some.pairs).toBeGreaterThan(0)

@@ -63,6 +63,7 @@ const gathered: Record<FindingCode, { one: string; say: string; length?: true }>
   'loop-outside-part': { one: 'loops', say: 'lie outside the part' },
   'head-touches-plate': { one: 'places', say: 'bring the head down to the plate', length: true },
   'axis-out-of-travel': { one: 'places', say: 'ask for more travel than an axis has' },
+  'kerf-closes': { one: 'plates', say: 'are thicker than the kerf stays open', length: true },
   'corner-without-way-round': { one: 'corners', say: 'have no way round that works' },
   'corner-choice-refused': { one: 'corners', say: 'refuse the way round that was chosen' },
   'no-room-to-pierce': { one: 'loops', say: 'have no room to pierce and lead in' },
