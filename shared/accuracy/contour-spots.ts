@@ -1,4 +1,5 @@
-import { makePlaces, place, radiusAt, sweepAt, type Frame } from '../contours/frame.ts'
+import { type Frame } from '../contours/frame.ts'
+import { makePlaces, place, radiusAt, sweepAt } from '../contours/places.ts'
 import type { Jet } from '../passes/types.ts'
 import type { EdgeEnds, WallColumns } from '../walls/wall-table.ts'
 import { putSpot, type Spots } from './spots.ts'

@@ -1,7 +1,8 @@
 import { capFactor } from '../geometry/loop.ts'
 import type { Body } from '../walls/types.ts'
 import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
-import { frameOf, makePlaces, place, radiusAt, sweepAt, type Frame, type Places } from './frame.ts'
+import { frameOf, type Frame } from './frame.ts'
+import { makePlaces, place, radiusAt, sweepAt, type Places } from './places.ts'
 import { twiceSpiralCap } from './spiral.ts'
 
 /** Area of the contour as a function of depth, mm², exact on arcs that blend too. Sound depths only (`soundRange`). */

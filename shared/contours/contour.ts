@@ -1,14 +1,6 @@
 import type { Point } from '../geometry/types.ts'
-import {
-  CornerMode,
-  frameOf,
-  makePlaces,
-  place,
-  radiusAt,
-  sweepAt,
-  type Frame,
-  type Places,
-} from './frame.ts'
+import { CornerMode, frameOf, type Frame } from './frame.ts'
+import { makePlaces, place, radiusAt, sweepAt, type Places } from './places.ts'
 import type { Body } from '../walls/types.ts'
 import { spiralArcs } from './spiral.ts'
 import type { Contour, ContourSegment } from './types.ts'

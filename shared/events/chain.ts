@@ -1,5 +1,6 @@
 import type { Branch } from '../contours/branch.ts'
-import { CornerMode, blendsAt, makePlaces, place, radiusAt, sweepAt, type Frame } from '../contours/frame.ts'
+import { CornerMode, type Frame } from '../contours/frame.ts'
+import { blendsAt, makePlaces, place, radiusAt, sweepAt } from '../contours/places.ts'
 import { chordCount } from '../geometry/sample.ts'
 import { startAngle } from '../geometry/segment.ts'
 import { levelsOf } from '../walls/levels.ts'

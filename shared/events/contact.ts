@@ -1,4 +1,4 @@
-import { blendsAt } from '../contours/frame.ts'
+import { blendsAt } from '../contours/places.ts'
 import { PieceKind, centreOf, startsAtCorner, type Chain } from './chain.ts'
 import type { First } from './first.ts'
 import { pointX, pointY, sweepOf, type March } from './march.ts'

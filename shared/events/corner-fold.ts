@@ -1,4 +1,4 @@
-import { radiusAt } from '../contours/frame.ts'
+import { radiusAt } from '../contours/places.ts'
 import { PieceKind, centreOf, startsAtCorner } from './chain.ts'
 import type { First } from './first.ts'
 import { everyZero, type Gap } from './every-zero.ts'

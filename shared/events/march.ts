@@ -6,7 +6,8 @@ import {
   type BranchRange,
   type OffsetSpan,
 } from '../contours/branch.ts'
-import { CornerMode, makePlaces, place, radiusAt, sweepAt } from '../contours/frame.ts'
+import { CornerMode } from '../contours/frame.ts'
+import { makePlaces, place, radiusAt, sweepAt } from '../contours/places.ts'
 import type { Point } from '../geometry/types.ts'
 import type { EdgeEnds } from '../walls/wall-table.ts'
 import { PieceKind, centreOf, cornerAfter, drawnStart, startsAtCorner, type Chain } from './chain.ts'

@@ -1,6 +1,7 @@
 import { PieceKind, centreOf, cornerAfter, startsAtCorner } from './chain.ts'
 import { narrowestRadius, pointStray, pointX, pointY, sweepOf, type March } from './march.ts'
-import { CornerMode, radiusAt } from '../contours/frame.ts'
+import { CornerMode } from '../contours/frame.ts'
+import { radiusAt } from '../contours/places.ts'
 import type { First } from './first.ts'
 import { firstZero } from './first-zero.ts'
 

@@ -1,5 +1,6 @@
 import { branchPoint, branchRange, branchStray, type Branch } from '../contours/branch.ts'
-import { CornerMode, makePlaces, place, type Frame, type Places } from '../contours/frame.ts'
+import { CornerMode, type Frame } from '../contours/frame.ts'
+import { makePlaces, place, type Places } from '../contours/places.ts'
 import { arcBounds } from '../geometry/segment.ts'
 import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 

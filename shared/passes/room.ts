@@ -1,4 +1,5 @@
-import { CornerMode, radiusAt, type Frame } from '../contours/frame.ts'
+import { CornerMode, type Frame } from '../contours/frame.ts'
+import { radiusAt } from '../contours/places.ts'
 import type { Point } from '../geometry/types.ts'
 import { rowOffsets } from '../walls/wall-table.ts'
 import { cornerAt } from './level.ts'

@@ -1,15 +1,7 @@
 import { chordCount } from '../geometry/sample.ts'
 import type { Point } from '../geometry/types.ts'
-import {
-  CornerMode,
-  blendsAt,
-  makePlaces,
-  place,
-  radiusAt,
-  sweepAt,
-  type Frame,
-  type Places,
-} from '../contours/frame.ts'
+import { CornerMode, type Frame } from '../contours/frame.ts'
+import { blendsAt, makePlaces, place, radiusAt, sweepAt, type Places } from '../contours/places.ts'
 import { levelsOf } from '../walls/levels.ts'
 import { fillOffsets, makeEdgeEnds, type EdgeEnds } from '../walls/wall-table.ts'
 

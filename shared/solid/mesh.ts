@@ -1,6 +1,7 @@
 import { triangulate } from '../geometry/triangulate.ts'
 import type { Point } from '../geometry/types.ts'
-import { CornerMode, blendsAt, frameOf, type Frame } from '../contours/frame.ts'
+import { CornerMode, frameOf, type Frame } from '../contours/frame.ts'
+import { blendsAt } from '../contours/places.ts'
 import { spiralPoint } from '../contours/spiral.ts'
 import { chordsPerEdge, meshLevels, type LevelRuns, type MeshLevel } from './mesh-levels.ts'
 import { meshLines } from './mesh-lines.ts'

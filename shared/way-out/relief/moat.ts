@@ -1,4 +1,5 @@
-import { makePlaces, place, radiusAt, sweepAt, type Frame } from '../../contours/frame.ts'
+import { type Frame } from '../../contours/frame.ts'
+import { makePlaces, place, radiusAt, sweepAt } from '../../contours/places.ts'
 import { distanceToSegment, sideOfLoop } from '../../geometry/inside.ts'
 import { boundsOf } from '../../geometry/loop.ts'
 import type { Loop, Point } from '../../geometry/types.ts'
