@@ -2,18 +2,13 @@ import type { SoundRange } from '../events/range.ts'
 import { rangeOfEvent } from '../events/range.ts'
 import { isPlain } from '../events/plain.ts'
 import { strictestLimit, type Limits } from '../findings/place.ts'
-import { plainVolume } from '../solid/plain-volume.ts'
+import { areaRates, plainVolume } from '../solid/plain-volume.ts'
 import { volumeOf } from '../solid/volume.ts'
-import {
-  cornerColumns,
-  cornerRules,
-  slopeDegrees,
-  steepestCorner,
-  type CornerColumns,
-} from './corner-columns.ts'
-import { edgeColumns, steepestEdge, type EdgeColumns } from './edge-columns.ts'
+import { cornerColumns, cornerRules, type CornerColumns } from './corner-columns.ts'
+import { edgeColumns, type EdgeColumns } from './edge-columns.ts'
 import type { ReadRequest } from './read.ts'
 import type { Evaluation, EvaluationRequest } from './schema.ts'
+import { neededTilt } from './steepest.ts'
 
 /** All that an evaluation works out, before anything is put into words or objects. */
 export interface Columns {
@@ -46,22 +41,8 @@ export function columnsOf(read: ReadRequest): Columns {
   }
 }
 
-export function volume({ body, frame, area }: ReadRequest, { lengths }: EdgeColumns): number | null {
-  return isPlain(frame) && body.datum === 'top' ? plainVolume(frame, area, lengths) : volumeOf(body)
-}
-
-/** A corner counts only where it asks for more than every edge. */
-export function neededTilt(
-  read: ReadRequest,
-  { preps }: EdgeColumns,
-  corners: CornerColumns,
-): Evaluation['neededTilt'] {
-  const { numbering } = read
-  const edge = steepestEdge(read, preps)
-  if (edge < 0) return null
-  const most = preps[read.preps.ofEdge[edge]!]!.wholeTilt
-  const corner = steepestCorner(read, corners, most)
-  if (corner < 0) return { tilt: most, at: numbering.edgeAt(edge) }
-  const g = numbering.corner ? numbering.corner[corner]! : corner
-  return { tilt: slopeDegrees(corners.jet[g]!)!, at: numbering.cornerAt(corner) }
+function volume({ body, frame, area }: ReadRequest, { lengths }: EdgeColumns): number | null {
+  return isPlain(frame) && body.datum === 'top'
+    ? plainVolume(frame, area, areaRates(frame, lengths))
+    : volumeOf(body)
 }

@@ -1,7 +1,6 @@
 import { CornerMode, type Frame } from '../contours/frame.ts'
 import { bandsOf, type Band } from '../contours/slides.ts'
 import { FILLET_WORTH_SAYING } from '../findings/corner.ts'
-import { LIMIT_ROUNDING } from '../findings/place.ts'
 import { seamLength } from '../passes/jet-lines.ts'
 import type { CornerKind } from '../seams/types.ts'
 import { degrees, radians } from '../units/angle.ts'
@@ -151,25 +150,4 @@ export function cornerKind(frame: Frame, g: number): CornerKind {
 /** Inside the material, radians. */
 export function interiorAngle({ turnSin, turnCos }: Frame, g: number): number {
   return Math.PI - Math.atan2(turnSin[g]!, turnCos[g]!)
-}
-
-/** The first corner, in the caller's order, that needs more than `least` degrees and than all others; −1 for none. */
-export function steepestCorner(
-  { frame, numbering }: ReadRequest,
-  { jet }: CornerColumns,
-  least: number,
-): number {
-  const squareOf = (tilt: number) => Math.tan(radians(Math.min(tilt + LIMIT_ROUNDING, 90))) ** 2 * (1 - 1e-12)
-  let most = least
-  let square = squareOf(most)
-  let steepest = -1
-  for (let c = 0; c < frame.count; c++) {
-    const g = numbering.corner ? numbering.corner[c]! : c
-    // The tangent only sorts out; the comparison itself is in degrees.
-    if (!(jet[g]! > square)) continue
-    const tilt = slopeDegrees(jet[g]!)!
-    if (!(tilt > most + LIMIT_ROUNDING)) continue
-    ;[most, square, steepest] = [tilt, squareOf(tilt), c]
-  }
-  return steepest
 }

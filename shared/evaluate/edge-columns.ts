@@ -88,14 +88,3 @@ function contourLengths({ body, frame }: ReadRequest, depth: number): Float64Arr
   })
   return lengths
 }
-
-/** The first edge, in the caller's order, of those that need the most. */
-export function steepestEdge({ preps }: ReadRequest, figures: readonly PrepFigures[]): number {
-  let most = -1
-  let steepest = -1
-  for (let e = 0; e < preps.ofEdge.length; e++) {
-    const { wholeTilt } = figures[preps.ofEdge[e]!]!
-    if (wholeTilt > most) [most, steepest] = [wholeTilt, e]
-  }
-  return steepest
-}

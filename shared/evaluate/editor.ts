@@ -1,7 +1,7 @@
 import type { EdgeRef } from '../walls/types.ts'
 import type { FacetSpec, WallSpec } from '../walls/schema.ts'
 import { columnsOf, type Columns } from './columns.ts'
-import { soundFacets } from './preps.ts'
+import { edgeNamed, soundFacets } from './preps.ts'
 import { readRequest } from './read.ts'
 import { PlainEditor } from './plain-editor.ts'
 import type { Evaluation, EvaluationRequest } from './schema.ts'
@@ -28,44 +28,44 @@ class SetupEditor implements Editor {
   evaluation: Evaluation
   /** Null where edits of this set-up are worked out from the start. */
   #plain: PlainEditor | null
-  /** Place in the request's walls by edge through all loops, −1 for edges that no wall is given for. */
-  readonly #wallOf: Int32Array
+  readonly #walls: WallLog
   readonly #loopStart: Int32Array
 
   constructor(request: EvaluationRequest) {
     const columns = columnsOf(readRequest(request))
-    const { loopStart, count } = columns.read.frame
     this.request = request
-    this.#loopStart = loopStart
-    this.#wallOf = new Int32Array(count).fill(-1)
-    request.walls.forEach(({ loop, edge }, i) => (this.#wallOf[loopStart[loop]! + edge] = i))
+    this.#loopStart = columns.read.frame.loopStart
+    this.#walls = new WallLog(request.walls, this.#loopStart)
     this.#plain = PlainEditor.of(columns)
     this.evaluation = this.#answer(columns)
   }
 
   setWall(ref: EdgeRef, facets: readonly FacetSpec[]): Evaluation {
     const wall: WallSpec = { loop: ref.loop, edge: ref.edge, facets: [...facets] }
-    const edge = (this.#loopStart[ref.loop] ?? NaN) + ref.edge
-    const request = this.#withWall(edge, wall)
-    const patched = this.#wallOf[edge] === undefined ? null : this.#patched(edge, wall, request)
-    const columns = patched ?? columnsOf(readRequest(request))
+    const { thickness } = this.request.plate
+    const sound = soundFacets(wall, thickness)
+    const edge = edgeNamed(wall, this.#loopStart)
     // From here nothing fails any more.
+    const walls = this.#walls.set(edge, wall)
+    let made: WallSpec[] | null = null
+    const request = {
+      ...this.#plateAlone(),
+      get walls() {
+        return (made ??= walls())
+      },
+    }
     this.request = request
-    if (this.#wallOf[edge] === -1) this.#wallOf[edge] = request.walls.length - 1
-    if (!patched) this.#plain = PlainEditor.of(columns)
+    let columns = this.#plain && this.#plain.edit(edge, sound, request)
+    if (!columns) {
+      columns = columnsOf(readRequest(request))
+      this.#plain = PlainEditor.of(columns)
+    }
     return (this.evaluation = this.#answer(columns))
   }
 
-  #patched(edge: number, wall: WallSpec, request: EvaluationRequest): Columns | null {
-    return this.#plain && this.#plain.edit(edge, soundFacets(wall, request.plate.thickness), request)
-  }
-
-  #withWall(edge: number, wall: WallSpec): EvaluationRequest {
-    const walls = this.request.walls.slice()
-    const at = this.#wallOf[edge] ?? -1
-    if (at < 0) walls.push(wall)
-    else walls[at] = wall
-    return { ...this.request, walls }
+  #plateAlone(): Omit<EvaluationRequest, 'walls'> {
+    const { plate, loops, datum, jet, head, passes } = this.request
+    return { plate, loops, datum, jet, head, passes }
   }
 
   /** Columns are edited in place: an answer that is read only after a later edit is worked out anew. */
@@ -75,5 +75,32 @@ class SetupEditor implements Editor {
     return evaluationOf(columns, () =>
       this.request === request ? columns : (late ??= columnsOf(readRequest(request))),
     )
+  }
+}
+
+/** The walls of a set-up and what has been set since: a list of them is made only for those who ask for one. */
+class WallLog {
+  readonly #first: readonly WallSpec[]
+  readonly #set: { readonly at: number; readonly wall: WallSpec }[] = []
+  /** Place in the list by edge through all loops, −1 for edges that no wall is given for. */
+  readonly #placeOf: Int32Array
+  #length: number
+
+  constructor(walls: readonly WallSpec[], loopStart: Int32Array) {
+    this.#first = walls
+    this.#length = walls.length
+    this.#placeOf = new Int32Array(loopStart.at(-1)!).fill(-1)
+    walls.forEach(({ loop, edge }, i) => (this.#placeOf[loopStart[loop]! + edge] = i))
+  }
+
+  /** Answers the list as it stands now, for whenever it is wanted. */
+  set(edge: number, wall: WallSpec): () => WallSpec[] {
+    if (this.#placeOf[edge] === -1) this.#placeOf[edge] = this.#length++
+    const count = this.#set.push({ at: this.#placeOf[edge]!, wall })
+    return () => {
+      const walls = [...this.#first]
+      for (let i = 0; i < count; i++) walls[this.#set[i]!.at] = this.#set[i]!.wall
+      return walls
+    }
   }
 }

@@ -5,13 +5,16 @@ import { isPlain } from '../events/plain.ts'
 import { PlainSearch } from '../events/plain-search.ts'
 import { rangeOfEvent } from '../events/range.ts'
 import { strictestLimit, type FacetDegrees } from '../findings/place.ts'
+import { blocksOf } from '../geometry/blocks.ts'
+import { areaRates, plainVolume, refreshAreaRates, type AreaRates } from '../solid/plain-volume.ts'
 import { sameOffsets, tableOf, type WallTable } from '../walls/wall-table.ts'
-import { limitsOf, neededTilt, volume, type Columns } from './columns.ts'
+import { limitsOf, type Columns } from './columns.ts'
 import { cornerRules, fillCorner } from './corner-columns.ts'
 import { prepFigures, soundLengths, type PrepFigures } from './edge-columns.ts'
 import { PrepBook, type Prep } from './preps.ts'
 import { lazyBody, type ReadRequest } from './read.ts'
 import type { EvaluationRequest } from './schema.ts'
+import { needBlocks, neededTilt, refreshCornerNeed, refreshEdgeNeed, type NeedBlocks } from './steepest.ts'
 
 /** Preps that no edge has any more are kept; after so many new ones the set-up is read anew. */
 const MOST_NEW_PREPS = 500
@@ -27,6 +30,9 @@ export class PlainEditor {
   readonly #figures: PrepFigures[]
   readonly #search: PlainSearch
   readonly #most: number
+  /** Summed and searched by blocks, so that an edit costs the blocks that it touches. */
+  readonly #rates: readonly AreaRates[]
+  readonly #needs: NeedBlocks
 
   /** Null where the set-up is not of the kind. */
   static of(columns: Columns): PlainEditor | null {
@@ -35,13 +41,15 @@ export class PlainEditor {
   }
 
   private constructor(columns: Columns) {
-    const { read, edges } = columns
+    const { read, edges, corners } = columns
     this.#columns = columns
     this.#book = new PrepBook(read.body.thickness)
     for (const { facets } of read.preps.list) this.#book.place(facets)
     this.#figures = [...edges.preps]
     this.#search = new PlainSearch(read.frame)
     this.#most = this.#book.list.length + MOST_NEW_PREPS
+    this.#rates = areaRates(read.frame, edges.lengths)
+    this.#needs = needBlocks(read, edges, corners)
   }
 
   /** `edge` in the caller's numbering through all loops. */
@@ -72,20 +80,21 @@ export class PlainEditor {
     const body = lazyBody(frame.outline, table, { thickness: read.body.thickness, datum: read.body.datum })
     const rewalled = frameWithWalls(frame, body, table)
     const edited = { ...read, request, body, frame: rewalled, preps: { ...preps, list } }
-    return (this.#columns = this.#rework(edited, g))
+    return (this.#columns = this.#rework(edited, edge, g))
   }
 
-  /** Everything that the wall of edge g touches, in place; whole only what is summed over all edges. */
-  #rework(edited: ReadRequest, g: number): Columns {
-    const { frame, request, preps } = edited
+  /** Everything that the wall of edge g (the caller's `edge`) touches, in place. */
+  #rework(edited: ReadRequest, edge: number, g: number): Columns {
+    const { frame, request, preps, numbering, area } = edited
     const { edges, corners } = this.#columns
     const bands = rerateBands(frame, bandsOf(this.#columns.read.frame))
     const [previous, next] = [frame.previous[g]!, frame.next[g]!]
     bands.forEach(({ from, to, rate, slides }, i) => {
       for (const corner of [g, next]) slideCorner(frame, corner, rate, slides)
       const [above, below] = [edges.lengths[i]!, edges.lengths[i + 1]!]
-      for (const edge of [previous, g, next]) growEdge(frame, edge, above, slides, to - from, below)
+      for (const own of [previous, g, next]) growEdge(frame, own, above, slides, to - from, below)
     })
+    refreshAreaRates(frame, edges.lengths, [previous, g, next], this.#rates)
     const event = this.#search.edit(frame, g)
     const read = { ...edited, event }
     const limits = limitsOf(request)
@@ -97,13 +106,16 @@ export class PlainEditor {
     const range = rangeOfEvent(read.body, event)
     const lengths = soundLengths(read, range, edges.lengths)
     const edgesNow = { ...lengths, preps: this.#figures }
+    const callers = [g, next].map((corner) => (numbering.corner ? numbering.corner[corner]! : corner))
+    for (const block of blocksOf([edge])) refreshEdgeNeed(read, edgesNow, block, this.#needs)
+    for (const block of blocksOf(callers)) refreshCornerNeed(read, corners, block, this.#needs)
     return {
       read,
       range,
       edges: edgesNow,
       corners,
-      volume: event ? null : volume(read, edgesNow),
-      neededTilt: neededTilt(read, edgesNow, corners),
+      volume: event ? null : plainVolume(frame, area, this.#rates),
+      neededTilt: neededTilt(read, edgesNow, corners, this.#needs),
     }
   }
 }

@@ -26,30 +26,35 @@ const THICKNESS_ROUNDING = 1e-6
 
 /** `loopStart`: first edge of every loop through all loops, then the count. Throws `EvaluationError`. */
 export function readPreps(walls: readonly WallSpec[], loopStart: Int32Array, thickness: number): Preps {
-  const loops = loopStart.length - 1
-  const ofEdge = new Int32Array(loopStart[loops]!).fill(-1)
+  const ofEdge = new Int32Array(loopStart.at(-1)!).fill(-1)
   const book = new PrepBook(thickness)
-  for (const wall of walls) {
-    const { loop, edge } = wall
-    const first = loop < loops ? loopStart[loop]! : 0
-    if (!(loop < loops) || !(edge < loopStart[loop + 1]! - first)) {
-      throw new EvaluationError(
-        'wall-names-no-edge',
-        `A wall is given for edge ${edge} of loop ${loop}, which the profile does not have. Count loops and edges from 0.`,
-        wall,
-      )
-    }
-    if (ofEdge[first + edge] !== -1) {
+  for (let i = 0; i < walls.length; i++) {
+    const wall = walls[i]!
+    const at = edgeNamed(wall, loopStart)
+    if (ofEdge[at] !== -1) {
+      const { loop, edge } = wall
       throw new EvaluationError(
         'wall-named-twice',
         `Edge ${edgeName(wall)} (loop ${loop}, edge ${edge}) is given two walls. Keep one.`,
         wall,
       )
     }
-    ofEdge[first + edge] = book.place(soundFacets(wall, thickness))
+    ofEdge[at] = book.place(soundFacets(wall, thickness))
   }
   for (let e = 0; e < ofEdge.length; e++) if (ofEdge[e] === -1) ofEdge[e] = SQUARE
   return { list: book.list, ofEdge }
+}
+
+/** The edge that a wall is given for, through all loops. Throws `EvaluationError` where the profile has none. */
+export function edgeNamed(wall: WallSpec, loopStart: Int32Array): number {
+  const { loop, edge } = wall
+  const at = loop < loopStart.length - 1 ? loopStart[loop]! + edge : Infinity
+  if (at < (loopStart[loop + 1] ?? 0)) return at
+  throw new EvaluationError(
+    'wall-names-no-edge',
+    `A wall is given for edge ${edge} of loop ${loop}, which the profile does not have. Count loops and edges from 0.`,
+    wall,
+  )
 }
 
 /** The prep of edges that no wall is given for. */

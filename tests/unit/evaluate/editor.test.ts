@@ -77,11 +77,11 @@ test('an answer read only after later edits is still that of its own request', (
 })
 
 test('a wall without a sound meaning is refused and changes nothing', () => {
-  const editor = openEditor(plate([rectangle(100, 60)], tilted([5], 10)))
+  const editor = openEditor(plate([rectangle(100, 60), rectangle(10, 10, 40, 20)], tilted([5], 10)))
   const before = whole(editor.evaluation)
   expect(() => editor.setWall({ loop: 0, edge: 0 }, [{ depth: 9, tilt: 30 }])).toThrow(EvaluationError)
   expect(() => editor.setWall({ loop: 0, edge: 4 }, [{ depth: 10, tilt: 30 }])).toThrow(EvaluationError)
-  expect(() => editor.setWall({ loop: 1, edge: 0 }, [{ depth: 10, tilt: 30 }])).toThrow(EvaluationError)
+  expect(() => editor.setWall({ loop: 2, edge: 0 }, [{ depth: 10, tilt: 30 }])).toThrow(EvaluationError)
   expect(whole(editor.evaluation)).toEqual(before)
   expect(whole(editor.setWall({ loop: 0, edge: 0 }, [{ depth: 10, tilt: 30 }]))).toEqual(
     whole(evaluate(editor.request)),
